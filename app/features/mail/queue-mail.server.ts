@@ -1,3 +1,4 @@
+import { sql } from "drizzle-orm";
 import type { Db, Tx } from "#app/db/client.server.ts";
 import { newId } from "#app/db/new-id.server.ts";
 import { outgoingMail } from "#app/db/schema/index.ts";
@@ -16,7 +17,6 @@ export type QueuedMail = {
 export async function queueMail({ db, now }: { db: Db | Tx; now: Date }, { laboratoryId, to, kind, dedupeKey, message }: QueuedMail): Promise<void> {
   await db
     .insert(outgoingMail)
-    .ignore()
     .values({
       id: newId<"mail">(),
       laboratoryId,
@@ -30,5 +30,6 @@ export async function queueMail({ db, now }: { db: Db | Tx; now: Date }, { labor
       state: "queued",
       nextAttemptAt: now,
       createdAt: now,
-    });
+    })
+    .onDuplicateKeyUpdate({ set: { dedupeKey: sql`${outgoingMail.dedupeKey}` } });
 }

@@ -1,0 +1,53 @@
+import { isRouteErrorResponse, Links, Meta, Outlet, Scripts, ScrollRestoration, data, useRouteLoaderData } from "react-router";
+import { appMiddleware } from "#app/web/app-middleware.server.ts";
+import { takeNotice } from "#app/web/notice.server.ts";
+import { roomOf } from "#app/web/room.server.ts";
+import type { Route } from "./+types/root";
+import "./app.css";
+
+export const middleware: Route.MiddlewareFunction[] = [appMiddleware];
+
+export async function loader({ request }: Route.LoaderArgs) {
+  const { notice, header } = await takeNotice(request);
+  return data({ room: roomOf(request), notice }, header ? { headers: { "Set-Cookie": header } } : {});
+}
+
+export const meta: Route.MetaFunction = () => [{ title: "Isogyre" }];
+
+export const links: Route.LinksFunction = () => [{ rel: "icon", href: "/favicon.svg", type: "image/svg+xml" }];
+
+export function Layout({ children }: { children: React.ReactNode }) {
+  const root = useRouteLoaderData<typeof loader>("root");
+  const room = root?.room ?? "system";
+  return (
+    <html lang="en" data-room={room === "system" ? undefined : room}>
+      <head>
+        <meta charSet="utf-8" />
+        <meta name="viewport" content="width=device-width, initial-scale=1" />
+        <meta name="color-scheme" content={room === "dim" ? "dark" : room === "light" ? "light" : "light dark"} />
+        <Meta />
+        <Links />
+      </head>
+      <body>
+        {children}
+        <ScrollRestoration />
+        <Scripts />
+      </body>
+    </html>
+  );
+}
+
+export default function App() {
+  return <Outlet />;
+}
+
+export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
+  const isPlanned = isRouteErrorResponse(error);
+  const message = isPlanned && typeof error.data === "object" && error.data && "userMessage" in error.data ? String(error.data.userMessage) : null;
+  return (
+    <main>
+      <h1>{isPlanned && error.status === 404 ? "Not found" : "This did not work"}</h1>
+      <p>{message ?? (isPlanned && error.status === 404 ? "There is nothing at this address." : "The fault is ours and has been logged. Nothing was changed. Try again in a minute.")}</p>
+    </main>
+  );
+}
