@@ -1,13 +1,11 @@
 import { and, eq, sql } from "drizzle-orm";
 import { newId } from "#app/db/new-id.server.ts";
-import { clients, invoices, laboratories, payments } from "#app/db/schema/index.ts";
+import { invoices, payments } from "#app/db/schema/index.ts";
 import type { InvoiceId } from "#app/domain/ids.ts";
-import { formatMoney } from "#app/domain/money/format-money.ts";
 import type { CurrencyCode } from "#app/domain/money/money.ts";
-import { paymentReceivedEmail } from "#app/emails/payment-received-email.ts";
 import { recordAudit } from "#app/features/audit/record-audit.server.ts";
 import type { LabScope } from "#app/features/lab-context.ts";
-import { queueMail } from "#app/features/mail/queue-mail.server.ts";
+import { queuePaymentReceipt } from "./queue-payment-receipt.server.ts";
 
 /** What the provider says today about one payment: the truth, whatever order its events came in. */
 export type PaymentTruth = Readonly<{
@@ -25,21 +23,10 @@ export type PaymentTruth = Readonly<{
  */
 export async function syncPayment(scope: LabScope, truth: PaymentTruth): Promise<string> {
   const { db, laboratoryId, now } = scope;
+  // Only this row is locked: joined rows of the laboratory would be locked with it.
   const [invoice] = await db
-    .select({
-      id: invoices.id,
-      number: invoices.number,
-      state: invoices.state,
-      totalMinor: invoices.totalMinor,
-      currency: invoices.currency,
-      payToken: invoices.payToken,
-      clientName: clients.name,
-      clientEmail: clients.email,
-      laboratoryName: laboratories.name,
-    })
+    .select({ id: invoices.id, number: invoices.number, state: invoices.state, totalMinor: invoices.totalMinor, currency: invoices.currency })
     .from(invoices)
-    .innerJoin(clients, and(eq(clients.laboratoryId, invoices.laboratoryId), eq(clients.id, invoices.clientId)))
-    .innerJoin(laboratories, eq(laboratories.id, invoices.laboratoryId))
     .where(and(eq(invoices.laboratoryId, laboratoryId), eq(invoices.id, truth.invoiceId)))
     .for("update");
   if (!invoice) return "no such invoice";
@@ -77,21 +64,7 @@ export async function syncPayment(scope: LabScope, truth: PaymentTruth): Promise
       .set({ state: "paid", paidAt: now })
       .where(and(eq(invoices.laboratoryId, laboratoryId), eq(invoices.id, invoice.id), eq(invoices.state, "open")));
     await recordAudit(scope, { action: "invoice.paid", subject: { kind: "invoice", id: invoice.id }, detail: { reference: truth.paymentReference } });
-    if (invoice.clientEmail) {
-      await queueMail(scope, {
-        laboratoryId,
-        to: { address: invoice.clientEmail, name: invoice.clientName },
-        kind: "paymentReceived",
-        dedupeKey: `payment-received:${invoice.id}`,
-        message: paymentReceivedEmail({
-          laboratoryName: invoice.laboratoryName,
-          recipientName: invoice.clientName,
-          invoiceNumber: invoice.number,
-          total: formatMoney({ amountMinor: invoice.totalMinor, currency: invoice.currency }),
-          url: `${scope.services.publicOrigin}/pay/${invoice.payToken}`,
-        }),
-      });
-    }
+    await queuePaymentReceipt(scope, invoice.id);
   } else if (written > 0 && truth.receivedMinor > 0 && invoice.state !== "open" && received > invoice.totalMinor) {
     await recordAudit(scope, { action: "payment.unexpected", subject: { kind: "invoice", id: invoice.id }, detail: { reference: truth.paymentReference, state: invoice.state } });
   }
