@@ -24,6 +24,6 @@ export function openDb(url: string, { connectionLimit = 10 }: { connectionLimit?
       },
     );
   });
-  const db = drizzle({ client: pool, mode: "default" }) as unknown as Db;
+  const db = drizzle({ client: pool }) as unknown as Db;
   return { db, pool, close: () => pool.end() };
 }

@@ -1,0 +1,1 @@
+export declare function runMigrations(url: string): Promise<void>;
