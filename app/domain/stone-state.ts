@@ -20,8 +20,9 @@ const examinationMoves: Readonly<Record<ExaminationState, readonly ExaminationSt
   returned: ["examining", "cancelled"],
   referred: ["examining", "cancelled"],
   checked: ["authorised", "examining", "cancelled"],
-  authorised: ["issued"],
-  issued: [],
+  authorised: ["issued", "examining"],
+  // Opened again for an amendment: the new report will supersede the old one.
+  issued: ["examining"],
   declined: [],
   cancelled: [],
 };

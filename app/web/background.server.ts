@@ -1,5 +1,7 @@
 import { getRuntime } from "./runtime.server.ts";
 import { log } from "./log.server.ts";
+import { renderQueuedReports } from "#app/features/reports/render-queued-reports.server.ts";
+import { unscopedIssueReadyReports } from "#app/features/reports/unscoped-issue-ready-reports.server.ts";
 import { deliverDueMail } from "#app/features/mail/deliver-due-mail.server.ts";
 
 const intervalMs = 1_000;
@@ -16,6 +18,8 @@ export function startBackgroundWork(): void {
     isRunning = true;
     try {
       const { db, services } = getRuntime();
+      await renderQueuedReports({ db, services, now: new Date() });
+      await unscopedIssueReadyReports({ db, services, now: new Date() });
       await deliverDueMail({ db, services, now: new Date() });
     } catch (error) {
       log.error({ err: error }, "background work failed");
