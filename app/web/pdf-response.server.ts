@@ -1,0 +1,12 @@
+/** A stored PDF, shown or saved under its number, never cached by anybody in between. */
+export function pdfResponse({ pdf, fileName }: { pdf: Buffer; fileName: string }): Response {
+  return new Response(new Uint8Array(pdf), {
+    headers: {
+      "Content-Type": "application/pdf",
+      "Content-Length": String(pdf.byteLength),
+      "Content-Disposition": `inline; filename="${fileName.replace(/[^\w.-]/g, "_")}"`,
+      "Cache-Control": "private, no-store",
+      "X-Content-Type-Options": "nosniff",
+    },
+  });
+}
