@@ -64,7 +64,8 @@ export async function runProduct({ server }) {
     requireNode();
     const standIns = chooseStandIns(process.env);
     await requireFree(["PORT", ...standIns]);
-    if (await installPackages(crew)) say(`Packages installed (${seconds(startedAt)}).`);
+    if (!process.env.DATABASE_URL && !findMariadb().isComplete) await installDebian(crew, { what: "MariaDB", packages: debianPackages });
+    await installPackages(crew);
     fs.mkdirSync(dataFolder, { recursive: true, mode: 0o700 });
     const secrets = machineSecrets(dataFolder);
     // While the database starts. A failure is met below, where its answer is awaited.
@@ -73,7 +74,6 @@ export async function runProduct({ server }) {
 
     let databaseUrl = process.env.DATABASE_URL;
     if (!databaseUrl) {
-      if (!findMariadb().isComplete) await installDebian(crew, { what: "MariaDB", packages: debianPackages });
       const port = portOf("DB_PORT");
       const start = () => startDb({ dir: path.join(dataFolder, "db"), port, password: secrets.database, log: say });
       db = await start().catch((error) => {
@@ -90,7 +90,7 @@ export async function runProduct({ server }) {
 
     const { MAILBOX_URL: mailboxUrl, ...standInSettings } = await standInsReady;
     const env = { ...applicationEnv({ databaseUrl, secrets }), ...standInSettings };
-    if (await buildIfChanged(crew)) say(`Built (${seconds(startedAt)}).`);
+    await buildIfChanged(crew);
     await loadData(crew, env);
     await keepServing({ crew, server, env, isStopping: () => isStopping, onGiveUp: () => void stop(1, "the server does not stay up") });
     sayReady({ env, mailboxUrl, standIns, startedAt });

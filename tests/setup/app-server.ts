@@ -36,18 +36,18 @@ export async function startAppServer({ isDemo = true, env = {} }: { isDemo?: boo
 type Starting = { isDemo: boolean; env: Record<string, string>; started: (() => Promise<void>)[]; close: () => Promise<void> };
 
 async function startAll({ isDemo, env, started, close }: Starting) {
-  const use = <T extends { close: () => Promise<void> }>(service: T): T => {
+  const keep = <T extends { close: () => Promise<void> }>(service: T): T => {
     started.push(service.close);
     return service;
   };
   const port = await freePort();
   const url = `http://127.0.0.1:${port}`;
-  const db = use(await startThrowAwayDb());
+  const db = keep(await startThrowAwayDb());
   const databaseUrl = db.urlOf("isogyre");
   await runMigrations(databaseUrl);
-  const stripe = use(await startFakeStripe({ webhookUrl: `${url}/webhooks/stripe` }));
-  const uploads = use(await startFakeUploadThing());
-  const mailbox = use(await startFakeMailbox());
+  const stripe = keep(await startFakeStripe({ webhookUrl: `${url}/webhooks/stripe` }));
+  const uploads = keep(await startFakeUploadThing());
+  const mailbox = keep(await startFakeMailbox());
 
   const settings: NodeJS.ProcessEnv = {
     ...process.env,
