@@ -16,7 +16,7 @@ export async function buildIfChanged(crew) {
   if (fs.existsSync(stamp) && fs.readFileSync(stamp, "utf8") === hash) return false;
   say("Building …");
   fs.rmSync(stamp, { force: true }); // an interrupted build is not taken for a finished one
-  const options = { cwd: root, env: { ...process.env, NODE_ENV: "production" } };
+  const options = { cwd: root, isQuiet: true, env: { ...process.env, NODE_ENV: "production" } };
   await crew.run(process.execPath, ["node_modules/@react-router/dev/bin.js", "build", "--logLevel", "warn"], options);
   // After it: the build above empties the folder.
   if (fs.existsSync(path.join(root, "vite.workers.config.ts"))) {
