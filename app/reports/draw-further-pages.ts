@@ -13,6 +13,7 @@ export function drawFurtherPages(sheet: Sheet, view: ReportView): void {
   section(sheet, "Treatments: not determinable with the methods used", orElse(treatments.notDeterminable, "None is listed."));
   if (treatments.stated.length > 0) section(sheet, "Treatments: stated by the client, not verified", treatments.stated);
   paragraph(sheet, "The absence of a remark does not mean that a stone is untreated. The statements hold for the stone as it was examined on the dates given; a stone can be treated afterwards.", "faint");
+  sheet.gap(9);
 
   section(sheet, "Evidence for the identity", [view.evidence]);
   if (view.natureEvidence) section(sheet, "Evidence for natural, synthetic or other nature", [view.natureEvidence]);

@@ -31,7 +31,7 @@ export async function renderReport(view: ReportView): Promise<Uint8Array> {
     sheet.page = page;
     sheet.y = 46;
     sheet.rule({ thickness: 0.5 });
-    sheet.line(`${view.laboratory.name} · ${view.number}`, { x: margin, y: 33, size: 7.8, ink: "faint" });
+    sheet.line(`${view.isDraft ? "Draft, not issued · " : ""}${view.laboratory.name} · ${view.number}`, { x: margin, y: 33, size: 7.8, ink: "faint" });
     sheet.line(`Page ${index + 1} of ${pages.length}`, { x: pageWidth - margin, y: 33, size: 7.8, ink: "faint", align: "right" });
   });
   return pdf.save();

@@ -36,7 +36,7 @@ test("fonts are embedded and the file is sound", async () => {
   using report = await onDisk(aReportView());
   const fonts = run("pdffonts", report.file).trim().split("\n").slice(2);
   expect(fonts.length).toBeGreaterThanOrEqual(4);
-  for (const font of fonts) expect(font).toMatch(/\byes yes yes\b/);
+  for (const font of fonts) expect(font).toMatch(/ yes (yes|no) +yes /);
   expect(run("qpdf", "--check", report.file)).toContain("No syntax or stream encoding errors found");
 });
 
@@ -63,7 +63,7 @@ test.each(hostile.map((text, index) => [index, text] as const))("hostile text %s
 
 test("a draft says so on every page", async () => {
   using report = await onDisk(aReportView({ isDraft: true }));
-  for (const page of ["1", "2"]) expect(run("pdftotext", "-f", page, "-l", page, report.file, "-")).toMatch(/Draft|t\s*f\s*a\s*r\s*D/);
+  for (const page of ["1", "2"]) expect(run("pdftotext", "-f", page, "-l", page, report.file, "-")).toContain("Draft, not issued");
 });
 
 test("a valuation has pages of its own with its definition, comparables and certification", async () => {
