@@ -13,8 +13,9 @@ export function massInCt({ massText, massUnit }: TypedMass): number {
 }
 
 /**
- * Whether goods weigh something else than they did. The alarm is at max(3u, 0.01 ct), u being that of one weighing; two
- * grams' digits that are coarser than that widen it to one step of the coarser display.
+ * Whether goods weigh something else than they did. The alarm is at max(3u, 0.01 ct), u being that of one weighing; a
+ * first weighing on a coarser display widens it to one step of that, a second one only where its unit is another: fewer
+ * digits typed on the way out are no reason to look away.
  *
  * Source: the trade's rule "weigh out = weigh in" (workflow 1.3, common practice).
  */
@@ -23,7 +24,7 @@ export function massDifference({ before, after, standardUncertaintyCt }: { befor
   isAlarming: boolean;
 } {
   const differenceCt = massInCt(after) - massInCt(before);
-  const limitCt = Math.max(3 * (standardUncertaintyCt ?? usualUncertaintyCt), smallestAlarmCt, stepCt(before), stepCt(after));
+  const limitCt = Math.max(3 * (standardUncertaintyCt ?? usualUncertaintyCt), smallestAlarmCt, stepCt(before), before.massUnit === after.massUnit ? 0 : stepCt(after));
   return { differenceCt, isAlarming: Math.abs(differenceCt) > limitCt + 1e-9 };
 }
 

@@ -166,14 +166,16 @@ async function readRows(ctx: LabContext, query: StoneQuery, { today, limit }: { 
       .orderBy(direction(key), direction(stones.id))
       .limit(limit),
   );
-  const [only, ...more] = reads as [(typeof reads)[number], ...typeof reads];
-  if (more.length === 0) return only;
-  // Bare columns: the order is that of the union's result, which has no table.
-  const column = sql.identifier(sort === "due" ? "due_on" : "received_at");
-  const [second, ...rest] = more as [(typeof reads)[number], ...typeof reads];
-  return unionAll(only, second, ...rest)
-    .orderBy(isDescending ? sql`${column} desc, id desc` : sql`${column} asc, id asc`)
+  if (reads.length === 1) return reads[0]!;
+  // Joined flat: Drizzle's own union nests, and every level of it reads all rows below once more.
+  const all = sql.join(reads.map((read) => sql`(${read.getSQL()})`), sql` union all `);
+  const bare = Object.fromEntries(Object.entries(fields).map(([name, column]) => [name, sql`${sql.identifier(column.name)}`.mapWith(column)]));
+  const rows = await db
+    .select(bare)
+    .from(sql`(${all}) as page`)
+    .orderBy(direction(sql`${sql.identifier(key.name)}`), direction(sql`id`))
     .limit(limit);
+  return rows as Row[];
 }
 
 function rangesOf(query: StoneQuery, { sort, today }: { sort: StoneSort; today: string }): Range[] {

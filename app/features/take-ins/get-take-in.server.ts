@@ -1,4 +1,4 @@
-import { aliasedTable, and, asc, eq, sql } from "drizzle-orm";
+import { and, asc, eq, sql } from "drizzle-orm";
 import { clients, instruments, invoices, items, stones, takeIns, users, type CustodyPurpose } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
@@ -29,7 +29,6 @@ type CustodyRow = {
 export async function getTakeIn(ctx: LabContext, number: string) {
   requireRole(ctx, "takeIn.read");
   const { db, laboratoryId, roles } = ctx;
-  const holders = aliasedTable(users, "holders");
   const rows = await db
     .select({
       takeIn: {
@@ -61,7 +60,7 @@ export async function getTakeIn(ctx: LabContext, number: string) {
       stone: { code: stones.code, goodsState: stones.goodsState, examinationState: stones.examinationState, place: stones.place },
       receivedBy: users.name,
       balance: instruments.name,
-      holder: holders.name,
+      holder: sql<string | null>`(select h.name from users h where h.id = ${stones.holderId})`,
       consents: sql<string | null>`(select json_arrayagg(c.code) from item_consents c where c.laboratory_id = ${items.laboratoryId} and c.item_id = ${items.id} and c.is_given)`,
       photos: sql<string | null>`(select json_arrayagg(hex(a.id) order by a.created_at, a.id) from attachments a where a.laboratory_id = ${items.laboratoryId} and a.item_id = ${items.id})`,
       custody: sql<string | null>`(select json_arrayagg(json_object('sequence', e.sequence, 'purpose', e.purpose, 'fromPlace', e.from_place, 'toPlace', e.to_place, 'holder', h.name,
@@ -74,7 +73,6 @@ export async function getTakeIn(ctx: LabContext, number: string) {
     .innerJoin(items, and(eq(items.laboratoryId, takeIns.laboratoryId), eq(items.takeInId, takeIns.id)))
     .innerJoin(instruments, and(eq(instruments.laboratoryId, items.laboratoryId), eq(instruments.id, items.balanceId)))
     .innerJoin(stones, and(eq(stones.laboratoryId, items.laboratoryId), eq(stones.itemId, items.id)))
-    .leftJoin(holders, eq(holders.id, stones.holderId))
     .leftJoin(
       invoices,
       and(
