@@ -1,4 +1,5 @@
-import { isRouteErrorResponse, Links, Meta, Outlet, Scripts, ScrollRestoration, data, useRouteLoaderData } from "react-router";
+import { Links, Meta, Outlet, Scripts, ScrollRestoration, data, useRouteLoaderData } from "react-router";
+import { ErrorPage } from "#app/components/layout/error-page.tsx";
 import { appMiddleware } from "#app/web/app-middleware.server.ts";
 import { takeNotice } from "#app/web/notice.server.ts";
 import { roomOf } from "#app/web/room.server.ts";
@@ -42,12 +43,5 @@ export default function App() {
 }
 
 export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
-  const isPlanned = isRouteErrorResponse(error);
-  const message = isPlanned && typeof error.data === "object" && error.data && "userMessage" in error.data ? String(error.data.userMessage) : null;
-  return (
-    <main>
-      <h1>{isPlanned && error.status === 404 ? "Not found" : "This did not work"}</h1>
-      <p>{message ?? (isPlanned && error.status === 404 ? "There is nothing at this address." : "The fault is ours and has been logged. Nothing was changed. Try again in a minute.")}</p>
-    </main>
-  );
+  return <ErrorPage error={error} />;
 }

@@ -5,6 +5,7 @@ import type { AppContext } from "#app/features/app-context.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import { handleStripeEvent } from "#app/features/payments/handle-stripe-event.server.ts";
 import { startCheckout } from "#app/features/payments/start-checkout.server.ts";
+import type { FakeStripe } from "#fakes/stripe/server.ts";
 import { anInvoice, invoiceRow } from "../../setup/an-invoice.ts";
 import { aLab, testNow } from "../../setup/factories.ts";
 import { stripeServices } from "../../setup/stripe-services.ts";
@@ -19,6 +20,10 @@ const scenarios = [
 
 function appOf(lab: LabContext): AppContext {
   return { db: lab.db, now: testNow, services: lab.services, clientAddress: "127.0.0.1" };
+}
+
+function eventsOf(fake: FakeStripe) {
+  return Object.values(fake.data.events).map(({ event }) => event);
 }
 
 function signed(lab: LabContext, event: unknown) {
@@ -47,7 +52,7 @@ test.each(scenarios.flatMap((scenario) => [11, 12, 13, 14, 15].map((seed) => ({ 
     const intent = Object.keys(stripe.fake.data.intents)[0]!;
     for (const amount of refundsMinor) await stripe.services.stripe.refunds.create({ payment_intent: intent, amount });
 
-    const events = Object.values(stripe.fake.data.events);
+    const events = eventsOf(stripe.fake);
     expect(events.length).toBeGreaterThanOrEqual(1 + refundsMinor.length);
     const deliveries = shuffled(Array.from({ length: 50 }, (_, i) => events[i % events.length]!), seed);
     for (let at = 0; at < deliveries.length; at += 8) {
@@ -71,7 +76,7 @@ test("an event that is already remembered has no second effect", async () => {
   const invoice = await anInvoice(lab);
   await startCheckout(app, { payToken: invoice.payToken });
   await stripe.fake.pay(Object.keys(stripe.fake.data.sessions)[0]!);
-  const event = Object.values(stripe.fake.data.events).find(({ type }) => type === "checkout.session.completed")!;
+  const event = eventsOf(stripe.fake).find(({ type }) => type === "checkout.session.completed")!;
   expect(await handleStripeEvent(app, signed(lab, event))).toBe("done");
   expect(await handleStripeEvent(app, signed(lab, event))).toBe("repeat");
 });
@@ -83,7 +88,7 @@ test("a session that runs out unpaid makes room for a new one", async () => {
   const invoice = await anInvoice(lab);
   const first = await startCheckout(app, { payToken: invoice.payToken });
   await stripe.services.stripe.checkout.sessions.expire(Object.keys(stripe.fake.data.sessions)[0]!);
-  const event = Object.values(stripe.fake.data.events).find(({ type }) => type === "checkout.session.expired")!;
+  const event = eventsOf(stripe.fake).find(({ type }) => type === "checkout.session.expired")!;
   await handleStripeEvent(app, signed(lab, event));
   expect((await invoiceRow(lab, invoice.id)).checkoutSessionId).toBeNull();
   expect(await startCheckout(app, { payToken: invoice.payToken })).not.toBe(first);

@@ -1,0 +1,3 @@
+import type { Crew } from "./crew.mjs";
+
+export declare function buildIfChanged(crew: Crew): Promise<boolean>;
