@@ -21,6 +21,11 @@ export default [
   // the same functions over HTTP
 
   // a client's own pages
+  layout("routes/my/layout.tsx", [
+    route("my", "routes/my/home.tsx"),
+    route("my/reports/:code/:fileName", "routes/my/report-pdf.ts"),
+  ]),
+
   // a laboratory's pages
   ...prefix("lab/:labSlug", [
     layout("routes/lab/layout.tsx", [
@@ -50,6 +55,11 @@ export default [
       route("invoices/:number", "routes/lab/invoices/detail.tsx"),
 
       // reports
+      route("reports", "routes/lab/reports/list.tsx"),
+      route("reports.csv", "routes/lab/reports/list-csv.ts"),
+      route("reports/:number", "routes/lab/reports/detail.tsx"),
+      route("reports/:number/file.pdf", "routes/lab/reports/pdf.ts"),
+
       // settings
     ]),
   ]),

@@ -4,6 +4,7 @@ import fs from "node:fs";
 import path from "node:path";
 import { fileURLToPath } from "node:url";
 import { createCrew } from "./crew.mjs";
+import { say } from "./say.mjs";
 
 const root = fileURLToPath(new URL("..", import.meta.url));
 const sources = ["app", "public", "fixtures", "package.json", "package-lock.json", "tsconfig.json", "react-router.config.ts", "vite.config.ts", "vite.workers.config.ts"];
@@ -13,8 +14,9 @@ const stamp = path.join(root, "build", ".sources-hash");
 export async function buildIfChanged(crew) {
   const hash = sourcesHash();
   if (fs.existsSync(stamp) && fs.readFileSync(stamp, "utf8") === hash) return false;
+  say("Building …");
   fs.rmSync(stamp, { force: true }); // an interrupted build is not taken for a finished one
-  const options = { cwd: root, env: { ...process.env, NODE_ENV: "production" } };
+  const options = { cwd: root, isQuiet: true, env: { ...process.env, NODE_ENV: "production" } };
   await crew.run(process.execPath, ["node_modules/@react-router/dev/bin.js", "build", "--logLevel", "warn"], options);
   // After it: the build above empties the folder.
   if (fs.existsSync(path.join(root, "vite.workers.config.ts"))) {
@@ -42,7 +44,7 @@ if (process.argv[1] === fileURLToPath(import.meta.url)) {
   const crew = createCrew();
   for (const signal of ["SIGINT", "SIGTERM", "SIGHUP"]) process.once(signal, () => void crew.endAll().then(() => process.exit(1)));
   try {
-    console.log((await buildIfChanged(crew)) ? "built" : "nothing changed since the last build");
+    if (!(await buildIfChanged(crew))) say("Nothing has changed since the last build.");
   } catch (error) {
     console.error(error.message);
     process.exit(1);

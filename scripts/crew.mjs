@@ -23,12 +23,19 @@ export function createCrew() {
     start,
     isBusy: () => running.size > 0,
 
-    /** @throws when it ends otherwise than with 0 */
-    run(command, args, options = {}) {
+    /** @param isQuiet its output is shown only when it fails. @throws when it ends otherwise than with 0 */
+    run(command, args, { isQuiet = false, ...options } = {}) {
       return new Promise((resolve, reject) => {
-        const child = start(command, args, { stdio: ["ignore", "inherit", "inherit"], ...options });
+        const output = isQuiet ? "pipe" : "inherit";
+        const child = start(command, args, { stdio: ["ignore", output, output], ...options });
+        const said = [];
+        for (const stream of [child.stdout, child.stderr]) stream?.on("data", (chunk) => said.push(chunk));
         child.once("error", reject);
-        child.once("exit", (code, signal) => (code === 0 ? resolve() : reject(new Stop(`${path.basename(command)} ${args.join(" ")} ended with ${code ?? signal}; what it said stands above.`))));
+        child.once("close", (code, signal) => {
+          if (code === 0) return resolve();
+          process.stderr.write(Buffer.concat(said));
+          reject(new Stop(`${path.basename(command)} ${args.join(" ")} ended with ${code ?? signal}; what it said stands above.`));
+        });
       });
     },
 

@@ -12,7 +12,8 @@ import { portOf, portTaken, requireFree } from "./ports.mjs";
 import { say, seconds, Stop } from "./say.mjs";
 
 const root = fileURLToPath(new URL("..", import.meta.url));
-const dataFolder = ".data";
+/** What belongs to this installation alone: database, secrets, stand-ins, log. */
+const dataFolder = process.env.ISOGYRE_DATA ?? ".data";
 const logFile = path.join(dataFolder, "server.log");
 const mostLogBytes = 20 * 1024 ** 2;
 const exitCodes = { SIGINT: 130, SIGTERM: 143, SIGHUP: 129 };
@@ -63,13 +64,16 @@ export async function runProduct({ server }) {
     requireNode();
     const standIns = chooseStandIns(process.env);
     await requireFree(["PORT", ...standIns]);
-    if (await installPackages(crew)) say(`Packages installed (${seconds(startedAt)}).`);
+    if (!process.env.DATABASE_URL && !findMariadb().isComplete) await installDebian(crew, { what: "MariaDB", packages: debianPackages });
+    await installPackages(crew);
     fs.mkdirSync(dataFolder, { recursive: true, mode: 0o700 });
     const secrets = machineSecrets(dataFolder);
+    // While the database starts. A failure is met below, where its answer is awaited.
+    const standInsReady = standIns.length > 0 ? startStandIns({ crew, standIns, secrets, onEnd: (how) => void stop(1, `the stand-ins ended (${how})`) }) : Promise.resolve({});
+    standInsReady.catch(() => {});
 
     let databaseUrl = process.env.DATABASE_URL;
     if (!databaseUrl) {
-      if (!findMariadb().isComplete) await installDebian(crew, { what: "MariaDB", packages: debianPackages });
       const port = portOf("DB_PORT");
       const start = () => startDb({ dir: path.join(dataFolder, "db"), port, password: secrets.database, log: say });
       db = await start().catch((error) => {
@@ -84,9 +88,9 @@ export async function runProduct({ server }) {
       throw new Stop(`The database could not be prepared: ${error.cause?.message ?? error.message}`);
     });
 
-    const env = applicationEnv({ databaseUrl, secrets });
-    const mailboxUrl = standIns.length > 0 ? await startStandIns({ crew, standIns, env, onEnd: (how) => void stop(1, `the stand-ins ended (${how})`) }) : undefined;
-    if (await buildIfChanged(crew)) say(`Built (${seconds(startedAt)}).`);
+    const { MAILBOX_URL: mailboxUrl, ...standInSettings } = await standInsReady;
+    const env = { ...applicationEnv({ databaseUrl, secrets }), ...standInSettings };
+    await buildIfChanged(crew);
     await loadData(crew, env);
     await keepServing({ crew, server, env, isStopping: () => isStopping, onGiveUp: () => void stop(1, "the server does not stay up") });
     sayReady({ env, mailboxUrl, standIns, startedAt });
@@ -121,7 +125,6 @@ function applicationEnv({ databaseUrl, secrets }) {
     UPLOADTHING_IS_DEV: "false",
     UPLOADTHING_LOG_LEVEL: "Warning",
     ISOGYRE_DEMO: "1",
-    STRIPE_WEBHOOK_SECRET: secrets.webhook,
     ...process.env,
     PORT: String(port),
     NODE_ENV: "production",
@@ -129,19 +132,23 @@ function applicationEnv({ databaseUrl, secrets }) {
   };
 }
 
-/** All in one process. Their settings are added to `env`; where they name a page to read mail on, that is returned. */
-function startStandIns({ crew, standIns, env, onEnd }) {
+/** All in one process. @returns the settings that make the application talk to them */
+function startStandIns({ crew, standIns, secrets, onEnd }) {
   const ports = Object.fromEntries(standIns.map((name) => [name, String(portOf(name))]));
   const without = Object.fromEntries(["STRIPE_PORT", "UPLOADTHING_PORT", "MAIL_PORT", "MAILBOX_PORT"].map((name) => [name, ""]));
   return new Promise((resolve, reject) => {
     const child = crew.start(process.execPath, ["--import", "tsx", "local-fakes/run.ts"], {
       stdio: ["ignore", "inherit", "inherit", "ipc"],
-      env: { ...env, ...without, ...ports, FAKE_FOLDER: path.join(dataFolder, "fakes"), STRIPE_WEBHOOK_URL: `http://127.0.0.1:${env.PORT}/webhooks/stripe` },
+      env: {
+        ...process.env,
+        ...without,
+        ...ports,
+        FAKE_FOLDER: path.join(dataFolder, "fakes"),
+        STRIPE_WEBHOOK_SECRET: secrets.webhook,
+        STRIPE_WEBHOOK_URL: `http://127.0.0.1:${portOf("PORT")}/webhooks/stripe`,
+      },
     });
-    child.once("message", ({ settings: { MAILBOX_URL, ...settings } }) => {
-      Object.assign(env, settings);
-      resolve(MAILBOX_URL);
-    });
+    child.once("message", ({ settings }) => resolve(settings));
     child.once("exit", (code, signal) => {
       reject(new Error(`the local stand-ins ended with ${code ?? signal}`));
       onEnd(code ?? signal);

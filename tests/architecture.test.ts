@@ -13,7 +13,7 @@ const mayImport: Record<string, readonly string[]> = {
   features: ["gemmology", "domain", "db", "reports", "emails", "integrations"],
   web: ["gemmology", "domain", "db", "features", "integrations", "reports", "env.server.ts"],
   components: ["gemmology", "domain", "features"],
-  routes: ["gemmology", "domain", "features", "web", "components"],
+  routes: ["gemmology", "domain", "features", "web", "components", "root.tsx"],
 };
 
 /** The pure core knows no I/O, clock, randomness, React or zod. */

@@ -1,7 +1,7 @@
 import { and, desc, eq } from "drizzle-orm";
 import { inTransaction } from "#app/db/in-transaction.server.ts";
 import { newId } from "#app/db/new-id.server.ts";
-import { reports, stones, valuations } from "#app/db/schema/index.ts";
+import { registerPhotos, reports, stones, valuations } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import { recordAudit } from "#app/features/audit/record-audit.server.ts";
@@ -10,6 +10,7 @@ import { nextInSeries } from "#app/features/laboratories/next-in-series.server.t
 import { requireRole } from "#app/features/require-role.ts";
 import { moveExamination } from "#app/features/stones/move-examination.server.ts";
 import { buildReportView } from "./build-report-view.server.ts";
+import { freezePhoto } from "./freeze-photo.server.ts";
 import { newRegisterCode } from "./new-register-code.server.ts";
 
 /**
@@ -37,6 +38,8 @@ export async function authoriseReport(ctx: LabContext, { stoneCode }: { stoneCod
     if (valuation?.state !== "signed") throw new AppError("conflict", "The client ordered a valuation, and it is not signed yet.");
   }
 
+  // Fetched before the transaction: a slow file store must not hold its locks.
+  const photo = await freezePhoto(ctx, { stoneId: stone.id });
   const reportOn = calendarDateIn(ctx.now, laboratory.timeZone);
   const kind = stone.isValuationOrdered ? "identificationWithValuation" : "identification";
   return inTransaction(ctx.db, async (tx) => {
@@ -73,6 +76,7 @@ export async function authoriseReport(ctx: LabContext, { stoneCode }: { stoneCod
       supersedesId: previous?.state === "issued" ? previous.id : null,
       createdAt: ctx.now,
     });
+    if (photo && snapshot.photograph) await tx.insert(registerPhotos).values({ laboratoryId, reportId: id, jpeg: photo });
     await recordAudit(scope, { action: "report.authorised", subject: { kind: "report", id }, detail: { number, version } });
     return number;
   });

@@ -1,6 +1,6 @@
 import { and, eq, sql } from "drizzle-orm";
 import { inTransaction } from "#app/db/in-transaction.server.ts";
-import { clients, invoices, itemConsents, registerEntries, reportFiles, reports, stones } from "#app/db/schema/index.ts";
+import { clients, invoices, itemConsents, registerEntries, registerPhotos, reportFiles, reports, stones } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import type { ReportId } from "#app/domain/ids.ts";
 import { reportIssuedEmail } from "#app/emails/report-issued-email.ts";
@@ -26,6 +26,7 @@ export async function issueReport(scope: LabScope, { reportId }: { reportId: Rep
       sha256: reportFiles.sha256,
       invoiceState: sql<string | null>`(select ${invoices.state} from ${invoices} where ${invoices.laboratoryId} = ${reports.laboratoryId}
         and ${invoices.takeInId} = ${stones.takeInId} and ${invoices.state} <> 'void' order by ${invoices.id} desc limit 1)`,
+      hasPhoto: sql<number>`exists (select 1 from ${registerPhotos} where ${registerPhotos.laboratoryId} = ${reports.laboratoryId} and ${registerPhotos.reportId} = ${reports.id})`,
       isPublic: sql<number | null>`(select ${itemConsents.isGiven} from ${itemConsents} where ${itemConsents.laboratoryId} = ${reports.laboratoryId}
         and ${itemConsents.itemId} = ${stones.itemId} and ${itemConsents.code} = 'publicRegister')`,
     })
@@ -59,7 +60,7 @@ export async function issueReport(scope: LabScope, { reportId }: { reportId: Rep
       laboratoryId,
       reportId,
       state: "issued",
-      view: registerViewOf(view, { isPublic: Boolean(found.isPublic) }),
+      view: registerViewOf(view, { isPublic: Boolean(found.isPublic), reportOn: report.reportOn!, hasPhoto: Boolean(found.hasPhoto) }),
       pdfSha256: sha256,
       issuedAt: scope.now,
     });
