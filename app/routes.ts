@@ -16,6 +16,7 @@ export default [
   // payment and other services' calls
   route("pay/:payToken", "routes/pay/invoice.tsx"),
   route("webhooks/stripe", "routes/webhooks/stripe.ts"),
+  route("api/uploadthing", "routes/uploadthing.ts"),
 
   // the same functions over HTTP
 
@@ -30,6 +31,23 @@ export default [
     layout("routes/lab/layout.tsx", [
       index("routes/lab/home.ts"),
       // logbook and take-in
+      route("stones", "routes/lab/stones/list.tsx"),
+      route("stones.csv", "routes/lab/stones/list-csv.ts"),
+      route("take-ins/new", "routes/lab/take-ins/new.tsx"),
+      route("take-ins/:number", "routes/lab/take-ins/detail.tsx"),
+      route("take-ins/:number/receipt", "routes/lab/take-ins/receipt.tsx"),
+      route("take-ins/:number/labels", "routes/lab/take-ins/labels.tsx"),
+      route("photos/:photoRef", "routes/lab/photos/photo.ts", { id: "lab-photo" }),
+      route("photos/:photoRef/thumbnail", "routes/lab/photos/photo.ts", { id: "lab-photo-thumbnail" }),
+      route("clients", "routes/lab/clients/list.tsx"),
+      route("clients.csv", "routes/lab/clients/list-csv.ts"),
+      route("clients/find", "routes/lab/clients/find.ts"),
+      route("clients/new", "routes/lab/clients/new.tsx"),
+      route("clients/:clientRef", "routes/lab/clients/detail.tsx"),
+      route("instruments", "routes/lab/instruments/list.tsx"),
+      route("instruments/new", "routes/lab/instruments/new.tsx"),
+      route("instruments/:instrumentRef", "routes/lab/instruments/detail.tsx"),
+
       // bench
       // invoices
       route("invoices", "routes/lab/invoices/list.tsx"),

@@ -1,0 +1,60 @@
+import { getFormProps, useForm } from "@conform-to/react";
+import { parseWithZod } from "@conform-to/zod/v4";
+import { Form, redirect } from "react-router";
+import { InstrumentFields, type InstrumentFieldset } from "#app/components/instruments/instrument-fields.tsx";
+import { PageHeader } from "#app/components/layout/page-header.tsx";
+import { Button, LinkButton } from "#app/components/ui/button.tsx";
+import { Card, CardBody } from "#app/components/ui/card.tsx";
+import { FormAlert } from "#app/components/ui/form-alert.tsx";
+import { shortRef } from "#app/domain/short-ref.ts";
+import { registerInstrumentForm } from "#app/features/instruments/instrument-forms.server.ts";
+import { registerInstrument } from "#app/features/instruments/register-instrument.server.ts";
+import { newRequestId } from "#app/features/new-request-id.server.ts";
+import { requireRole } from "#app/features/require-role.ts";
+import { labContext } from "#app/web/contexts.server.ts";
+import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
+import { noticeHeader } from "#app/web/notice.server.ts";
+import { orResponse } from "#app/web/or-response.server.ts";
+import type { Route } from "./+types/new";
+
+export async function loader({ context }: Route.LoaderArgs) {
+  await orResponse((async () => requireRole(context.get(labContext), "instruments.manage"))());
+  return { requestId: newRequestId() };
+}
+
+export async function action({ request, context, params }: Route.ActionArgs) {
+  const submission = parseWithZod(await request.formData(), { schema: registerInstrumentForm });
+  if (submission.status !== "success") return formInvalid(submission);
+  try {
+    const id = await registerInstrument(context.get(labContext), submission.value);
+    return redirect(`/lab/${params.labSlug}/instruments/${shortRef(id)}`, { headers: { "Set-Cookie": await noticeHeader(`${submission.value.name} is registered. Record its first check.`) } });
+  } catch (error) {
+    return formRefused(submission, error);
+  }
+}
+
+export const meta: Route.MetaFunction = () => [{ title: "New instrument · Isogyre" }];
+
+export default function NewInstrumentRoute({ loaderData, actionData, params }: Route.ComponentProps) {
+  const [form, fields] = useForm<Record<keyof InstrumentFieldset | "requestId", string>>({ lastResult: actionData?.result, defaultValue: { requestId: loaderData.requestId } });
+  return (
+    <>
+      <PageHeader title="Register an instrument" />
+      <Form method="post" {...getFormProps(form)} className="max-w-3xl">
+        <FormAlert errors={form.errors} id={form.errorId} />
+        <input type="hidden" name={fields.requestId.name} defaultValue={fields.requestId.initialValue} key={fields.requestId.key} />
+        <Card>
+          <CardBody className="pt-4">
+            <InstrumentFields fields={fields as unknown as InstrumentFieldset} />
+            <div className="mt-5 flex gap-2">
+              <Button>Register it</Button>
+              <LinkButton look="plain" to={`/lab/${params.labSlug}/instruments`}>
+                Back to the list
+              </LinkButton>
+            </div>
+          </CardBody>
+        </Card>
+      </Form>
+    </>
+  );
+}
