@@ -5,7 +5,7 @@ import { PageHeader } from "#app/components/layout/page-header.tsx";
 import { inputLook } from "#app/components/ui/field-frame.tsx";
 import { formatStoneCode } from "#app/domain/take-in.ts";
 import { getTakeIn } from "#app/features/take-ins/get-take-in.server.ts";
-import { qrPath } from "#app/features/stones/qr-path.server.ts";
+import { stoneLabels } from "#app/features/take-ins/stone-labels.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
 import type { Route } from "./+types/labels";
@@ -19,9 +19,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const start = Math.min(perSheet, Math.max(1, Math.trunc(Number(url.searchParams.get("start") ?? 1)) || 1));
   return {
     start,
-    labels: takeIn.items.flatMap((item) =>
-      item.stones.map(({ code }) => ({ code, ...qrPath(`${ctx.services.publicOrigin}/lab/${ctx.laboratory.slug}/stones/${code}`) })),
-    ),
+    labels: stoneLabels(ctx, takeIn),
     number: takeIn.number,
   };
 }
@@ -62,8 +60,8 @@ export default function LabelsRoute({ loaderData, params }: Route.ComponentProps
                 <li key={index} aria-hidden="true" />
               ) : (
                 <li key={index} className="flex items-center gap-[3mm] overflow-hidden p-[4mm]">
-                  <svg viewBox={`-4 -4 ${label.sizeModules + 8} ${label.sizeModules + 8}`} role="img" aria-label={`QR code of ${label.code}`} style={{ width: "29mm", height: "29mm", flexShrink: 0, background: "#fff" }} shapeRendering="crispEdges">
-                    <path d={label.path} fill="#000" />
+                  <svg viewBox={`-4 -4 ${label.qr.size + 8} ${label.qr.size + 8}`} role="img" aria-label={`QR code of ${label.code}`} style={{ width: "29mm", height: "29mm", flexShrink: 0, background: "#fff" }} shapeRendering="crispEdges">
+                    <path d={label.qr.path} fill="#000" />
                   </svg>
                   <div className="min-w-0">
                     <p className="font-mono text-[11pt] leading-tight font-medium break-words">{formatStoneCode(label.code)}</p>
