@@ -46,6 +46,6 @@ export function composeEmail({ subject, from, heading, greetingName, paragraphs,
 
 /** A line break in a subject would start a header of the sender's choice. */
 function oneLine(text: string): string {
-  // eslint-disable-next-line no-control-regex
+   
   return text.replace(/[\u0000-\u001f\u007f\u2028\u2029]+/g, " ").trim();
 }

@@ -86,6 +86,6 @@ export function widthOf(fonts: Fonts, text: string, font: FontName, size: number
 
 /** Composed characters, no controls, no invisible direction marks: what is printed is what is read. */
 function plain(text: string): string {
-  // eslint-disable-next-line no-control-regex
+   
   return text.normalize("NFC").replace(/[\t\n\r]+/g, " ").replace(/[\u0000-\u001f\u007f-\u009f\u200b-\u200f\u202a-\u202e\u2060-\u2069\ufe00-\ufe0f\ufeff]/g, "");
 }

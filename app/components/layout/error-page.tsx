@@ -1,4 +1,5 @@
-import { isRouteErrorResponse, Link } from "react-router";
+import { isRouteErrorResponse } from "react-router";
+import { LinkButton } from "#app/components/ui/button.tsx";
 import { Mark } from "./mark.tsx";
 
 type ErrorWords = { title: string; message: string };
@@ -16,15 +17,19 @@ export function errorWords(error: unknown): ErrorWords {
 export function ErrorPage({ error, homeTo = "/" }: { error: unknown; homeTo?: string }) {
   const { title, message } = errorWords(error);
   return (
-    <div className="mx-auto max-w-xl px-6 py-16">
-      <Mark size={40} />
-      <h1 className="mt-4 text-[27px]">{title}</h1>
-      <p className="mt-2 text-ink-2">{message}</p>
-      <p className="mt-4">
-        <Link to={homeTo} className="text-tint">
-          Start again
-        </Link>
-      </p>
-    </div>
+    <>
+      <div className="ramp h-1" />
+      <main className="mx-auto max-w-xl px-6 py-16">
+        <Mark size={44} />
+        {isRouteErrorResponse(error) ? <p className="mt-5 font-mono text-sm text-ink-3">{error.status}</p> : null}
+        <h1 className="mt-1">{title}</h1>
+        <p className="mt-4 text-lg text-ink-2">{message}</p>
+        <p className="mt-6">
+          <LinkButton to={homeTo} reloadDocument>
+            Start again
+          </LinkButton>
+        </p>
+      </main>
+    </>
   );
 }

@@ -1,9 +1,25 @@
-/** A step that should not happen by a slip: opened first, then confirmed. Works without script. */
-export function Confirm({ summary, children, tone = "danger" }: { summary: string; children: React.ReactNode; tone?: "danger" | "quiet" }) {
+import type { ReactNode } from "react";
+import { buttonLook } from "./button.tsx";
+import { Disclosure } from "./disclosure.tsx";
+import { Icon } from "./icon.tsx";
+
+/** A step that should not happen by a slip: opened first, then confirmed by the button among `children`. Works without script. */
+export function Confirm({ summary, children, tone = "danger" }: { summary: string; children: ReactNode; tone?: "danger" | "quiet" }) {
+  const isDanger = tone === "danger";
   return (
-    <details className="group">
-      <summary className={`inline-flex min-h-9 list-none items-center rounded-md border bg-sheet px-3.5 py-1.5 font-semibold select-none ${tone === "danger" ? "border-red text-red" : "border-rule-2 text-tint"}`}>{summary}</summary>
-      <div className="mt-2 rounded-md border border-rule-2 bg-sheet p-3.5">{children}</div>
-    </details>
+    <Disclosure
+      className="group no-print"
+      summaryClassName={buttonLook({ look: isDanger ? "quietDanger" : "quiet" })}
+      summary={
+        <>
+          {summary}
+          <span className="transition-transform group-open:rotate-180">
+            <Icon name="down" sizePx={14} />
+          </span>
+        </>
+      }
+    >
+      <div className={`mt-2 rounded-md border bg-sheet p-3.5 ${isDanger ? "border-red" : "border-rule-2"}`}>{children}</div>
+    </Disclosure>
   );
 }

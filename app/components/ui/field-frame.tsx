@@ -1,19 +1,22 @@
+import type { ReactNode } from "react";
+import { Icon } from "./icon.tsx";
+
 export type FieldFrameProps = {
   id: string;
   label: string;
   /** Beside the label: "ct", "°C", "n". */
   unit?: string;
-  hint?: React.ReactNode;
+  hint?: ReactNode;
   errors?: readonly string[];
   isRequired?: boolean;
   className?: string;
 };
 
 /** Label, hint and messages of one field, tied together for those who hear the page. */
-export function FieldFrame({ id, label, unit, hint, errors, isRequired, className = "", children }: FieldFrameProps & { children: React.ReactNode }) {
+export function FieldFrame({ id, label, unit, hint, errors, isRequired, className = "", children }: FieldFrameProps & { children: ReactNode }) {
   return (
     <div className={`min-w-0 ${className}`}>
-      <label htmlFor={id} className="mb-1 block text-[12.5px] font-semibold text-ink-2">
+      <label htmlFor={id} className="mb-1 block text-xs font-semibold text-ink-2">
         {label}
         {unit ? <span className="font-normal text-ink-3">, {unit}</span> : null}
         {isRequired ? null : <span className="font-normal text-ink-3"> (optional)</span>}
@@ -24,18 +27,24 @@ export function FieldFrame({ id, label, unit, hint, errors, isRequired, classNam
   );
 }
 
+/** What is wrong, a sentence a line, then the hint. */
 export function FieldNotes({ id, hint, errors }: Pick<FieldFrameProps, "id" | "hint" | "errors">) {
   return (
     <>
       {errors?.length ? (
-        <ul id={`${id}-error`} className="mt-1 list-none text-[13px] text-red">
+        <ul id={`${id}-error`} className="mt-1 grid gap-0.5 text-xs font-medium text-red">
           {errors.map((error) => (
-            <li key={error}>{error}</li>
+            <li key={error} className="flex gap-1.5">
+              <span className="pt-px">
+                <Icon name="alert" sizePx={14} />
+              </span>
+              <span>{error}</span>
+            </li>
           ))}
         </ul>
       ) : null}
       {hint ? (
-        <p id={`${id}-hint`} className="mt-1 text-[12.5px] text-ink-3">
+        <p id={`${id}-hint`} className="mt-1 text-xs text-ink-3">
           {hint}
         </p>
       ) : null}
@@ -49,5 +58,6 @@ export function describedBy({ id, hint, errors }: Pick<FieldFrameProps, "id" | "
   return { "aria-invalid": errors?.length ? true : undefined, "aria-describedby": ids || undefined } as const;
 }
 
-export const inputLook =
-  "block w-full min-h-9 rounded-md border border-rule-2 bg-sheet px-2.5 py-1.5 text-ink placeholder:text-ink-3 aria-invalid:border-red focus-visible:outline-offset-0 disabled:opacity-60";
+export const inputLook = "control block w-full px-3 py-1.5 disabled:opacity-60";
+/** The same at the bench: 44 px and large figures, read at arm's length in the dark. */
+export const benchInputLook = "control block w-full min-h-11 px-3 py-1.5 text-lg font-medium disabled:opacity-60";

@@ -1,10 +1,9 @@
-/** A key of the keyboard. */
-export function Key({ children, isInverse = false }: { children: React.ReactNode; isInverse?: boolean }) {
+import type { ReactNode } from "react";
+
+/** A key of the keyboard, in the colour of what it stands in. Not shown where there is no keyboard to press it on. */
+export function Key({ children }: { children: ReactNode }) {
   return (
-    <kbd
-      className={`rounded border border-b-2 px-1.5 font-mono text-[11px] leading-4 font-normal ${isInverse ? "border-current bg-transparent opacity-80" : "border-rule-2 bg-sheet text-ink-2"}`}
-      aria-hidden="true"
-    >
+    <kbd className="hidden rounded-sm border border-b-2 border-current px-1.5 text-xs leading-4 font-normal opacity-80 md:pointer-fine:inline-block" aria-hidden="true">
       {children}
     </kbd>
   );
