@@ -42,10 +42,10 @@ export function HandOverForm({ itemNumber, requestId, massUnit, lastResult, good
       <SelectField key={fields.purpose.key} {...fieldProps(fields.purpose)} label="What happens" className="sm:col-span-2" options={purposesFrom[goodsState].map((value) => ({ value, label: custodyPurposeNames[value] }))} />
       <TextField key={fields.toPlace.key} {...fieldProps(fields.toPlace)} label="Where to" hint="Bench 2, Safe 1, the laboratory's name." className="sm:col-span-2" autoComplete="off" maxLength={120} />
       <SelectField key={fields.holder.key} {...fieldProps(fields.holder)} label="Who has it" isRequired={false} hint="At the bench; else yourself." className="sm:col-span-2" emptyLabel="" options={holders.map(({ ref, name }) => ({ value: ref, label: name }))} />
-      <TextField key={fields.massText.key} {...fieldProps(fields.massText)} label="Weight" isRequired={false} className="sm:col-span-1" inputMode="decimal" isMono autoComplete="off" maxLength={24} />
+      <TextField key={fields.massText.key} {...fieldProps(fields.massText)} label="Weight" isRequired={false} className="sm:col-span-2" inputMode="decimal" isMono autoComplete="off" maxLength={24} />
       <SelectField key={fields.massUnit.key} {...fieldProps(fields.massUnit)} label="Unit" className="sm:col-span-1" options={units} />
       <TextField key={fields.seal.key} {...fieldProps(fields.seal)} label="Seal" isRequired={false} className="sm:col-span-1" isMono autoComplete="off" maxLength={60} />
-      <TextField key={fields.remark.key} {...fieldProps(fields.remark)} label="Remark" isRequired={false} className="sm:col-span-3" autoComplete="off" maxLength={400} />
+      <TextField key={fields.remark.key} {...fieldProps(fields.remark)} label="Remark" isRequired={false} className="sm:col-span-2" autoComplete="off" maxLength={400} />
       <div className="sm:col-span-6">
         <Button look="quiet">Record the hand-over</Button>
       </div>

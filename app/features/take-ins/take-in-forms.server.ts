@@ -8,7 +8,7 @@ import type { CurrencyCode } from "#app/domain/money/money.ts";
 import { idFromShortRef } from "#app/domain/short-ref.ts";
 import { capacities, mountStates, returnMethods } from "#app/domain/take-in.ts";
 import { typedDecimal } from "#app/domain/typed-decimal.ts";
-import { emailField } from "#app/features/clients/client-forms.server.ts";
+import { addressLinesField, emailField } from "#app/features/clients/client-forms.server.ts";
 import { isTicked, optionalLines, optionalText, requestIdField, requiredText } from "#app/features/form-fields.server.ts";
 import { largestDeclared, massProblem, mostItems, stoneCountProblem } from "./take-in-limits.ts";
 import { neutralWordsMessage } from "./neutral-words.ts";
@@ -81,7 +81,7 @@ export function takeInForm({ currency }: { currency: CurrencyCode }) {
       client: z.string().max(40).optional(),
       newClientEmail: emailField,
       newClientPhone: optionalText(40),
-      newClientAddress: optionalLines(600),
+      newClientAddress: addressLinesField,
       handedOverBy: requiredText(120, "Write who hands the goods over."),
       capacity: z.enum(capacities, { error: "Choose in what capacity they act." }),
       returnMethod: z.enum(returnMethods, { error: "Choose how the goods go back." }),
@@ -106,14 +106,13 @@ export function takeInForm({ currency }: { currency: CurrencyCode }) {
     });
 }
 
-function chooseClient(typed: { client: string | undefined; clientName: string; newClientEmail: string; newClientPhone: string; newClientAddress: string }) {
+function chooseClient(typed: { client: string | undefined; clientName: string; newClientEmail: string; newClientPhone: string; newClientAddress: string[] }) {
   if (typed.client && typed.client !== "new") {
     const id = idFromShortRef<"client">(typed.client) as ClientId | undefined;
     return id ? { id } : "Choose the client from the list.";
   }
   if (typed.clientName === "") return "Write the client's name.";
   if (typed.client !== "new") return "Choose the client from the list below, or say that it is a new one.";
-  const addressLines = typed.newClientAddress.split("\n").map((line) => line.trim().slice(0, 120)).filter(Boolean).slice(0, 6);
-  return { new: { name: typed.clientName, contactName: "", email: typed.newClientEmail, phone: typed.newClientPhone, addressLines, note: "" } };
+  return { new: { name: typed.clientName, contactName: "", email: typed.newClientEmail, phone: typed.newClientPhone, addressLines: typed.newClientAddress, note: "" } };
 }
 

@@ -5,7 +5,7 @@ import { PageHeader } from "#app/components/layout/page-header.tsx";
 import { inputLook } from "#app/components/ui/field-frame.tsx";
 import { formatStoneCode } from "#app/domain/take-in.ts";
 import { getTakeIn } from "#app/features/take-ins/get-take-in.server.ts";
-import { qrPath } from "#app/features/stones/qr-path.server.ts";
+import { stoneLabels } from "#app/features/take-ins/stone-labels.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
 import type { Route } from "./+types/labels";
@@ -19,9 +19,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const start = Math.min(perSheet, Math.max(1, Math.trunc(Number(url.searchParams.get("start") ?? 1)) || 1));
   return {
     start,
-    labels: takeIn.items.flatMap((item) =>
-      item.stones.map(({ code }) => ({ code, ...qrPath(`${ctx.services.publicOrigin}/lab/${ctx.laboratory.slug}/stones/${code}`) })),
-    ),
+    labels: stoneLabels(ctx, takeIn),
     number: takeIn.number,
   };
 }
@@ -35,6 +33,7 @@ export default function LabelsRoute({ loaderData, params }: Route.ComponentProps
   const sheets = Array.from({ length: Math.ceil(cells.length / perSheet) }, (_, at) => cells.slice(at * perSheet, (at + 1) * perSheet));
   return (
     <>
+      <div className="no-print">
       <PageHeader
         title="Labels"
         note="70 × 37 mm, 24 on an A4 sheet. Print at 100 %, without margins."
@@ -45,6 +44,7 @@ export default function LabelsRoute({ loaderData, params }: Route.ComponentProps
           </>
         }
       />
+      </div>
       <Form className="no-print mb-4 flex items-end gap-2.5">
         <div className="w-40">
           <label htmlFor="start" className="mb-1 block text-[12.5px] font-semibold text-ink-2">
@@ -56,22 +56,23 @@ export default function LabelsRoute({ loaderData, params }: Route.ComponentProps
       </Form>
       <div className="overflow-x-auto print:overflow-visible">
         {sheets.map((sheet, at) => (
-          <ul key={at} aria-label={`Sheet ${at + 1}`} className="mb-6 grid w-[210mm] break-after-page content-start border border-rule bg-sheet print:absolute print:left-0 print:mb-0 print:border-0" style={{ gridTemplateColumns: `repeat(${columns}, 70mm)`, gridAutoRows: "37mm", ...(at > 0 && { top: `${at * 297}mm` }) }}>
-            {sheet.map((label, index) =>
-              label === null ? (
-                <li key={index} aria-hidden="true" />
-              ) : (
+          <ul key={at} aria-label={`Sheet ${at + 1}`} className="mb-6 grid w-[210mm] break-after-page content-start border border-rule bg-sheet print:absolute print:left-0 print:mb-0 print:border-0" style={{ gridTemplateColumns: `repeat(${columns}, 70mm)`, gridAutoRows: "37mm", top: `${at * 297}mm` }}>
+            {sheet.map((label, index) => {
+              if (label === null) return <li key={index} aria-hidden="true" />;
+              const [itemPart, stonePart] = formatStoneCode(label.code).split(" · ");
+              return (
                 <li key={index} className="flex items-center gap-[3mm] overflow-hidden p-[4mm]">
-                  <svg viewBox={`-4 -4 ${label.sizeModules + 8} ${label.sizeModules + 8}`} role="img" aria-label={`QR code of ${label.code}`} style={{ width: "29mm", height: "29mm", flexShrink: 0, background: "#fff" }} shapeRendering="crispEdges">
-                    <path d={label.path} fill="#000" />
+                  <svg viewBox={`-4 -4 ${label.qr.size + 8} ${label.qr.size + 8}`} role="img" aria-label={`QR code of ${label.code}`} style={{ width: "29mm", height: "29mm", flexShrink: 0, background: "#fff" }} shapeRendering="crispEdges">
+                    <path d={label.qr.path} fill="#000" />
                   </svg>
                   <div className="min-w-0">
-                    <p className="font-mono text-[11pt] leading-tight font-medium break-words">{formatStoneCode(label.code)}</p>
-                    <p className="mt-[1mm] font-mono text-[8pt] text-ink-2">{number}</p>
+                    <p className="font-mono text-[10pt] leading-tight font-medium whitespace-nowrap">{itemPart}</p>
+                    <p className="font-mono text-[12pt] leading-tight font-medium">· {stonePart}</p>
+                    <p className="mt-[1.5mm] font-mono text-[7.5pt] whitespace-nowrap text-ink-2">{number}</p>
                   </div>
                 </li>
-              ),
-            )}
+              );
+            })}
           </ul>
         ))}
       </div>

@@ -26,6 +26,7 @@ export default function ReceiptRoute({ loaderData, params }: Route.ComponentProp
   const { takeIn, letterhead, timeZone, taxLabel } = loaderData;
   return (
     <>
+      <div className="no-print">
       <PageHeader
         title="Receipt"
         actions={
@@ -35,6 +36,7 @@ export default function ReceiptRoute({ loaderData, params }: Route.ComponentProp
           </>
         }
       />
+      </div>
       <article className="mx-auto max-w-[52rem] rounded-[10px] border border-rule bg-sheet p-8 print:max-w-none print:border-0 print:p-0">
         <div className="ramp mb-5 h-1" aria-hidden="true" />
         <header className="flex flex-wrap justify-between gap-6">
