@@ -49,6 +49,10 @@ export default [
       route("instruments/:instrumentRef", "routes/lab/instruments/detail.tsx"),
 
       // bench
+      route("stones/:stoneCode/valuation", "routes/lab/stones/valuation.tsx"),
+      route("stones/:stoneCode/report", "routes/lab/stones/report.tsx"),
+      route("stones/:stoneCode/report/draft.pdf", "routes/lab/stones/report-draft.ts"),
+
       // invoices
       route("invoices", "routes/lab/invoices/list.tsx"),
       route("invoices.csv", "routes/lab/invoices/list-csv.ts"),

@@ -1,5 +1,7 @@
 import { boolean, foreignKey, index, int, mysqlTable, primaryKey, uniqueIndex, varchar, bigint } from "drizzle-orm/mysql-core";
 import { bytes, exactText, id, instant, jsonOf } from "../columns.ts";
+import type { ClientId } from "#app/domain/ids.ts";
+import type { NewLaboratory } from "#app/domain/new-laboratory.ts";
 import type { Role } from "#app/domain/roles.ts";
 import { laboratories } from "./laboratory.ts";
 
@@ -61,7 +63,16 @@ export const sessions = mysqlTable(
 );
 
 export type EmailTokenPurpose = "confirmEmail" | "resetPassword" | "inviteStaff" | "inviteClient";
-export type EmailTokenPayload = { laboratoryId?: string; roles?: Role[]; clientId?: string; name?: string };
+export type EmailTokenPayload = {
+  name?: string;
+  roles?: Role[];
+  title?: string;
+  clientId?: ClientId;
+  /** Of the form that asked: sent twice is asked once. */
+  requestId?: string;
+  /** An account that begins to exist when the address is confirmed. */
+  signUp?: { passwordHash: string; laboratory: NewLaboratory };
+};
 
 /** A link sent by e-mail. Only the SHA-256 of its token is kept; it works once and for a while. */
 export const emailTokens = mysqlTable(

@@ -11,3 +11,8 @@ export const reportAction = z.discriminatedUnion("intent", [
   z.object({ intent: z.literal("withdraw"), reason: z.enum(withdrawalReasons, { error: "Choose the class of reason." }), note: words("The note", 1000) }),
   z.object({ intent: z.literal("amend"), note: words("What has to change", 500) }),
 ]);
+
+/** The signatory says that they read what they sign. */
+export const authoriseForm = z.object({
+  isRead: z.literal("on", { error: "Read the draft, and say so here, before you authorise it." }),
+});

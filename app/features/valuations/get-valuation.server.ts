@@ -47,11 +47,12 @@ export async function getValuation(ctx: LabContext, { stoneCode }: { stoneCode: 
         .orderBy(asc(valuationComparables.position))
     : [];
   const isSigned = row.valuation?.state === "signed";
+  const { id: _id, laboratoryId: _lab, stoneId: _stone, conclusionId: _conclusion, writtenBy: _writer, signedBy: _signer, ...shown } = row.valuation ?? ({} as NonNullable<typeof row.valuation>);
   return {
     stone: row.stone,
     conclusion: row.conclusion,
-    valuation: row.valuation,
-    comparables,
+    valuation: row.valuation ? shown : null,
+    comparables: comparables.map(({ laboratoryId: _l, valuationId: _v, ...comparable }) => comparable),
     signedByName: row.signedByName,
     afterSigning: isSigned
       ? {
