@@ -19,6 +19,8 @@ export default [
   route("api/uploadthing", "routes/uploadthing.ts"),
 
   // the same functions over HTTP
+  route("api/v1/rank", "routes/api/rank.ts"),
+  route("api/v1/density", "routes/api/density.ts"),
 
   // a client's own pages
   layout("routes/my/layout.tsx", [

@@ -2,7 +2,9 @@ import type { LookalikeRow, NodeRow, Range, SpeciesRow, TabulatedCharacter } fro
 import type { Interval, Lookalike, SpeciesForm, SpeciesNode, SpeciesTable } from "./species-table.ts";
 
 /** Prior weight of a form by its prevalence 1 (collector's rarity) to 5 (everyday); a house rule, common practice. */
-const weightOfPrevalence = [0, 0.015, 0.05, 0.15, 0.4, 1] as const;
+const weightOfPrevalence: readonly number[] = [0, 0.015, 0.05, 0.15, 0.4, 1];
+/** Assembled pieces are recognised by their seam before they are measured, so few of them reach the readings; house value. */
+const compositeFactor = 0.25;
 
 /**
  * Gathers the rows of the species file under their species.
@@ -25,7 +27,7 @@ export function buildSpeciesTable({ version, rows, nodes, lookalikes }: { versio
 }
 
 function nodeOf(node: NodeRow, rows: readonly SpeciesRow[]): SpeciesNode {
-  const weights = rows.map(({ prevalence }) => weightOfPrevalence[prevalence] ?? 0.015);
+  const weights = rows.map(({ prevalence, kind }) => (weightOfPrevalence[prevalence] ?? 0.015) * (kind === "composite" ? compositeFactor : 1));
   const sum = weights.reduce((total, weight) => total + weight, 0);
   return { id: node.id, name: node.name, weight: Math.max(...weights), forms: rows.map((row, index) => formOf(row, weights[index]! / sum)) };
 }
@@ -35,7 +37,7 @@ const interval = (range: Range | null | undefined): Interval | null => (range ? 
 function formOf(row: SpeciesRow, share: number): SpeciesForm {
   const { ri } = row;
   const single = ri?.n;
-  const [low, high] = ri?.alpha && ri.gamma ? [ri.alpha, ri.gamma] : ri?.omega && ri.epsilon ? byIndex(ri.omega, ri.epsilon) : [single, single];
+  const [low, high] = ri?.alpha && ri.gamma ? ([ri.alpha, ri.gamma] as const) : ri?.omega && ri.epsilon ? byIndex(ri.omega, ri.epsilon) : ([single, single] as const);
   const strengths = { none: 0, weak: 1, distinct: 2, strong: 3 } as const;
   return {
     id: row.id,
@@ -63,7 +65,7 @@ function formOf(row: SpeciesRow, share: number): SpeciesForm {
 }
 
 /** ω and ε in order of size; a species whose sign changes keeps the wider sense of both. */
-function byIndex(omega: Range, epsilon: Range): [Range, Range] {
+function byIndex(omega: Range, epsilon: Range): readonly [Range, Range] {
   return omega.typ <= epsilon.typ ? [omega, epsilon] : [epsilon, omega];
 }
 
