@@ -1,4 +1,4 @@
-import { getFormProps, useForm, type FieldMetadata } from "@conform-to/react";
+import { getFormProps, useForm, type FieldMetadata, type SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { Form, redirect } from "react-router";
 import { SettingsNav } from "#app/components/accounts/settings-nav.tsx";
@@ -55,38 +55,43 @@ export async function action({ request, context, params }: Route.ActionArgs) {
 export const meta: Route.MetaFunction = () => [{ title: "Fees · Isogyre" }];
 
 export default function PricesRoute({ loaderData, actionData, params }: Route.ComponentProps) {
-  const { typed, currency, canManage } = loaderData;
-  const [form, fields] = useForm<Record<string, string>>({ id: "prices", lastResult: actionData?.result, defaultValue: typed });
-  const before = fields.before as FieldMetadata<string>;
   return (
     <>
       <PageHeader title="Laboratory" />
-      <SettingsNav labSlug={params.labSlug} />
-      <Form method="post" {...getFormProps(form)} className="max-w-3xl">
-        <FormAlert errors={form.errors} id={form.errorId} />
-        <Card title="Fees" note="Net of tax, for one stone">
-          <CardBody>
-            <p className="mb-4 max-w-prose text-ink-2">Fixed amounts only: a fee never depends on the value of a stone or on what is found. A fee is agreed at take-in and does not change afterwards.</p>
-            <input type="hidden" name={before.name} defaultValue={before.initialValue} key={before.key} />
-            <div className="grid gap-5">
-              {serviceCodes.map((service) => {
-                const [label, amount, active] = ["label", "amount", "active"].map((part) => fields[`${service}-${part}`] as FieldMetadata<string, Record<string, unknown>, string[]>);
-                return (
-                  <fieldset key={service} className="min-w-0 border-t border-rule pt-3" disabled={!canManage}>
-                    <legend className="float-left w-full font-serif text-lg font-medium">{serviceNames[service]}</legend>
-                    <div className="clear-both grid gap-x-4 gap-y-3 pt-2 sm:grid-cols-[minmax(0,1fr)_11rem]">
-                      <TextField key={label!.key} {...fieldProps(label!)} label="On invoices" maxLength={120} />
-                      <TextField key={amount!.key} {...fieldProps(amount!)} label="Fee" unit={currency} inputMode="decimal" isMono maxLength={16} />
-                    </div>
-                    <CheckboxField key={active!.key} {...checkboxProps(active!)} label="Offered at take-in" className="mt-2" />
-                  </fieldset>
-                );
-              })}
-            </div>
-            {canManage ? <Button className="mt-5">Save the fees</Button> : null}
-          </CardBody>
-        </Card>
-      </Form>
+      {loaderData.canManage ? <SettingsNav labSlug={params.labSlug} /> : null}
+      <PricesForm key={loaderData.typed.before} {...loaderData} lastResult={actionData?.result} />
     </>
+  );
+}
+
+function PricesForm({ typed, currency, canManage, lastResult }: Route.ComponentProps["loaderData"] & { lastResult: SubmissionResult<string[]> | undefined }) {
+  const [form, fields] = useForm<Record<string, string>>({ id: "prices", lastResult, defaultValue: typed });
+  const before = fields.before as FieldMetadata<string>;
+  return (
+    <Form method="post" {...getFormProps(form)} className="max-w-3xl">
+      <FormAlert errors={form.errors} id={form.errorId} />
+      <Card title="Fees" note="Net of tax, for one stone">
+        <CardBody>
+          <p className="mb-4 max-w-prose text-ink-2">Fixed amounts only: a fee never depends on the value of a stone or on what is found. A fee is agreed at take-in and does not change afterwards.</p>
+          <input type="hidden" name={before.name} defaultValue={before.initialValue} key={before.key} />
+          <div className="grid gap-5">
+            {serviceCodes.map((service) => {
+              const [label, amount, active] = ["label", "amount", "active"].map((part) => fields[`${service}-${part}`] as FieldMetadata<string, Record<string, unknown>, string[]>);
+              return (
+                <fieldset key={service} className="min-w-0 border-t border-rule pt-3" disabled={!canManage}>
+                  <legend className="float-left w-full font-serif text-lg font-medium">{serviceNames[service]}</legend>
+                  <div className="clear-both grid gap-x-4 gap-y-3 pt-2 sm:grid-cols-[minmax(0,1fr)_11rem]">
+                    <TextField key={label!.key} {...fieldProps(label!)} label="On invoices" maxLength={120} />
+                    <TextField key={amount!.key} {...fieldProps(amount!)} label="Fee" unit={currency} inputMode="decimal" isMono maxLength={16} />
+                  </div>
+                  <CheckboxField key={active!.key} {...checkboxProps(active!)} label="Offered at take-in" className="mt-2" />
+                </fieldset>
+              );
+            })}
+          </div>
+          {canManage ? <Button className="mt-5">Save the fees</Button> : null}
+        </CardBody>
+      </Card>
+    </Form>
   );
 }
