@@ -28,8 +28,16 @@ const missing = { font: "greek", text: "☐" } as const;
 
 /** A word's glyphs and its width in ems. */
 type Shaped = { glyphs: Glyph[]; widthEm: number };
-type Face = { bytes: Uint8Array; font: Font; covers: ReadonlySet<number>; shaped: Map<string, Shaped> };
-const mostShapedWords = 20_000;
+type Face = {
+  bytes: Uint8Array;
+  font: Font;
+  covers: ReadonlySet<number>;
+  shaped: Map<string, Shaped>;
+  /** Widths in ems of texts asked for in this face, fallbacks included. */
+  measured: Map<string, number>;
+};
+/** A laboratory's words return from report to report; beyond so many a map starts anew. */
+const mostRemembered = 20_000;
 let parsed: Record<FontName, Face> | undefined;
 
 /** Parsing the faces is most of a first report's time: done once a process. */
@@ -48,7 +56,7 @@ function openFace(file: string): Face {
   // order, without the ligature characters, or what was printed before would decide how this report's text comes out.
   const covers = new Set(font.characterSet);
   for (const codePoint of [...covers].sort((a, b) => a - b)) if (codePoint < 0xfb00 || codePoint > 0xfb06) font.glyphForCodePoint(codePoint);
-  return { bytes, font, covers, shaped: new Map() };
+  return { bytes, font, covers, shaped: new Map(), measured: new Map() };
 }
 
 export type Fonts = Readonly<Record<FontName, PDFFont>>;
@@ -73,8 +81,7 @@ function shapeWords(face: Face, text: string): Shaped[] {
     if (known) return known;
     const { glyphs } = face.font.layout(word);
     const shaped = { glyphs, widthEm: glyphs.reduce((sum, { advanceWidth }) => sum + advanceWidth, 0) / face.font.unitsPerEm };
-    if (face.shaped.size >= mostShapedWords) face.shaped.clear();
-    face.shaped.set(word, shaped);
+    remember(face.shaped, word, shaped);
     return shaped;
   });
 }
@@ -98,9 +105,20 @@ export function runsOf(text: string, font: FontName): Run[] {
 /** Width of one run or line, in points. */
 export function widthOf(text: string, font: FontName, size: number): number {
   const all = faces();
+  const { measured } = all[font];
+  const known = measured.get(text);
+  if (known !== undefined) return known * size;
   let widthEm = 0;
   for (const run of runsOf(text, font)) for (const shaped of shapeWords(all[run.font], run.text)) widthEm += shaped.widthEm;
+  remember(measured, text, widthEm);
   return widthEm * size;
+}
+
+function remember<Value>(map: Map<string, Value>, text: string, value: Value): void {
+  // Long texts are not asked for twice, and would only hold memory.
+  if (text.length > 60) return;
+  if (map.size >= mostRemembered) map.clear();
+  map.set(text, value);
 }
 
 /** Composed characters, no controls, no invisible direction marks: what is printed is what is read. */

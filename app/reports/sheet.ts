@@ -1,3 +1,4 @@
+import { deflateSync } from "node:zlib";
 import { beginText, closePath, degrees, endText, appendBezierCurve, lineTo, moveText, moveTo, PDFDocument, rgb, setFillingColor, setFontAndSize, showText, type PDFName, type PDFOperator, type PDFPage, type PDFRef } from "pdf-lib";
 import { drawRamp, embedRamp } from "./draw-ramp.ts";
 import { embedFonts, runsOf, widthOf, type FontName, type Fonts } from "./report-fonts.ts";
@@ -49,6 +50,7 @@ export class Sheet {
 
   static async open(onNewPage: (sheet: Sheet) => void): Promise<Sheet> {
     const pdf = await PDFDocument.create({ updateMetadata: false });
+    compressNatively(pdf);
     return new Sheet(pdf, await embedFonts(pdf), onNewPage);
   }
 
@@ -115,6 +117,11 @@ export class Sheet {
     keys.set(name, key);
     return key;
   }
+}
+
+/** Fonts are most of what is compressed, and the library's own compressor, in script, takes several times as long as Node's. */
+function compressNatively({ context }: PDFDocument): void {
+  context.flateStream = (contents, dict = {}) => context.stream(deflateSync(typeof contents === "string" ? Buffer.from(contents, "latin1") : contents), { ...dict, Filter: "FlateDecode" });
 }
 
 /** The outline of a rectangle with rounded corners, for clipping or stroking. */
