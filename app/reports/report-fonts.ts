@@ -76,7 +76,8 @@ function shapingByWord(face: Face): Font {
 }
 
 function shapeWords(face: Face, text: string): Shaped[] {
-  return (text.match(/ +|[^ ]+/g) ?? []).map((word) => {
+  // The shaper's time grows with the square of a word's length: a word without end is shaped in pieces.
+  return (text.match(/ {1,40}|[^ ]{1,40}/gu) ?? []).map((word) => {
     const known = face.shaped.get(word);
     if (known) return known;
     const { glyphs } = face.font.layout(word);
@@ -116,7 +117,7 @@ export function widthOf(text: string, font: FontName, size: number): number {
 
 function remember<Value>(map: Map<string, Value>, text: string, value: Value): void {
   // Long texts are not asked for twice, and would only hold memory.
-  if (text.length > 60) return;
+  if (text.length > 80) return;
   if (map.size >= mostRemembered) map.clear();
   map.set(text, value);
 }
