@@ -1,4 +1,4 @@
-import { and, eq, isNull } from "drizzle-orm";
+import { and, eq, isNull, sql } from "drizzle-orm";
 import { constraintKind } from "#app/db/errors.server.ts";
 import { inTransaction } from "#app/db/in-transaction.server.ts";
 import { observations, observationStrikes, secondChecks, stones } from "#app/db/schema/index.ts";
@@ -44,6 +44,7 @@ export async function strikeReading(ctx: LabContext, { stoneCode, sequence, reas
         if (state !== "examining" && state !== "returned") throw new AppError("conflict", `This stone stands at “${examinationStateNames[state]}”: its readings stay as they are.`);
       }
       await tx.insert(observationStrikes).values({ laboratoryId, observationId: found.observationId, reason, struckAt: now, struckBy: actorId });
+      await tx.update(stones).set({ version: sql`${stones.version} + 1` }).where(and(eq(stones.laboratoryId, laboratoryId), eq(stones.id, found.stoneId)));
       await recordAudit({ ...ctx, db: tx }, { action: "reading.struck", subject: { kind: "stone", id: found.stoneId }, detail: { sequence }, reason });
     });
   } catch (error) {
