@@ -1,4 +1,5 @@
 import { Links, Meta, Outlet, Scripts, ScrollRestoration, data, useRouteLoaderData } from "react-router";
+import { documentFonts } from "#app/components/layout/document-fonts.ts";
 import { ErrorPage } from "#app/components/layout/error-page.tsx";
 import { appMiddleware } from "#app/web/app-middleware.server.ts";
 import { takeNotice } from "#app/web/notice.server.ts";
@@ -15,7 +16,7 @@ export async function loader({ request }: Route.LoaderArgs) {
 
 export const meta: Route.MetaFunction = () => [{ title: "Isogyre" }];
 
-export const links: Route.LinksFunction = () => [{ rel: "icon", href: "/favicon.svg", type: "image/svg+xml" }];
+export const links: Route.LinksFunction = () => [...documentFonts, { rel: "icon", href: "/favicon.ico", sizes: "32x32" }, { rel: "icon", href: "/favicon.svg", type: "image/svg+xml" }];
 
 export function Layout({ children }: { children: React.ReactNode }) {
   const root = useRouteLoaderData<typeof loader>("root");

@@ -6,6 +6,21 @@ export default [
   route("room", "routes/room.ts"),
 
   // accounts
+  layout("routes/account/layout.tsx", [
+    route("sign-in", "routes/account/sign-in.tsx"),
+    route("sign-up", "routes/account/sign-up.tsx"),
+    route("sign-up/sent", "routes/account/sign-up-sent.tsx"),
+    route("confirm-email/:token", "routes/account/confirm-email.tsx"),
+    route("forgot-password", "routes/account/forgot-password.tsx"),
+    route("reset-password/:token", "routes/account/reset-password.tsx"),
+    route("invitation/:token", "routes/account/invitation.tsx"),
+  ]),
+  layout("routes/account/signed-in-layout.tsx", [
+    route("laboratories", "routes/account/laboratories.tsx"),
+    route("account", "routes/account/account.tsx"),
+  ]),
+  route("sign-out", "routes/account/sign-out.ts"),
+
   // register (public)
   route("v", "routes/register/ask.ts"),
   route("v/:code", "routes/register/entry.ts"),
@@ -19,6 +34,8 @@ export default [
   route("api/uploadthing", "routes/uploadthing.ts"),
 
   // the same functions over HTTP
+  route("api/v1/rank", "routes/api/rank.ts"),
+  route("api/v1/density", "routes/api/density.ts"),
 
   // a client's own pages
   layout("routes/my/layout.tsx", [
@@ -65,6 +82,9 @@ export default [
       route("reports/:number/file.pdf", "routes/lab/reports/pdf.ts"),
 
       // settings
+      route("settings", "routes/lab/settings/laboratory.tsx"),
+      route("settings/team", "routes/lab/settings/team.tsx"),
+      route("settings/prices", "routes/lab/settings/prices.tsx"),
     ]),
   ]),
 ] satisfies RouteConfig;

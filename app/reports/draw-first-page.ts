@@ -1,123 +1,160 @@
+import { clip, endPath, popGraphicsState, pushGraphicsState, setLineWidth, setStrokingColor, stroke } from "pdf-lib";
 import { drawQr } from "./draw-qr.ts";
+import { drawRotationPlot } from "./draw-rotation-plot.ts";
 import { drawRows } from "./draw-rows.ts";
+import { drawSignatures, signaturesHeight } from "./draw-signatures.ts";
 import type { ReportView } from "./report-view.ts";
-import { inks, margin, pageHeight, pageWidth, type Sheet } from "./sheet.ts";
-import { wrapText } from "./wrap-text.ts";
+import { fullWidth, inks, margin, pageHeight, pageWidth, round, roundedRectangle, type Sheet } from "./sheet.ts";
+import { wrapAtMost, wrapText } from "./wrap-text.ts";
 
 const columnGap = 25;
 const rightWidth = 201;
-const leftWidth = pageWidth - 2 * margin - rightWidth - columnGap;
+const leftWidth = fullWidth - rightWidth - columnGap;
 const rightX = pageWidth - margin - rightWidth;
+/** Above the footer: two lines of small print that belong under the signatures. */
+const smallPrintTop = 84;
 
 export const kindNames = { identification: "Gemstone identification report", identificationWithValuation: "Identification and valuation report" } as const;
 
 /** The page that people look at: who, what, the stone's picture, the readings, how to check it, who signed. */
 export async function drawFirstPage(sheet: Sheet, view: ReportView): Promise<void> {
   sheet.newPage();
+  sheet.floor = smallPrintTop + 4;
+  const firstPage = sheet.page;
+  drawSmallPrint(sheet, view);
   drawLetterhead(sheet, view);
   const top = sheet.y;
+  const rightBottom = await drawRightColumn(sheet, view, top);
 
-  await drawRightColumn(sheet, view, top);
-  const firstPage = sheet.page;
   sheet.y = top;
   sheet.text("Conclusion", { x: margin, width: leftWidth, font: "bold", size: 8.5, ink: "tint" });
   sheet.gap(2);
-  sheet.text(view.conclusion.title, { x: margin, width: leftWidth, font: "serif", size: 24, leading: 1.2 });
-  sheet.gap(3);
+  const titleSize = titleSizeFor(view.conclusion.title);
+  sheet.text(view.conclusion.title, { x: margin, width: leftWidth, font: "serif", size: titleSize, leading: 1.2 });
+  sheet.gap(4);
   for (const statement of view.conclusion.statements) sheet.text(statement, { x: margin, width: leftWidth, size: 11 });
-  sheet.gap(12);
-  heading(sheet, "Description", margin, leftWidth);
-  drawRows(sheet, view.description, { x: margin, width: leftWidth });
-  sheet.gap(10);
-  heading(sheet, "Observations", margin, leftWidth);
-  drawRows(sheet, view.observations, { x: margin, width: leftWidth });
-  sheet.gap(12);
-  if (sheet.page === firstPage && sheet.y > 190) sheet.y = Math.min(sheet.y, 190);
-  drawSignatures(sheet, view);
+  sheet.gap(13);
+  if (view.description.length > 0) {
+    heading(sheet, "Description");
+    drawRows(sheet, view.description, { x: margin, width: leftWidth });
+    sheet.gap(11);
+  }
+  heading(sheet, "Observations");
+  if (view.observations.length > 0) drawRows(sheet, view.observations, { x: margin, width: leftWidth });
+  else sheet.text("No reading is reported. What the conclusion rests on is told overleaf.", { x: margin, width: leftWidth, ink: "soft" });
+
+  const signatures = view.valuation ? view.signatures.slice(0, -1) : view.signatures;
+  sheet.gap(4);
+  if (sheet.page === firstPage) sheet.y = Math.min(sheet.y, rightBottom, Math.max(sheet.floor + signaturesHeight(signatures), 0) + 6);
+  drawSignatures(sheet, signatures);
+}
+
+/** A long name in the largest size would push the readings off the page. */
+function titleSizeFor(title: string): number {
+  const lines = wrapText(title, { font: "serif", size: 24 }, leftWidth).length;
+  return lines <= 2 ? 24 : lines <= 4 ? 18 : 13;
+}
+
+function heading(sheet: Sheet, text: string): void {
+  sheet.ensure(40);
+  sheet.text(text, { x: margin, width: leftWidth, font: "bold", size: 8.5, ink: "tint" });
+  sheet.gap(2);
 }
 
 function drawLetterhead(sheet: Sheet, view: ReportView): void {
   const { laboratory } = view;
   const rightEdge = pageWidth - margin;
   const y = pageHeight - 60;
-  const nameSize = laboratory.name.length > 34 ? 14 : 18;
-  const name = wrapText(sheet.fonts, laboratory.name, { font: "serif", size: nameSize }, 330)[0]!;
-  sheet.line(name, { x: margin, y, font: "serif", size: nameSize });
+  const nameWidth = 330;
+  const fits = (size: number) => wrapText(laboratory.name, { font: "serif", size }, nameWidth).length === 1;
+  const nameSize = [18, 16, 14, 12].find(fits) ?? 12;
+  const names = wrapAtMost(2, laboratory.name, { font: "serif", size: nameSize }, nameWidth);
+  names.forEach((text, index) => sheet.line(text, { x: margin, y: y - index * nameSize * 1.2, font: "serif", size: nameSize }));
   const contact = [...laboratory.addressLines, laboratory.phone, laboratory.email].filter(Boolean).join(" · ");
-  wrapText(sheet.fonts, contact, { font: "sans", size: 8.5 }, 320)
-    .slice(0, 3)
-    .forEach((text, index) => sheet.line(text, { x: margin, y: y - 18 - index * 11, size: 8.5, ink: "soft" }));
+  const contactTop = y - 18 - (names.length - 1) * nameSize * 1.2;
+  const contacts = wrapAtMost(2, contact, { font: "sans", size: 8.5 }, 320);
+  contacts.forEach((text, index) => sheet.line(text, { x: margin, y: contactTop - index * 11, size: 8.5, ink: "soft" }));
   sheet.line(kindNames[view.kind], { x: rightEdge, y: y + 5, size: 8.5, ink: "soft", align: "right" });
   sheet.line(view.number, { x: rightEdge, y: y - 9.5, font: "mono", size: 12, align: "right" });
   sheet.line(`${view.reportOn} · version ${view.version}`, { x: rightEdge, y: y - 23, size: 8.5, ink: "soft", align: "right" });
-  sheet.y = y - 42;
+  sheet.y = Math.min(y - 42, contactTop - (contacts.length - 1) * 11 - 14);
   sheet.rule({ thickness: 0.9, ink: "ink" });
-  sheet.gap(20);
+  sheet.gap(18);
 }
 
-export function heading(sheet: Sheet, text: string, x: number, width: number): void {
-  sheet.ensure(40);
-  sheet.text(text, { x, width, font: "bold", size: 8.5, ink: "tint" });
-  sheet.gap(2);
+function drawSmallPrint(sheet: Sheet, view: ReportView): void {
+  const what = view.kind === "identification" ? "It is not a valuation, a guarantee or an offer." : "It is not a guarantee or an offer; the value and its conditions stand on pages of their own.";
+  const text = `This report gives the opinion of the signatories on the stone as examined on the dates above with the tests listed. ${what} Figures in brackets are standard uncertainties in the last digits.`;
+  wrapAtMost(2, text, { font: "sans", size: 7.2 }, fullWidth).forEach((line, index) => sheet.line(line, { x: margin, y: smallPrintTop - 14 - index * 10, size: 7.2, ink: "faint" }));
 }
 
-async function drawRightColumn(sheet: Sheet, view: ReportView, top: number): Promise<void> {
+/** Returns where the column ends. */
+async function drawRightColumn(sheet: Sheet, view: ReportView, top: number): Promise<number> {
   let y = top;
-  if (view.photograph?.jpeg) {
-    const image = await sheet.pdf.embedJpg(view.photograph.jpeg);
-    const scale = Math.min(rightWidth / image.width, rightWidth / image.height);
-    const [width, height] = [image.width * scale, image.height * scale];
-    sheet.page.drawImage(image, { x: rightX + (rightWidth - width) / 2, y: y - height, width, height });
-    y -= height + 13;
-    for (const line of wrapText(sheet.fonts, view.photograph.caption, { font: "sans", size: 7.8 }, rightWidth)) {
-      sheet.line(line, { x: rightX, y, size: 7.8, ink: "faint" });
-      y -= 10.5;
-    }
+  if (view.photograph?.jpeg) y = (await drawPhotograph(sheet, view.photograph.jpeg, view.photograph.caption, y, { mostHeight: view.rotationPlot ? 176 : rightWidth })) - 12;
+  if (view.rotationPlot) {
+    const [title, ...more] = wrapAtMost(2, `Rotation of the stone, ${view.rotationPlot.facetLabel}`, { font: "bold", size: 8.5 }, rightWidth);
+    for (const text of [title!, ...more]) sheet.line(text, { x: rightX, y: (y -= 11), font: "bold", size: 8.5, ink: "tint" });
+    drawRotationPlot(sheet, view.rotationPlot, { x: rightX, top: y - 4, width: rightWidth, height: 96 });
+    const curves = view.rotationPlot.curves.map(({ label }, index) => `${label} ${index % 2 === 1 ? "broken" : "full"} line`);
+    y -= 104;
+    if (curves.length > 0) for (const text of wrapAtMost(2, [...curves, "rings: readings"].join("; "), { font: "sans", size: 7.2 }, rightWidth)) sheet.line(text, { x: rightX, y: (y -= 9.5), size: 7.2, ink: "faint" });
     y -= 12;
   }
-  const boxHeight = 88;
-  y -= boxHeight;
-  sheet.page.drawRectangle({ x: rightX, y, width: rightWidth, height: boxHeight, borderColor: inks.rule, borderWidth: 0.7 });
-  drawQr(sheet.page, view.verification.url, { x: rightX + 11, y: y + 11, size: 66 });
-  const textX = rightX + 88;
-  sheet.line("Check this report", { x: textX, y: y + 62, font: "bold", size: 8.5 });
-  sheet.line("Scan, or enter the code", { x: textX, y: y + 48, size: 8.5, ink: "soft" });
-  const [first, second] = [view.verification.code.slice(0, 10), view.verification.code.slice(10)];
-  sheet.line(first, { x: textX, y: y + 33, font: "mono", size: 9.5 });
-  sheet.line(second, { x: textX, y: y + 21, font: "mono", size: 9.5 });
+  y = drawVerification(sheet, view, y) - 8;
 
-  y -= 20;
-  const facts: Array<[string, string]> = [
-    ["Stone", view.stoneCode],
-    ["Receipt", view.receiptNumber],
-    ["Received", view.receivedOn],
-    ["Examined", view.examinedOn],
-    ["For", view.clientName],
+  const contact = view.valuation ? [] : (view.clientContactLines ?? []);
+  const facts: Array<[label: string, values: readonly string[]]> = [
+    ["Stone", [view.stoneCode]],
+    ["Receipt", [view.receiptNumber]],
+    ["Received", [view.receivedOn]],
+    ["Examined", [view.examinedOn]],
+    ["For", [view.clientName, ...contact]],
   ];
-  for (const [label, value] of facts) {
-    sheet.line(label, { x: rightX, y, size: 8.5, ink: "soft" });
-    for (const line of wrapText(sheet.fonts, value, { font: "sans", size: 8.5 }, rightWidth - 56).slice(0, 3)) {
-      sheet.line(line, { x: rightX + 56, y, size: 8.5 });
-      y -= 12;
-    }
+  for (const [label, values] of facts) {
+    sheet.line(label, { x: rightX, y: y - 12, size: 8.5, ink: "soft" });
+    for (const text of values.slice(0, 5).flatMap((value) => wrapAtMost(2, value, { font: "sans", size: 8.5 }, rightWidth - 56))) sheet.line(text, { x: rightX + 56, y: (y -= 12), size: 8.5 });
   }
+  return y - 6;
 }
 
-export function drawSignatures(sheet: Sheet, view: ReportView): void {
-  const gap = 26;
-  const width = (pageWidth - 2 * margin - gap) / 2;
-  for (let at = 0; at < view.signatures.length; at += 2) {
-    sheet.ensure(70);
-    const top = sheet.y - 18;
-    view.signatures.slice(at, at + 2).forEach((signature, index) => {
-      const x = margin + index * (width + gap);
-      sheet.y = top;
-      sheet.rule({ x, width, thickness: 0.9, ink: "ink" });
-      const who = [signature.name, signature.title].filter(Boolean).join(", ");
-      sheet.line(wrapText(sheet.fonts, who, { font: "bold", size: 9.2 }, width)[0]!, { x, y: top - 14, font: "bold", size: 9.2 });
-      sheet.line(signature.statement, { x, y: top - 27, size: 8.8, ink: "soft" });
-      sheet.line(signature.onDate, { x, y: top - 39, size: 8.8, ink: "soft" });
-    });
-    sheet.y = top - 46;
-  }
+async function drawPhotograph(sheet: Sheet, jpeg: Uint8Array, caption: string, top: number, { mostHeight }: { mostHeight: number }): Promise<number> {
+  const image = await sheet.pdf.embedJpg(jpeg);
+  // Never cropped: what the edge of a picture shows is evidence too.
+  const scale = Math.min(rightWidth / image.width, mostHeight / image.height);
+  const [width, height] = [round(image.width * scale), round(image.height * scale)];
+  const [x, y] = [round(rightX + (rightWidth - width) / 2), round(top - height)];
+  sheet.page.pushOperators(pushGraphicsState(), ...roundedRectangle({ x, y, width, height, radius: Math.min(4, width / 2, height / 2) }), clip(), endPath());
+  sheet.page.drawImage(image, { x, y, width, height });
+  sheet.page.pushOperators(popGraphicsState());
+  let below = y - 3;
+  for (const line of wrapAtMost(3, caption, { font: "sans", size: 7.8 }, rightWidth)) sheet.line(line, { x: rightX, y: (below -= 10.5), size: 7.8, ink: "faint" });
+  return below;
+}
+
+function drawVerification(sheet: Sheet, view: ReportView, top: number): number {
+  const height = 88;
+  const y = top - height;
+  sheet.page.pushOperators(
+    pushGraphicsState(),
+    setStrokingColor(inks.rule),
+    setLineWidth(0.7),
+    ...roundedRectangle({ x: rightX, y, width: rightWidth, height, radius: 4 }),
+    stroke(),
+    popGraphicsState(),
+  );
+  drawQr(sheet.page, view.verification.url, { x: rightX + 11, y: y + 11, size: 66 });
+  const x = rightX + 88;
+  sheet.line("Check this report", { x, y: y + 67, font: "bold", size: 8.5 });
+  const whereTo = wrapAtMost(2, `Scan, or enter at ${placeOf(view.verification.url)}`, { font: "sans", size: 8 }, rightWidth - 88 - 8);
+  whereTo.forEach((text, index) => sheet.line(text, { x, y: y + 54 - index * 10.5, size: 8, ink: "soft" }));
+  const [first, second] = [view.verification.code.slice(0, 10), view.verification.code.slice(10)];
+  sheet.line(first, { x, y: y + 28, font: "mono", size: 9.5 });
+  sheet.line(second, { x, y: y + 16, font: "mono", size: 9.5 });
+  return y;
+}
+
+/** Where a code is typed in: the register's address without the code. */
+function placeOf(url: string): string {
+  return url.replace(/^https?:\/\//, "").replace(/\/[^/]*$/, "");
 }

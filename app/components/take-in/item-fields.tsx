@@ -21,12 +21,12 @@ export function ItemFields({ fields, position, balances, currency, remove }: { f
         <div className="ml-auto">{remove}</div>
       </div>
       <div className="grid gap-3.5 sm:grid-cols-12">
-        <TextField key={fields.description.key} {...fieldProps(fields.description)} label="As received" className="sm:col-span-8" autoComplete="off" maxLength={300} />
+        <TextField key={fields.description.key} {...fieldProps(fields.description)} label="As received" className="sm:col-span-12 xl:col-span-8" autoComplete="off" maxLength={300} />
         <SelectField
           key={fields.mount.key}
           {...fieldProps(fields.mount)}
           label="Loose or set"
-          className="sm:col-span-2"
+          className="sm:col-span-4 xl:col-span-2"
           options={[
             { value: "loose", label: "Loose" },
             { value: "mounted", label: "Mounted" },
@@ -34,7 +34,7 @@ export function ItemFields({ fields, position, balances, currency, remove }: { f
           ]}
         />
         <TextField key={fields.stoneCount.key} {...fieldProps(fields.stoneCount)} label="Stones" className="sm:col-span-2" inputMode="numeric" isMono autoComplete="off" maxLength={9} />
-        <TextField key={fields.massText.key} {...fieldProps(fields.massText)} label="Weight" className="sm:col-span-3" inputMode="decimal" isMono autoComplete="off" maxLength={24} hint="All digits that the balance shows." />
+        <TextField key={fields.massText.key} {...fieldProps(fields.massText)} label="Weight" className="sm:col-span-4 xl:col-span-3" inputMode="decimal" isMono autoComplete="off" maxLength={24} hint="All digits that the balance shows." />
         <SelectField
           key={fields.massUnit.key}
           {...fieldProps(fields.massUnit)}
@@ -49,7 +49,7 @@ export function ItemFields({ fields, position, balances, currency, remove }: { f
           key={fields.balanceId.key}
           {...fieldProps(fields.balanceId)}
           label="Balance"
-          className="sm:col-span-4"
+          className="sm:col-span-7 xl:col-span-4"
           emptyLabel="Choose"
           options={balances.map(({ ref, name, checked }) => ({ value: ref, label: `${name}, ${checked}` }))}
         />
@@ -59,7 +59,7 @@ export function ItemFields({ fields, position, balances, currency, remove }: { f
           label="Declared value"
           unit={currency}
           isRequired={false}
-          className="sm:col-span-3"
+          className="sm:col-span-5 xl:col-span-3"
           inputMode="decimal"
           isMono
           autoComplete="off"

@@ -1,7 +1,8 @@
+import { constraintKind } from "#app/db/errors.server.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import type { UserId } from "#app/domain/ids.ts";
-import { constraintKind } from "#app/db/errors.server.ts";
 import type { AppContext } from "#app/features/app-context.ts";
+import { consume } from "#app/features/rate-limits/consume.server.ts";
 import { acceptClientInvitation } from "./accept-client-invitation.server.ts";
 import { acceptStaffInvitation } from "./accept-staff-invitation.server.ts";
 import { findInvitation } from "./find-invitation.server.ts";
@@ -13,6 +14,7 @@ type By = { signedInAs: UserId } | { name: string; password: string };
 
 /** Accepts an invitation of either kind, by an account that is signed in or by a new one. */
 export async function acceptInvitation(app: AppContext, { token, by }: { token: string; by: By }): Promise<{ userId: UserId; goTo: string }> {
+  await consume(app, { door: "link", key: app.clientAddress });
   const invitation = await findInvitation(app, token);
   if (!invitation) throw new AppError("not_found", deadLinkSentence);
   const accept = invitation.kind === "staff" ? acceptStaffInvitation : acceptClientInvitation;

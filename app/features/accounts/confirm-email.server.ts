@@ -8,6 +8,7 @@ import type { UserId } from "#app/domain/ids.ts";
 import type { NewLaboratory } from "#app/domain/new-laboratory.ts";
 import type { AppContext } from "#app/features/app-context.ts";
 import { openLaboratory } from "#app/features/laboratories/open-laboratory.server.ts";
+import { consume } from "#app/features/rate-limits/consume.server.ts";
 import { deadLinkSentence, spendEmailToken } from "./spend-email-token.server.ts";
 
 /**
@@ -15,6 +16,7 @@ import { deadLinkSentence, spendEmailToken } from "./spend-email-token.server.ts
  * letters come again, since somebody may have taken them meanwhile.
  */
 export async function confirmEmail(app: AppContext, { token, slug, prefix }: { token: string } & Pick<NewLaboratory, "slug" | "prefix">): Promise<{ userId: UserId; labSlug: string }> {
+  await consume(app, { door: "link", key: app.clientAddress });
   try {
     return await inTransaction(app.db, async (tx) => {
       const inTx = { ...app, db: tx };

@@ -37,7 +37,8 @@ export async function getClient(ctx: LabContext, clientId: ClientId) {
       dueOn: takeIns.dueOn,
       services: takeIns.services,
       handedOverBy: takeIns.handedOverBy,
-      items: sql<string>`(select group_concat(i.description order by i.position separator '; ') from items i where i.laboratory_id = ${takeIns.laboratoryId} and i.take_in_id = ${takeIns.id})`,
+      // Names written out: in a select of one table Drizzle leaves the table's name away, and "id" would be the item's.
+      items: sql<string>`(select group_concat(i.description order by i.position separator '; ') from items i where i.laboratory_id = take_ins.laboratory_id and i.take_in_id = take_ins.id)`,
     })
     .from(takeIns)
     .where(and(eq(takeIns.laboratoryId, ctx.laboratoryId), eq(takeIns.clientId, clientId)))

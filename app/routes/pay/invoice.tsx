@@ -9,6 +9,7 @@ import { AppError } from "#app/domain/app-error.ts";
 import { formatCalendarDate, formatInstant } from "#app/domain/calendar-date.ts";
 import { invoiceStateNames, type InvoiceState } from "#app/domain/invoice-state.ts";
 import { getPayPage } from "#app/features/payments/get-pay-page.server.ts";
+import { consume } from "#app/features/rate-limits/consume.server.ts";
 import { startCheckout } from "#app/features/payments/start-checkout.server.ts";
 import type { loader as rootLoader } from "#app/root.tsx";
 import { appContext } from "#app/web/contexts.server.ts";
@@ -18,13 +19,17 @@ import type { Route } from "./+types/invoice";
 const tones: Record<InvoiceState, Tone> = { open: "straw", paid: "green", refunded: "plain", void: "plain" };
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {
-  const invoice = await orResponse(getPayPage(context.get(appContext), { payToken: params.payToken }));
+  const app = context.get(appContext);
+  await orResponse(consume(app, { door: "pay", key: app.clientAddress }));
+  const invoice = await orResponse(getPayPage(app, { payToken: params.payToken }));
   return { invoice, returned: url.searchParams.get("returned") };
 }
 
 export async function action({ context, params }: Route.ActionArgs) {
+  const app = context.get(appContext);
   try {
-    return redirect(await startCheckout(context.get(appContext), { payToken: params.payToken }), 303);
+    await consume(app, { door: "pay", key: app.clientAddress });
+    return redirect(await startCheckout(app, { payToken: params.payToken }), 303);
   } catch (error) {
     if (!(error instanceof AppError)) throw error;
     return data({ userMessage: error.userMessage }, { status: error.status, headers: error.retryAfterS ? { "Retry-After": String(error.retryAfterS) } : {} });

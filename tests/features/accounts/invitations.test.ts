@@ -34,7 +34,7 @@ test("a person with an account accepts only while signed in as that account", as
   const [app, lab] = [await anApp(), await aLab()];
   const [person, stranger] = [await aPerson(app), await aPerson(app)];
   await inviteStaff(lab, { ...anInvitation(), email: person.email });
-  const [{ token }] = (await lettersTo(app, person.email)) as [{ token: string }];
+  const { token } = (await lettersTo(app, person.email))[0]!;
   await expect(acceptInvitation(app, { token, by: { name: "X", password: goodPassword } })).rejects.toMatchObject({ code: "conflict" });
   await expect(acceptInvitation(app, { token, by: { signedInAs: stranger.userId } })).rejects.toMatchObject({ code: "conflict" });
   const tries = await Promise.allSettled(Array.from({ length: 4 }, () => acceptInvitation(app, { token, by: { signedInAs: person.userId } })));
@@ -62,7 +62,7 @@ test("an invitation runs out after a fortnight", async () => {
   const [app, lab] = [await anApp(), await aLab()];
   const invitation = anInvitation();
   await inviteStaff(lab, invitation);
-  const [{ token }] = (await lettersTo(app, invitation.email)) as [{ token: string }];
+  const { token } = (await lettersTo(app, invitation.email))[0]!;
   expect(await findInvitation(later(app, 14 * 24 * 3_600_000), token)).toBeUndefined();
 });
 
@@ -72,7 +72,7 @@ test("a member is not invited again; somebody who left may come back, with the n
   await expect(inviteStaff(lab, { ...anInvitation(), email: member.person.email })).rejects.toMatchObject({ code: "conflict" });
   await endMembership(lab, { userId: member.actorId });
   await inviteStaff(lab, { ...anInvitation(), email: member.person.email, roles: ["desk"] });
-  const [{ token }] = (await lettersTo(app, member.person.email)) as [{ token: string }];
+  const { token } = (await lettersTo(app, member.person.email))[0]!;
   await acceptInvitation(app, { token, by: { signedInAs: member.actorId } });
   const held = await app.db.select({ role: membershipRoles.role }).from(membershipRoles).where(and(eq(membershipRoles.laboratoryId, lab.laboratoryId), eq(membershipRoles.userId, member.actorId)));
   expect(held).toEqual([{ role: "desk" }]);

@@ -29,7 +29,7 @@ test("a reset link runs out after an hour", async () => {
   const app = await anApp();
   const { email } = await aPerson(app);
   await requestPasswordReset(app, { email, requestId: aRequestId() });
-  const [{ token }] = (await lettersTo(app, email)) as [{ token: string }];
+  const { token } = (await lettersTo(app, email))[0]!;
   await expect(resetPassword(later(app, 60 * 60_000), { token, password })).rejects.toMatchObject({ code: "not_found" });
   await resetPassword(later(app, 59 * 60_000), { token, password });
 });

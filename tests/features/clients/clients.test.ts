@@ -38,6 +38,13 @@ test("a renamed client's stones are found by the new name", async () => {
   expect((await listStones(ctx, { search: "ardenne" })).stones).toHaveLength(0);
 });
 
+test("a client's page lists their take-ins, with what was handed over", async () => {
+  const ctx = await aLab();
+  const { takeInNumber } = await aTakenInItem(ctx);
+  const { clients: [client] } = await listClients(ctx);
+  expect((await getClient(ctx, client!.id)).takeIns).toMatchObject([{ number: takeInNumber, items: "Purplish red oval, transparent" }]);
+});
+
 test("only an owner grants account terms, and it is written who did", async () => {
   const ctx = await aLab();
   const id = await aClient(ctx);

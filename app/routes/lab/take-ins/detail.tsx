@@ -275,8 +275,13 @@ export default function TakeInDetailRoute({ loaderData, actionData, params }: Ro
 
 function Panel({ title, isOpen, children }: { title: string; isOpen: boolean; children: React.ReactNode }) {
   return (
-    <details open={isOpen} className="no-print border-t border-rule px-4.5 py-3">
-      <summary className="font-semibold text-tint">{title}</summary>
+    <details open={isOpen} className="group no-print border-t border-rule px-4.5 py-3">
+      <summary className="font-semibold text-tint">
+        <span aria-hidden="true" className="mr-1.5 inline-block transition-transform group-open:rotate-90">
+          ▸
+        </span>
+        {title}
+      </summary>
       <div className="pt-3 pb-1">{children}</div>
     </details>
   );

@@ -54,7 +54,7 @@ export default function LabelsRoute({ loaderData, params }: Route.ComponentProps
         </div>
         <Button look="quiet">Place them</Button>
       </Form>
-      <div className="overflow-x-auto print:overflow-visible">
+      <div className="label-sheets overflow-x-auto print:overflow-visible">
         {sheets.map((sheet, at) => (
           <ul key={at} aria-label={`Sheet ${at + 1}`} className="mb-6 grid w-[210mm] break-after-page content-start border border-rule bg-sheet print:absolute print:left-0 print:mb-0 print:border-0" style={{ gridTemplateColumns: `repeat(${columns}, 70mm)`, gridAutoRows: "37mm", top: `${at * 297}mm` }}>
             {sheet.map((label, index) => {

@@ -1,0 +1,161 @@
+import { logSumExp } from "../statistics/log-sum-exp.ts";
+import type { Lookalike, SpeciesForm, SpeciesNode, SpeciesTable } from "../species/species-table.ts";
+import { modelVersion, priorFloor, sharedOffset, unlistedPrior, verdictAt } from "./defaults.ts";
+import type { Evidence } from "./evidence.ts";
+import { birefringenceTerm, indexTerms } from "./index-terms.ts";
+import type { EvidenceLine, Ranking, Verdict } from "./ranking.ts";
+import { lookedAtTerms, opticCharacterTerm, opticSignTerm, sgTerm } from "./seen-terms.ts";
+import type { Score, Term } from "./term.ts";
+
+export type RankOptions = Readonly<{ /** By how common a species is, or all alike. */ prior?: "prevalence" | "even" }>;
+
+/** What is seen counts as a contradiction only when it is as good as impossible: eyes err. */
+const seenContradictsBelow = 0.004;
+/** Gauss–Hermite nodes and weights, 5 points, for a standard normal offset. */
+const offsets = [0, 0.9585724646138185 * Math.SQRT2, -0.9585724646138185 * Math.SQRT2, 2.0201828704560856 * Math.SQRT2, -2.0201828704560856 * Math.SQRT2].map((node) => node * sharedOffset);
+const offsetLogWeights = [0.9453087204829419, 0.3936193231522412, 0.3936193231522412, 0.01995324205904591, 0.01995324205904591].map((weight) => Math.log(weight / Math.sqrt(Math.PI)));
+
+/**
+ * Ranks every species of the table by what was seen and measured. The order of the readings changes nothing; a species that
+ * a good reading contradicts is listed apart with the reading; equal scores stand in the order of their ids.
+ *
+ * It never concludes: natural, synthetic and treated forms share their constants and stand under one species.
+ *
+ * @param evidence as parseEvidence lets it through
+ * @returns probabilities among the species that nothing contradicts and an unlisted one; they sum to 1
+ *
+ * Source: Bayes' rule with the likelihoods described beside each term; model version in the result.
+ */
+export function rankSpecies(evidence: Evidence, table: SpeciesTable, { prior = "prevalence" }: RankOptions = {}): Ranking {
+  const terms = termsOf(evidence);
+  const weights = table.nodes.map(({ weight }) => (prior === "even" ? 1 : Math.max(weight, priorFloor)));
+  const weightSum = weights.reduce((sum, weight) => sum + weight, 0);
+  const judged = table.nodes.map((node, index) => ({ node, logPrior: Math.log(((1 - unlistedPrior) * weights[index]!) / weightSum), ...judge(node, terms) }));
+
+  const open = judged.filter(({ contradiction }) => contradiction === null);
+  const scores = open.map(({ logPrior, logLikelihood }) => logPrior + logLikelihood);
+  const unlistedScore = Math.log(unlistedPrior) + terms.reduce((sum, term) => sum + term.unlistedLogLikelihood, 0);
+  const norm = logSumExp([...scores, unlistedScore]);
+  const candidates = open
+    .map((each, index) => ({ ...each, score: scores[index]! }))
+    .sort((a, b) => b.score - a.score || compareIds(a.node.id, b.node.id))
+    .map(({ node, score, best, bestScores }) => ({
+      speciesId: node.id,
+      name: node.name,
+      probability: Math.exp(score - norm),
+      evidence: terms.map((term, index) => lineOf(term, node, best, bestScores[index]!)),
+    }));
+  const contradicted = judged
+    .filter(({ contradiction }) => contradiction !== null)
+    .sort((a, b) => b.logPrior + b.logLikelihood - (a.logPrior + a.logLikelihood) || compareIds(a.node.id, b.node.id))
+    .map(({ node, contradiction }) => ({ speciesId: node.id, because: contradiction! }));
+  return {
+    ...(evidence.id !== undefined && { id: evidence.id }),
+    tableVersion: table.version,
+    modelVersion,
+    candidates,
+    unlisted: Math.exp(unlistedScore - norm),
+    contradicted,
+    inseparable: inseparable(table.lookalikes, candidates),
+  };
+}
+
+/** The observations of a piece of evidence in a fixed order, so that the order they came in cannot matter. */
+function termsOf(evidence: Evidence): Term[] {
+  return [
+    ...indexTerms(sorted(evidence.ri ?? []), { hasBirefringence: evidence.birefringence !== undefined }),
+    ...(evidence.birefringence ? [birefringenceTerm(evidence.birefringence)] : []),
+    ...(evidence.opticCharacter ? [opticCharacterTerm(evidence.opticCharacter)] : []),
+    ...(evidence.opticSign ? [opticSignTerm(evidence.opticSign)] : []),
+    ...(evidence.sg ? [sgTerm(evidence.sg)] : []),
+    ...lookedAtTerms(evidence),
+  ];
+}
+
+function sorted<T>(readings: readonly T[]): T[] {
+  return [...readings].sort((a, b) => compareIds(JSON.stringify(a), JSON.stringify(b)));
+}
+
+type Judged = { logLikelihood: number; best: SpeciesForm; bestScores: Score[]; contradiction: string | null };
+
+/** A species is the mixture of its forms; it is contradicted when every one of them is. */
+function judge(node: SpeciesNode, terms: readonly Term[]): Judged {
+  const isShared = terms.filter(({ isIndex }) => isIndex).length > 1;
+  let best = node.forms[0]!;
+  let bestScores: Score[] = [];
+  let bestLog = -Infinity;
+  let contradiction: string | null = null;
+  let isOpen = false;
+  const logs: number[] = [];
+  for (const form of node.forms) {
+    const scores = terms.map((term) => term.score(form, 0));
+    let log = 0;
+    for (const score of scores) log += score.logLikelihood;
+    if (isShared) log += sharedOffsetGain(form, terms, scores);
+    logs.push(Math.log(form.share) + log);
+    const against = terms.findIndex((term, index) => contradicts(term, scores[index]!));
+    const isBetter = against < 0 ? !isOpen || log > bestLog : !isOpen && log > bestLog;
+    if (!isBetter) continue;
+    best = form;
+    bestScores = scores;
+    bestLog = log;
+    isOpen = against < 0;
+    contradiction = against < 0 ? null : terms[worst(terms, scores)]!.contradiction(form, scores[worst(terms, scores)]!);
+  }
+  return { logLikelihood: logSumExp(logs), best, bestScores, contradiction };
+}
+
+/** What is gained when all index readings may share one error, over each having none. */
+function sharedOffsetGain(form: SpeciesForm, terms: readonly Term[], scores: readonly Score[]): number {
+  let separate = 0;
+  terms.forEach((term, index) => {
+    if (term.isIndex) separate += scores[index]!.logLikelihood;
+  });
+  const joint = logSumExp(offsets.map((offset, at) => offsetLogWeights[at]! + terms.reduce((sum, term) => (term.isIndex ? sum + term.score(form, offset).logLikelihood : sum), 0)));
+  return joint - separate;
+}
+
+function contradicts(term: Term, score: Score): boolean {
+  return score.tail < (term.measure ? verdictAt.contradicts : seenContradictsBelow);
+}
+
+function worst(terms: readonly Term[], scores: readonly Score[]): number {
+  let at = -1;
+  for (let index = 0; index < terms.length; index++) {
+    if (!contradicts(terms[index]!, scores[index]!)) continue;
+    if (at < 0 || scores[index]!.logLikelihood - terms[index]!.unlistedLogLikelihood < scores[at]!.logLikelihood - terms[at]!.unlistedLogLikelihood) at = index;
+  }
+  return at;
+}
+
+function lineOf(term: Term, node: SpeciesNode, best: SpeciesForm, score: Score): EvidenceLine {
+  const verdict = verdictOf(term, score);
+  return { property: term.property, observed: term.observed, reference: term.reference(node.forms), logLikelihood: score.logLikelihood, verdict, because: because(term, best, score, verdict) };
+}
+
+function verdictOf(term: Term, score: Score): Verdict {
+  if (contradicts(term, score)) return "contradicts";
+  return term.measure && score.tail < verdictAt.strained ? "strained" : score.tail < 0.1 && !term.measure ? "strained" : "agrees";
+}
+
+function because(term: Term, form: SpeciesForm, score: Score, verdict: Verdict): string {
+  if (verdict === "contradicts") return term.contradiction(form, score);
+  if (!term.measure) return verdict === "agrees" ? "as known of it" : "seldom seen of it";
+  if (score.distance === 0) return "inside its range";
+  const side = score.distance > 0 ? "above" : "below";
+  const times = Math.abs(score.distance).toFixed(1);
+  return verdict === "agrees" ? `just ${side} its range, within the uncertainty` : `${times} standard uncertainties ${side} its range`;
+}
+
+/** Groups of look-alikes of which at least two are still open and one of them counts. */
+function inseparable(lookalikes: readonly Lookalike[], candidates: ReadonlyArray<{ speciesId: string; probability: number }>): Ranking["inseparable"] {
+  const open = new Map(candidates.map(({ speciesId, probability }) => [speciesId, probability]));
+  return lookalikes.flatMap(({ speciesIds, settledBy }) => {
+    const left = speciesIds.filter((id) => (open.get(id) ?? 0) >= 0.005);
+    return left.length >= 2 && left.some((id) => open.get(id)! >= 0.05) ? [{ speciesIds: left, settledBy }] : [];
+  });
+}
+
+function compareIds(a: string, b: string): number {
+  return a < b ? -1 : a > b ? 1 : 0;
+}

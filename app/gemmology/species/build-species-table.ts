@@ -1,0 +1,77 @@
+import type { LookalikeRow, NodeRow, Range, SpeciesRow, TabulatedCharacter } from "./species-row.ts";
+import type { Interval, Lookalike, SpeciesForm, SpeciesNode, SpeciesTable } from "./species-table.ts";
+
+/** Prior weight of a form by its prevalence 1 (collector's rarity) to 5 (everyday); a house rule, common practice. */
+const weightOfPrevalence: readonly number[] = [0, 0.015, 0.05, 0.15, 0.4, 1];
+/** Assembled pieces are recognised by their seam before they are measured, so few of them reach the readings; house value. */
+const compositeFactor = 0.25;
+
+/**
+ * Gathers the rows of the species file under their species.
+ * @param version names the content; it goes into every ranking
+ * @throws RangeError when a node names a row that is not there, or a row belongs to no node or to two
+ */
+export function buildSpeciesTable({ version, rows, nodes, lookalikes }: { version: string; rows: readonly SpeciesRow[]; nodes: readonly NodeRow[]; lookalikes: readonly LookalikeRow[] }): SpeciesTable {
+  const rowById = new Map(rows.map((row) => [row.id, row]));
+  const nodeOfRow = new Map<string, string>();
+  for (const node of nodes) {
+    for (const rowId of node.rows) {
+      if (!rowById.has(rowId)) throw new RangeError(`node ${node.id} names a row that is not there: ${rowId}`);
+      if (nodeOfRow.has(rowId)) throw new RangeError(`row ${rowId} belongs to ${nodeOfRow.get(rowId)} and to ${node.id}`);
+      nodeOfRow.set(rowId, node.id);
+    }
+  }
+  const homeless = rows.find(({ id }) => !nodeOfRow.has(id));
+  if (homeless) throw new RangeError(`row ${homeless.id} belongs to no node`);
+  return { version, nodes: nodes.map((node) => nodeOf(node, node.rows.map((id) => rowById.get(id)!))), lookalikes: lookalikes.flatMap((group) => lookalikeOf(group, nodeOfRow)) };
+}
+
+function nodeOf(node: NodeRow, rows: readonly SpeciesRow[]): SpeciesNode {
+  const weights = rows.map(({ prevalence, kind }) => (weightOfPrevalence[prevalence] ?? 0.015) * (kind === "composite" ? compositeFactor : 1));
+  const sum = weights.reduce((total, weight) => total + weight, 0);
+  return { id: node.id, name: node.name, weight: Math.max(...weights), forms: rows.map((row, index) => formOf(row, weights[index]! / sum)) };
+}
+
+const interval = (range: Range | null | undefined): Interval | null => (range ? [range.min, range.max] : null);
+
+function formOf(row: SpeciesRow, share: number): SpeciesForm {
+  const { ri } = row;
+  const single = ri?.n;
+  const [low, high] = ri?.alpha && ri.gamma ? ([ri.alpha, ri.gamma] as const) : ri?.omega && ri.epsilon ? byIndex(ri.omega, ri.epsilon) : ([single, single] as const);
+  const strengths = { none: 0, weak: 1, distinct: 2, strong: 3 } as const;
+  return {
+    id: row.id,
+    name: row.name,
+    kind: row.kind,
+    share,
+    character: (typeof row.optic_character === "string" ? [row.optic_character] : row.optic_character) as TabulatedCharacter[],
+    sign: row.optic_sign,
+    lowIndex: interval(low),
+    highIndex: interval(high),
+    spotIndex: interval(ri?.spot),
+    birefringence: interval(row.birefringence),
+    sg: interval(row.sg),
+    colours: row.colours.map((colour) => colour.toLowerCase()),
+    transparency: row.transparency,
+    lustre: row.lustre,
+    pleochroism: Math.max(0, ...(row.pleochroism ?? []).map(({ strength }) => strengths[strength])),
+    absorption: row.absorption.map(({ nm, kind, width_nm: width, strength }) => [nm, kind === "line" ? (width ?? 2) / 2 : (width ?? 40) / 2, strength] as const),
+    longWave: row.fluorescence.lw.map(({ strength }) => strength),
+    shortWave: row.fluorescence.sw.map(({ strength }) => strength),
+    filterRed: row.colour_filter ? Object.values(row.colour_filter).some((look) => /red|pink/.test(look) && !/no red|not red/.test(look)) : null,
+    thermal: row.thermal,
+    phenomena: row.phenomena.map((phenomenon) => phenomenon.toLowerCase()),
+  };
+}
+
+/** ω and ε in order of size; a species whose sign changes keeps the wider sense of both. */
+function byIndex(omega: Range, epsilon: Range): readonly [Range, Range] {
+  return omega.typ <= epsilon.typ ? [omega, epsilon] : [epsilon, omega];
+}
+
+function lookalikeOf({ members, bench, laboratory }: LookalikeRow, nodeOfRow: ReadonlyMap<string, string>): Lookalike[] {
+  const speciesIds = [...new Set(members.flatMap((member) => nodeOfRow.get(member) ?? []))].sort();
+  if (speciesIds.length < 2) return [];
+  const settledBy = [bench.length > 0 ? `At the bench: ${bench.join("; ")}` : "", laboratory.length > 0 ? `In a laboratory: ${laboratory.join("; ")}` : ""].filter(Boolean).join(". ");
+  return [{ speciesIds, settledBy }];
+}
