@@ -1,3 +1,5 @@
+import type { ConsentCode } from "./consent-code.ts";
+
 /** The tests whose readings can be recorded, by what the instrument shows. */
 export const observationKinds = [
   "refractometer",
@@ -37,6 +39,32 @@ export const evidenceClassOf: Readonly<Record<ObservationKind, "index" | "charac
   free: "seen",
 };
 
+/** The kind of instrument that a test is read on; null where the eye is enough. */
+export const instrumentKindFor = {
+  refractometer: "refractometer",
+  spot: "refractometer",
+  overLimit: "refractometer",
+  criticalAngle: "angleRefractometer",
+  polariscope: "polariscope",
+  density: "balance",
+  weight: "balance",
+  dimensions: "gauge",
+  free: null,
+} as const satisfies Record<ObservationKind, string | null>;
+
+/** What the client must have agreed to before a test touches the stone (workflow 1.2, 1.4). */
+export const consentNeededFor: Readonly<Record<ObservationKind, ConsentCode | null>> = {
+  refractometer: "contactLiquid",
+  spot: "contactLiquid",
+  overLimit: "contactLiquid",
+  criticalAngle: "contactLiquid",
+  polariscope: null,
+  density: "hydrostatic",
+  weight: null,
+  dimensions: null,
+  free: null,
+};
+
 export const readingQualities = ["good", "fair", "poor", "noResult"] as const;
 export type ReadingQuality = (typeof readingQualities)[number];
 export const readingQualityNames: Readonly<Record<ReadingQuality, string>> = {
@@ -60,6 +88,14 @@ export const noResultReasons = [
 
 export const facets = ["table", "crown", "pavilion", "dome", "base", "other"] as const;
 export type Facet = (typeof facets)[number];
+export const facetNames: Readonly<Record<Facet, string>> = {
+  table: "Table",
+  crown: "Crown",
+  pavilion: "Pavilion",
+  dome: "Dome",
+  base: "Base",
+  other: "Another facet",
+};
 
 export const lights = ["sodium", "filteredYellow", "white"] as const;
 export type Light = (typeof lights)[number];
@@ -91,11 +127,23 @@ export const interferenceFigureNames: Readonly<Record<InterferenceFigure, string
 
 export const weighingMethods = ["suspended", "beakerOnPan"] as const;
 export type WeighingMethod = (typeof weighingMethods)[number];
+export const weighingMethodNames: Readonly<Record<WeighingMethod, string>> = {
+  suspended: "Stone hung in water, weighed",
+  beakerOnPan: "Stone hung free, beaker of water weighed",
+};
+
+export const spotMethods = ["50/50", "blink", "average"] as const;
+export type SpotMethod = (typeof spotMethods)[number];
+export const spotMethodNames: Readonly<Record<SpotMethod, string>> = {
+  "50/50": "Spot half dark",
+  blink: "Blink from dark to light",
+  average: "Mean of the two",
+};
 
 /** Conditions and things seen, in the vocabulary of each kind. Numbers are kept beside, with the digits as typed. */
 export type ReadingDetail =
   | { kind: "refractometer"; edges: "two" | "one"; isRotated: boolean; facet: Facet; light: Light }
-  | { kind: "spot"; method: "50/50" | "blink" | "average"; facet: Facet; light: Light }
+  | { kind: "spot"; method: SpotMethod; facet: Facet; light: Light }
   | { kind: "overLimit"; facet: Facet; light: Light }
   | { kind: "criticalAngle"; facet: Facet; light: Light }
   | { kind: "polariscope"; behaviour: PolariscopeBehaviour; directionsTried: number; figure: InterferenceFigure; sign: "+" | "-" | null }

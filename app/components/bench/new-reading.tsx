@@ -1,0 +1,140 @@
+import { getFormProps, useForm, type SubmissionResult } from "@conform-to/react";
+import { useState, type FormEvent } from "react";
+import { Form, useNavigation } from "react-router";
+import { Button } from "#app/components/ui/button.tsx";
+import { fieldProps } from "#app/components/ui/field-props.ts";
+import { FormAlert } from "#app/components/ui/form-alert.tsx";
+import { RadioGroupField } from "#app/components/ui/choice-field.tsx";
+import { SelectField } from "#app/components/ui/select-field.tsx";
+import { TextAreaField } from "#app/components/ui/text-field.tsx";
+import { instrumentKindFor, noResultReasons, readingQualities, readingQualityNames, type ObservationKind } from "#app/domain/reading.ts";
+import { composeReading, type ComposedReading } from "#app/features/readings/compose-reading.ts";
+import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
+import { withUncertainty } from "#app/features/readings/reading-words.ts";
+import type { BenchInstrument } from "#app/features/stones/get-bench.server.ts";
+import { ReadingFields, type ReadingFieldset } from "./reading-fields.tsx";
+
+type NewReadingProps = {
+  kind: ObservationKind;
+  instruments: readonly BenchInstrument[];
+  requestId: string;
+  lastResult: SubmissionResult<string[]> | undefined;
+  areCandidatesHidden: boolean;
+  /** What the typed digits amount to; null while they are no reading. */
+  onDraft?: (reading: ComposedReading | null) => void;
+  caution?: string;
+};
+
+/** The form of one test. It posts without script; with script it says at once what follows from the digits. */
+export function NewReading({ kind, instruments, requestId, lastResult, areCandidatesHidden, onDraft, caution }: NewReadingProps) {
+  const needed = instrumentKindFor[kind];
+  const fitting = needed ? instruments.filter((instrument) => instrument.kind === needed) : instruments;
+  const usual = needed ? (fitting.find(({ isOutOfCheck, status }) => !isOutOfCheck && status === "inService") ?? fitting[0]) : undefined;
+  const [form, fields] = useForm<ReadingFieldset>({
+    id: `reading-${kind}`,
+    lastResult,
+    shouldValidate: "onSubmit",
+    // What a number is, is never filled in for anybody; the prism's index and the liquid's limit belong to the instrument.
+    defaultValue: { requestId, instrument: usual?.ref, quality: "good", facet: "table", light: "sodium", limit: usual?.upperLimit ? String(usual.upperLimit) : undefined, prismN: usual?.prismIndex ? String(usual.prismIndex) : undefined },
+  });
+  const [preview, setPreview] = useState<ComposedReading | null>(null);
+  const [instrumentRef, setInstrumentRef] = useState(usual?.ref ?? "");
+  const navigation = useNavigation();
+  const isSaving = navigation.state === "submitting";
+  const instrument = fitting.find(({ ref }) => ref === instrumentRef) ?? null;
+
+  function onType(event: FormEvent<HTMLFormElement>) {
+    const typed = new FormData(event.currentTarget);
+    const chosen = fitting.find(({ ref }) => ref === typed.get("instrument")) ?? null;
+    setInstrumentRef(chosen?.ref ?? "");
+    const reading = composeReading(readingDraftFromForm(typed), chosen).reading ?? null;
+    setPreview(reading);
+    onDraft?.(reading);
+  }
+
+  return (
+    <Form method="post" preventScrollReset {...getFormProps(form)} onChange={onType} className="grid gap-x-7 gap-y-4 px-4.5 py-4 md:grid-cols-[minmax(0,19rem)_minmax(0,1fr)]">
+      <input type="hidden" name="kind" value={kind} />
+      <input type="hidden" name={fields.requestId.name} defaultValue={fields.requestId.initialValue} key={fields.requestId.key} />
+      {areCandidatesHidden ? <input type="hidden" name="areCandidatesHidden" value="on" /> : null}
+      <div className="md:col-span-2 empty:hidden">
+        <FormAlert errors={form.errors} id={form.errorId} />
+        {caution ? <p className="text-sm text-straw">{caution}</p> : null}
+      </div>
+      <div className="grid content-start gap-3">
+        <ReadingFields kind={kind} fields={fields} />
+        <div className="mt-1 flex flex-wrap gap-2.5">
+          <Button size="bench" busyLabel={isSaving && "Recording"}>
+            Record
+          </Button>
+        </div>
+        <Preview reading={preview} instrument={instrument} />
+      </div>
+      <div className="grid content-start gap-3">
+        {fitting.length > 0 ? (
+          <SelectField
+            key={fields.instrument.key}
+            {...fieldProps(fields.instrument)}
+            label="Instrument"
+            isRequired={needed !== null}
+            emptyLabel={needed ? "Choose" : "By eye"}
+            options={fitting.map(({ ref, name, description, isOutOfCheck }) => ({ value: ref, label: `${name}${description ? `, ${description}` : ""}${isOutOfCheck ? " (check overdue)" : ""}` }))}
+          />
+        ) : needed ? (
+          <p className="text-sm text-straw">No instrument of this kind is in service. Enter it under Instruments, or record “No reading”.</p>
+        ) : null}
+        <RadioGroupField
+          key={fields.quality.key}
+          {...pick(fieldProps(fields.quality))}
+          name={fields.quality.name}
+          label="Quality"
+          isInline
+          defaultValue={fields.quality.initialValue}
+          options={readingQualities.map((value) => ({ value, label: readingQualityNames[value] }))}
+        />
+        <SelectField
+          key={fields.noResultReason.key}
+          {...fieldProps(fields.noResultReason)}
+          label="Why there is no reading"
+          isRequired={false}
+          emptyLabel="There is one"
+          options={noResultReasons.map((value) => ({ value, label: value[0]!.toUpperCase() + value.slice(1) }))}
+        />
+        {kind === "free" ? null : (
+          <TextAreaField key={fields.note.key} {...fieldProps(fields.note)} label="Note" isRequired={false} rows={2} maxLength={2000} />
+        )}
+      </div>
+    </Form>
+  );
+}
+
+const pick = ({ id, errors }: { id: string; errors?: string[] }) => ({ id, errors });
+
+/** What follows from the digits, before they are saved. */
+function Preview({ reading, instrument }: { reading: ComposedReading | null; instrument: BenchInstrument | null }) {
+  const derived = reading?.values.filter(({ formula }) => formula !== null) ?? [];
+  if (derived.length === 0 && !instrument) return null;
+  return (
+    <dl className="grid grid-cols-[auto_1fr] gap-x-3.5 gap-y-1 border-t border-dashed border-rule-2 pt-2.5 text-sm" aria-live="polite">
+      {derived.map((value) => (
+        <div key={value.name} className="contents">
+          <dt className="text-ink-3">{derivedNames[value.name] ?? value.name}</dt>
+          <dd className="font-mono">{withUncertainty(value, value.name === "sg" ? 3 : 4)}</dd>
+        </div>
+      ))}
+      {instrument ? (
+        <div className="contents">
+          <dt className="text-ink-3">Instrument</dt>
+          <dd>
+            {instrument.name}
+            {instrument.check ? `, checked ${instrument.check.checkedOn} on ${instrument.check.referenceMaterial}` : ", no check on record"}
+            {instrument.isOutOfCheck && instrument.check ? <span className="text-straw">; the next one is overdue</span> : null}
+            {instrument.status === "restricted" ? <span className="text-straw">; restricted</span> : null}
+          </dd>
+        </div>
+      ) : null}
+    </dl>
+  );
+}
+
+const derivedNames: Partial<Record<string, string>> = { birefringence: "Birefringence", sg: "Density", n: "Index" };

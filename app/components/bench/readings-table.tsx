@@ -1,0 +1,96 @@
+import { Link } from "react-router";
+import { Chip } from "#app/components/ui/chip.tsx";
+import { EmptyState } from "#app/components/ui/empty-state.tsx";
+import { Cell, HeaderCell, Table } from "#app/components/ui/table.tsx";
+import { observationKindNames, readingQualityNames } from "#app/domain/reading.ts";
+import { readingConditions, readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
+import type { ReadingView } from "#app/features/readings/reading-view.ts";
+
+export type TimedReading = Omit<ReadingView, "observedAt" | "strike"> & { when: string; day: string; strike: { reason: string; when: string; by: string } | null };
+
+type ReadingsTableProps = {
+  readings: readonly TimedReading[];
+  /** Empty where nothing may be struck. */
+  strikeHref: ((sequence: number) => string) | null;
+  canStrike: (reading: TimedReading) => boolean;
+};
+
+/** The newest first. A struck reading stays in its place, crossed through, with its reason in its own words. */
+export function ReadingsTable({ readings, strikeHref, canStrike }: ReadingsTableProps) {
+  if (readings.length === 0) return <EmptyState title="No readings yet">Begin with what harms least: look, weigh, measure, then the polariscope and the refractometer.</EmptyState>;
+  return (
+    <Table caption="Readings">
+      <thead>
+        <tr>
+          <HeaderCell>When</HeaderCell>
+          <HeaderCell>Test</HeaderCell>
+          <HeaderCell>Value</HeaderCell>
+          <HeaderCell>Observed</HeaderCell>
+          <HeaderCell>
+            <span className="sr-only">Strike</span>
+          </HeaderCell>
+        </tr>
+      </thead>
+      <tbody>
+        {[...readings].reverse().map((reading) => (
+          <ReadingRow key={reading.sequence} reading={reading} strikeTo={strikeHref && !reading.strike && canStrike(reading) ? strikeHref(reading.sequence) : null} />
+        ))}
+      </tbody>
+    </Table>
+  );
+}
+
+function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: string | null }) {
+  const { strike, quality, values } = reading;
+  const isStruck = strike !== null;
+  const gap = values.find(({ name }) => name === "birefringence");
+  const small = `block text-xs text-ink-3 ${isStruck ? "line-through decoration-red" : ""}`;
+  return (
+    <tr id={`reading-${reading.sequence}`}>
+      <Cell isStruck={isStruck} className="whitespace-nowrap">
+        <span title={reading.day}>{reading.when}</span>
+        <span className={small}>
+          {initials(reading.observer)} · no. {reading.sequence}
+        </span>
+      </Cell>
+      <Cell isStruck={isStruck}>
+        {observationKindNames[reading.detail.kind]}
+        <span className={small}>{[readingConditions(reading), reading.instrument?.name].filter(Boolean).join(" · ")}</span>
+      </Cell>
+      <Cell isStruck={isStruck} className="font-mono">
+        {quality === "noResult" ? <span className="font-sans">no reading: {reading.noResultReason}</span> : readingValueText(reading)}
+      </Cell>
+      <Cell>
+        {strike ? (
+          <>
+            <span className="text-red">
+              Struck {strike.when} by {initials(strike.by)}: {strike.reason}
+            </span>
+            <span className={small}>{[readingSeenText(reading), reading.note].filter(Boolean).join("; ")}</span>
+          </>
+        ) : (
+          <>
+            <span className="break-words whitespace-pre-line">{readingSeenText(reading)}</span>
+            {reading.note ? <span className="block break-words whitespace-pre-line text-ink-2">{reading.note}</span> : null}
+            {quality === "fair" || quality === "poor" ? <span className="block text-xs text-straw">{readingQualityNames[quality]} quality</span> : null}
+          </>
+        )}
+      </Cell>
+      <Cell className="text-right">
+        <span className="flex flex-wrap items-center justify-end gap-x-3 gap-y-1">
+          {reading.isOfSecondCheck ? <Chip tone="blue">check</Chip> : null}
+          {gap && !isStruck ? <Chip tone="green">δ {gap.value.toFixed(3)}</Chip> : null}
+          {strikeTo ? (
+            <Link to={strikeTo} className="no-print inline-flex min-h-6 items-center text-xs text-ink-3 underline decoration-rule-2 hover:text-red hover:decoration-red" aria-label={`Strike reading ${reading.sequence}`}>
+              Strike
+            </Link>
+          ) : null}
+        </span>
+      </Cell>
+    </tr>
+  );
+}
+
+function initials(name: string): string {
+  return name.split(/\s+/).map((word) => word[0] ?? "").join("").slice(0, 3).toUpperCase();
+}

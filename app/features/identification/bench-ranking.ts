@@ -1,0 +1,40 @@
+/** How one property of one species stands to what was observed, for a lane of the bench. */
+export type Lane = Readonly<{
+  property: string;
+  label: string;
+  verdict: "agrees" | "strained" | "contradicts";
+  because: string;
+  /** In words: "1.757–1.779". */
+  reference: string;
+  observed: string;
+  /** The species' range; null where the property is no number. */
+  range: readonly [number, number] | null;
+  measured: Readonly<{ value: number; u: number }> | null;
+}>;
+
+export type BenchCandidate = Readonly<{ speciesId: string; name: string; probability: number; lanes: readonly Lane[] }>;
+export type RuledOut = Readonly<{
+  speciesId: string;
+  name: string;
+  because: string;
+  /** Readings that contradict it by themselves, by their numbers; empty where only all of them together do. */
+  sequences: readonly number[];
+}>;
+
+/** What the bench shows of a ranking: from saved readings on the server, with the one being typed in the browser. */
+export type BenchRanking = Readonly<{
+  tableVersion: string;
+  modelVersion: string;
+  speciesCount: number;
+  hasEvidence: boolean;
+  candidates: readonly BenchCandidate[];
+  /** Candidates beyond those shown. */
+  otherCount: number;
+  unlisted: number;
+  ruledOut: readonly RuledOut[];
+  ruledOutCount: number;
+  inseparable: ReadonlyArray<Readonly<{ names: readonly string[]; settledBy: string }>>;
+  /** Where the readings stand on the map of index and density. */
+  index: Readonly<{ value: number; u: number }> | null;
+  density: Readonly<{ value: number; u: number }> | null;
+}>;

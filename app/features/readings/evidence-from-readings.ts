@@ -1,0 +1,79 @@
+import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
+import type { Evidence } from "#app/gemmology/ranking/evidence.ts";
+import { characterOf } from "./optic-character.ts";
+
+/** A reading as the ranking takes it: one that was saved, or the one that is being typed. */
+export type RankedReading = Readonly<{ detail: ReadingDetail; quality: ReadingQuality; values: readonly ReadingValue[]; strike?: unknown }>;
+
+/**
+ * What the readings that stand say together, for the ranking. The browser runs it with the reading that is being typed
+ * behind the saved ones, the server with what was saved: one and the same code.
+ */
+export function evidenceFromReadings(readings: readonly RankedReading[]): Evidence {
+  const standing = readings.filter(({ quality, strike }) => quality !== "noResult" && !strike);
+  const evidence: Evidence = {};
+  const ri = standing.flatMap((reading) => riOf(reading) ?? []);
+  if (ri.length > 0) evidence.ri = ri;
+  const polariscope = bestPolariscope(standing);
+  const character = polariscope && characterOf(polariscope);
+  if (character) evidence.opticCharacter = character;
+  if (polariscope?.sign && (character === "uniaxial" || character === "biaxial")) evidence.opticSign = polariscope.sign;
+  const sg = meanDensity(standing);
+  if (sg) evidence.sg = sg;
+  return evidence;
+}
+
+type RiEvidence = NonNullable<Evidence["ri"]>[number];
+
+/** Poor readings say less: their uncertainty is widened, so that one of them cannot outweigh a good one. */
+const widening: Readonly<Record<ReadingQuality, number>> = { good: 1, fair: 1.5, poor: 3, noResult: 1 };
+
+function riOf({ detail, quality, values }: RankedReading): RiEvidence | undefined {
+  const get = (name: ReadingValueName) => values.find((value) => value.name === name);
+  const u = (value: ReadingValue | undefined) => (value?.standardUncertainty ?? 0.0015) * widening[quality];
+  switch (detail.kind) {
+    case "refractometer": {
+      const [low, high, n] = [get("low"), get("high"), get("n")];
+      if (low && high) return { kind: "edges", low: low.value, high: high.value, u: u(low), rotated: detail.isRotated };
+      return n && { kind: "single", n: n.value, u: u(n) };
+    }
+    case "spot": {
+      const n = get("n");
+      return n && { kind: "spot", n: n.value, u: u(n) };
+    }
+    case "criticalAngle": {
+      const [angle, prism] = [get("angleDeg"), get("prismN")];
+      return angle && prism && { kind: "criticalAngle", angleDeg: angle.value, prismN: prism.value, u: (angle.standardUncertainty ?? 0.03) * widening[quality] };
+    }
+    case "overLimit": {
+      const limit = get("limit");
+      return limit && { kind: "overLimit", limit: limit.value };
+    }
+    default:
+      return undefined;
+  }
+}
+
+const qualityOrder: readonly ReadingQuality[] = ["poor", "fair", "good"];
+
+/** The best one; among equals the one that says more, then the later one. */
+function bestPolariscope(readings: readonly RankedReading[]) {
+  const says = (detail: Extract<ReadingDetail, { kind: "polariscope" }>) => ({ undefined: 0, anisotropic: 1 })[String(characterOf(detail)) as "undefined"] ?? 2;
+  return readings
+    .flatMap(({ detail, quality }, at) => (detail.kind === "polariscope" && characterOf(detail) ? [{ detail, quality: qualityOrder.indexOf(quality), says: says(detail), at }] : []))
+    .sort((a, b) => b.quality - a.quality || b.says - a.says || b.at - a.at)[0]?.detail;
+}
+
+/** Several weighings as one: weighted by their uncertainties, and widened where they differ by more than those (Birge). */
+function meanDensity(readings: readonly RankedReading[]): { value: number; u: number } | undefined {
+  const weighings = readings.flatMap(({ values, quality }) => {
+    const sg = values.find(({ name }) => name === "sg");
+    return sg?.standardUncertainty ? [{ value: sg.value, u: sg.standardUncertainty * widening[quality] }] : [];
+  });
+  if (weighings.length === 0) return undefined;
+  const weight = weighings.reduce((sum, { u }) => sum + u ** -2, 0);
+  const value = weighings.reduce((sum, one) => sum + one.value / one.u ** 2, 0) / weight;
+  const chiSquared = weighings.reduce((sum, one) => sum + ((one.value - value) / one.u) ** 2, 0);
+  const birge = weighings.length > 1 ? Math.max(1, Math.sqrt(chiSquared / (weighings.length - 1))) : 1;
+  return { value, u: birge / Math.sqrt(weight) };
+}

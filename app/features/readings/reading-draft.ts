@@ -1,0 +1,55 @@
+import {
+  facets, interferenceFigures, lights, observationKinds, polariscopeBehaviours, readingQualities, spotMethods, weighingMethods,
+  type Facet, type InterferenceFigure, type Light, type ObservationKind, type PolariscopeBehaviour, type ReadingQuality, type SpotMethod, type WeighingMethod,
+} from "#app/domain/reading.ts";
+
+type Seen = { facet: Facet; light: Light };
+
+/** A reading while it is being typed: choices as chosen, numbers as text. */
+export type ReadingDraft = Readonly<
+  { quality: ReadingQuality } & (
+    | ({ kind: "refractometer"; edges: "two" | "one"; low: string; high: string; isRotated: boolean } & Seen)
+    | ({ kind: "spot"; method: SpotMethod; n: string } & Seen)
+    | ({ kind: "overLimit"; limit: string } & Seen)
+    | ({ kind: "criticalAngle"; angleDeg: string; prismN: string } & Seen)
+    | { kind: "polariscope"; behaviour: PolariscopeBehaviour; directionsTried: string; figure: InterferenceFigure; sign: "+" | "-" | null }
+    | { kind: "density"; method: WeighingMethod; massAirCt: string; massLiquidCt: string; tempC: string }
+    | { kind: "weight"; weightCt: string }
+    | { kind: "dimensions"; shape: "round" | "other"; lengthMm: string; widthMm: string; depthMm: string }
+    | { kind: "free"; text: string }
+  )
+>;
+
+/** Reads a form that is still being filled in; what is not chosen yet says nothing, or takes the form's own first choice. */
+export function readingDraftFromForm(form: { get: (name: string) => unknown }): ReadingDraft {
+  const text = (name: string) => {
+    const value = form.get(name);
+    return typeof value === "string" ? value : "";
+  };
+  const one = <T extends string>(name: string, choices: readonly T[]): T => choices.find((choice) => choice === form.get(name)) ?? choices[0]!;
+  const seen = () => ({ facet: one("facet", facets), light: one("light", lights) });
+  const kind: ObservationKind = one("kind", observationKinds);
+  const quality = one("quality", readingQualities);
+  switch (kind) {
+    case "refractometer":
+      return { kind, quality, edges: form.get("isOneEdge") === "on" ? "one" : "two", low: text("low"), high: text("high"), isRotated: form.get("isRotated") === "on", ...seen() };
+    case "spot":
+      return { kind, quality, method: one("method", spotMethods), n: text("n"), ...seen() };
+    case "overLimit":
+      return { kind, quality, limit: text("limit"), ...seen() };
+    case "criticalAngle":
+      return { kind, quality, angleDeg: text("angleDeg"), prismN: text("prismN"), ...seen() };
+    case "polariscope": {
+      const sign = form.get("sign");
+      return { kind, quality, behaviour: polariscopeBehaviours.find((choice) => choice === form.get("behaviour")) ?? "cannotTell", directionsTried: text("directionsTried"), figure: one("figure", interferenceFigures), sign: sign === "+" || sign === "-" ? sign : null };
+    }
+    case "density":
+      return { kind, quality, method: one("method", weighingMethods), massAirCt: text("massAirCt"), massLiquidCt: text("massLiquidCt"), tempC: text("tempC") };
+    case "weight":
+      return { kind, quality, weightCt: text("weightCt") };
+    case "dimensions":
+      return { kind, quality, shape: one("shape", ["other", "round"] as const), lengthMm: text("lengthMm"), widthMm: text("widthMm"), depthMm: text("depthMm") };
+    case "free":
+      return { kind, quality, text: text("text") };
+  }
+}

@@ -1,0 +1,20 @@
+import type { ReadingDetail, ReadingQuality, ReadingValue } from "#app/domain/reading.ts";
+
+/** A reading as its stone's page shows it. */
+export type ReadingView = Readonly<{
+  /** Its number within the stone; stays when it is struck. */
+  sequence: number;
+  detail: ReadingDetail;
+  quality: ReadingQuality;
+  noResultReason: string;
+  note: string;
+  isBlind: boolean;
+  isOfSecondCheck: boolean;
+  observedAt: Date;
+  observer: string;
+  isOwn: boolean;
+  instrument: { name: string; description: string } | null;
+  check: { referenceMaterial: string; checkedAt: Date } | null;
+  values: readonly ReadingValue[];
+  strike: { reason: string; struckAt: Date; by: string } | null;
+}>;

@@ -1,0 +1,83 @@
+import { facetNames, interferenceFigureNames, lightNames, polariscopeBehaviourNames, weighingMethodNames, type Facet, type Light, type ReadingDetail, type ReadingValue, type ReadingValueName } from "#app/domain/reading.ts";
+import { typedDecimal } from "#app/domain/typed-decimal.ts";
+
+type Told = Readonly<{ detail: ReadingDetail; values: readonly ReadingValue[] }>;
+
+/** What was measured, in the digits that were typed: "1.762 – 1.770", "3.997 ± 0.021". Empty where nothing was. */
+export function readingValueText({ detail, values }: Told): string {
+  const get = (name: ReadingValueName) => values.find((value) => value.name === name);
+  const typed = (name: ReadingValueName) => {
+    const value = get(name);
+    return value ? typedDecimal(value.typedText || String(value.value)) : "";
+  };
+  switch (detail.kind) {
+    case "refractometer":
+      return get("low") ? `${typed("low")} – ${typed("high")}` : typed("n");
+    case "spot":
+      return typed("n");
+    case "overLimit":
+      return get("limit") ? `> ${typed("limit")}` : "";
+    case "criticalAngle":
+      return get("n") ? withUncertainty(get("n")!, 4) : "";
+    case "polariscope":
+      return polariscopeBehaviourNames[detail.behaviour];
+    case "density":
+      return get("sg") ? withUncertainty(get("sg")!, 3) : "";
+    case "weight":
+      return get("weightCt") ? `${typed("weightCt")} ct` : "";
+    case "dimensions":
+      return get("lengthMm") ? `${[typed("lengthMm"), typed("widthMm"), typed("depthMm")].join(" × ")} mm` : "";
+    case "free":
+      return "";
+  }
+}
+
+/** What was seen beside the value, in words. */
+export function readingSeenText({ detail, values }: Told): string {
+  const typed = (name: ReadingValueName) => typedDecimal(values.find((value) => value.name === name)?.typedText ?? "");
+  switch (detail.kind) {
+    case "refractometer":
+      return detail.edges === "one" ? "one edge" : detail.isRotated ? "two edges, extremes of a rotation" : "two edges, one position";
+    case "spot":
+      return `spot, ${detail.method}`;
+    case "overLimit":
+      return "only the liquid's edge seen";
+    case "criticalAngle":
+      return values.length > 0 ? `${typed("angleDeg")}° against a prism of ${typed("prismN")}` : "";
+    case "polariscope": {
+      const figure = detail.figure === "notSought" ? "" : detail.figure === "none" ? "no figure found" : interferenceFigureNames[detail.figure].toLowerCase();
+      const sign = detail.sign === "+" ? "positive" : detail.sign === "-" ? "negative" : "";
+      const tried = detail.directionsTried > 0 ? `${detail.directionsTried} ${detail.directionsTried === 1 ? "direction" : "directions"}` : "";
+      return [tried, figure, sign].filter(Boolean).join(", ");
+    }
+    case "density": {
+      if (values.length === 0) return "";
+      return `${typed("massAirCt")} ct in air, ${typed("massLiquidCt")} ct ${detail.method === "suspended" ? "in water" : "gained by the beaker"}`;
+    }
+    case "free":
+      return detail.text;
+    default:
+      return "";
+  }
+}
+
+/** Where and in which light; how it was weighed. */
+export function readingConditions({ detail, values }: Told): string {
+  if (detail.kind === "density") {
+    const tempC = values.find(({ name }) => name === "tempC")?.typedText;
+    return [weighingMethodNames[detail.method].split(",")[0], tempC ? `${typedDecimal(tempC)} °C` : ""].filter(Boolean).join(", ");
+  }
+  if (detail.kind === "dimensions") return detail.shape === "round" ? "round" : "";
+  return "facet" in detail ? seenAt(detail) : "";
+}
+
+function seenAt({ facet, light }: { facet: Facet; light: Light }): string {
+  return `${facetNames[facet].toLowerCase()}, ${light === "sodium" ? "Na" : lightNames[light].split(",")[0]!.toLowerCase()}`;
+}
+
+/** "3.997 ± 0.021": two digits of the uncertainty, the value to the same place. */
+export function withUncertainty({ value, standardUncertainty }: Pick<ReadingValue, "value" | "standardUncertainty">, mostDecimals: number): string {
+  if (!standardUncertainty) return value.toFixed(mostDecimals);
+  const decimals = Math.min(mostDecimals, Math.max(0, 1 - Math.floor(Math.log10(standardUncertainty))));
+  return `${value.toFixed(decimals)} ± ${standardUncertainty.toFixed(decimals)}`;
+}
