@@ -1,0 +1,45 @@
+import type { Confidence, ConclusionDescription, Nature, RejectedAlternative, TreatmentFinding } from "#app/domain/conclusion.ts";
+import type { ConsentCode } from "#app/domain/consent-code.ts";
+import type { ReadingDraft } from "#app/features/readings/reading-draft.ts";
+import type { GemOutline } from "../draw-gem-photo.ts";
+
+export type ClientKey = "ardenne" | "ferro" | "castellan" | "holm" | "museum";
+export type Reading = { draft: ReadingDraft; instrument: string | null; note?: string; struckBecause?: string };
+
+export type Conclusion = {
+  speciesName: string;
+  variety?: string;
+  nature: Nature;
+  natureEvidence: string;
+  confidence?: Confidence;
+  treatments?: TreatmentFinding[];
+  evidence: string;
+  rejected: RejectedAlternative[];
+  limits?: string[];
+  contradictionsExplained?: string;
+  description: Partial<ConclusionDescription>;
+};
+
+/** What becomes of a stone, told as the product's own steps. */
+export type Story = {
+  description: string;
+  photo: { outline: GemOutline; hue: string; lengthMm: number } | null;
+  client: ClientKey;
+  /** Taken in so many days before now. */
+  daysAgo: number;
+  mount?: "loose" | "mounted" | "strung";
+  mass: string;
+  massUnit?: "ct" | "g";
+  condition?: string;
+  declared?: number;
+  isValuationWanted?: boolean;
+  statements?: string;
+  consents?: ConsentCode[];
+  readings?: Reading[];
+  conclusion?: Conclusion;
+  check?: { readings: Reading[]; outcome?: "agreed" | "returned"; reason?: string };
+  valuation?: "draft" | "signed";
+  report?: "authorised" | "issued" | "withdrawn" | "superseded";
+  isPaid?: boolean;
+  isReleased?: boolean;
+};
