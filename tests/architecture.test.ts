@@ -11,7 +11,7 @@ const mayImport: Record<string, readonly string[]> = {
   emails: ["gemmology", "domain"],
   integrations: ["gemmology", "domain"],
   features: ["gemmology", "domain", "db", "reports", "emails", "integrations"],
-  web: ["gemmology", "domain", "db", "features", "integrations", "reports", "env.server.ts"],
+  web: ["gemmology", "domain", "db", "features", "integrations", "env.server.ts"],
   components: ["gemmology", "domain", "features"],
   routes: ["gemmology", "domain", "features", "web", "components", "root.tsx"],
 };

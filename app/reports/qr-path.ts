@@ -19,7 +19,7 @@ export function qrRuns(text: string): { size: number; runs: QrRun[] } {
 }
 
 /** A QR code as one SVG path in a square of `size` units, one unit a module; for labels and receipts. Leave four units of white around it. */
-export function qrSvgPath(text: string): { size: number; path: string } {
+export function qrPath(text: string): { size: number; path: string } {
   const { size, runs } = qrRuns(text);
   return { size, path: runs.map(({ row, column, length }) => `M${column} ${row}h${length}v1h-${length}z`).join("") };
 }

@@ -1,5 +1,6 @@
 import { openDb, type OpenDb } from "#app/db/client.server.ts";
 import { readEnv, type Env } from "#app/env.server.ts";
+import { renderInProcess } from "#app/features/reports/render-in-process.server.ts";
 import type { Services } from "#app/features/services.ts";
 import { createMailer } from "#app/integrations/mailer.server.ts";
 import { createPasswords } from "#app/integrations/passwords.server.ts";
@@ -24,7 +25,7 @@ export function getRuntime(): Runtime {
       fileUrl: env.UPLOADTHING_FILE_URL,
     }),
     mailer: createMailer({ smtpUrl: env.SMTP_URL, from: env.MAIL_FROM }),
-    reportRenderer: createReportRenderer(),
+    reportRenderer: createReportRenderer({ renderInProcess }),
     passwords: createPasswords(),
     publicOrigin: env.PUBLIC_ORIGIN,
   };

@@ -1,4 +1,8 @@
+import { createHash } from "node:crypto";
+import { eq } from "drizzle-orm";
+import sharp from "sharp";
 import { newId } from "#app/db/new-id.server.ts";
+import { reportFiles, reports, stones } from "#app/db/schema/index.ts";
 import type { Operation } from "#app/domain/permissions.ts";
 import { inviteClient } from "#app/features/accounts/invite-client.server.ts";
 import { inviteStaff } from "#app/features/accounts/invite-staff.server.ts";
@@ -12,8 +16,54 @@ import { setMemberRoles } from "#app/features/laboratories/set-member-roles.serv
 import { updateLaboratory } from "#app/features/laboratories/update-laboratory.server.ts";
 import { updatePrices } from "#app/features/laboratories/update-prices.server.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
+import { createClient } from "#app/features/clients/create-client.server.ts";
+import { findClients } from "#app/features/clients/find-clients.server.ts";
+import { getClient } from "#app/features/clients/get-client.server.ts";
+import { grantTerms } from "#app/features/clients/grant-terms.server.ts";
+import { listClients } from "#app/features/clients/list-clients.server.ts";
+import { updateClient } from "#app/features/clients/update-client.server.ts";
+import { getCustodyStanding } from "#app/features/custody/get-custody-standing.server.ts";
+import { listCustody } from "#app/features/custody/list-custody.server.ts";
+import { listHolders } from "#app/features/custody/list-holders.server.ts";
+import { recordHandOver } from "#app/features/custody/record-hand-over.server.ts";
+import { releaseItem } from "#app/features/custody/release-item.server.ts";
+import { editInstrument } from "#app/features/instruments/edit-instrument.server.ts";
+import { findBalances } from "#app/features/instruments/find-balances.server.ts";
+import { getInstrument } from "#app/features/instruments/get-instrument.server.ts";
+import { listInstruments } from "#app/features/instruments/list-instruments.server.ts";
+import { recordInstrumentCheck } from "#app/features/instruments/record-instrument-check.server.ts";
+import { registerInstrument } from "#app/features/instruments/register-instrument.server.ts";
+import { getInvoice } from "#app/features/invoices/get-invoice.server.ts";
+import { listInvoices } from "#app/features/invoices/list-invoices.server.ts";
+import { recordDeskPayment } from "#app/features/invoices/record-desk-payment.server.ts";
+import { refundInvoice } from "#app/features/invoices/refund-invoice.server.ts";
+import { sendInvoice } from "#app/features/invoices/send-invoice.server.ts";
+import { voidInvoice } from "#app/features/invoices/void-invoice.server.ts";
+import { addPhoto } from "#app/features/photos/add-photo.server.ts";
+import { findItemForPhoto } from "#app/features/photos/find-item-for-photo.server.ts";
+import { getPhoto } from "#app/features/photos/get-photo.server.ts";
+import { removePhoto } from "#app/features/photos/remove-photo.server.ts";
+import { authoriseReport } from "#app/features/reports/authorise-report.server.ts";
+import { getReport } from "#app/features/reports/get-report.server.ts";
+import { issueReportByNumber } from "#app/features/reports/issue-report-by-number.server.ts";
+import { listReports } from "#app/features/reports/list-reports.server.ts";
+import { previewReport } from "#app/features/reports/preview-report.server.ts";
+import { readReportPdf } from "#app/features/reports/read-report-pdf.server.ts";
+import { reopenStone } from "#app/features/reports/reopen-stone.server.ts";
+import { retryPdf } from "#app/features/reports/retry-pdf.server.ts";
+import { withdrawReport } from "#app/features/reports/withdraw-report.server.ts";
+import { listStones } from "#app/features/stones/list-stones.server.ts";
+import { getLetterhead } from "#app/features/take-ins/get-letterhead.server.ts";
+import { getTakeIn } from "#app/features/take-ins/get-take-in.server.ts";
+import { takeInItems } from "#app/features/take-ins/take-in-items.server.ts";
+import { getValuation } from "#app/features/valuations/get-valuation.server.ts";
+import { saveValuation } from "#app/features/valuations/save-valuation.server.ts";
+import { signValuation } from "#app/features/valuations/sign-valuation.server.ts";
+import type { ValuationInput } from "#app/features/valuations/valuation-forms.server.ts";
 import { aRequestId } from "../setup/an-app.ts";
-import { aClient, aMember } from "../setup/factories.ts";
+import { anInvoice } from "../setup/an-invoice.ts";
+import { aClient, aMember, anInstrument } from "../setup/factories.ts";
+import { aTakenInItem, itemInput, takeInInput } from "../setup/take-in-factory.ts";
 
 /** One feature operation, so that permission-matrix.test.ts can run it as every role and against another laboratory's rows. */
 export type OperationEntry<Ids> = {
@@ -25,8 +75,10 @@ export type OperationEntry<Ids> = {
   call: (ctx: LabContext, ids: Ids) => Promise<unknown>;
   /** It names no row, so another laboratory's cannot be asked for. */
   hasNoIds?: true;
-  /** With the role, it may still be refused for the state the rows are in. */
-  mayBeRefused?: true;
+  /** With the role, it may still be refused for the state the rows are in; "absent": for a part that `rows` does not make. */
+  mayBeRefused?: true | "absent";
+  /** A list below a row: of another laboratory's row it is empty instead of not found. */
+  isEmptyElsewhere?: true;
 };
 
 /** Keeps the type of `rows` and `call` together and forgets it in the list. */
@@ -37,6 +89,37 @@ function entry<Ids>(described: OperationEntry<Ids>): OperationEntry<unknown> {
 const nothing = async () => undefined;
 const settings = { name: "Renamed", addressLines: ["1 Row"], phone: "", email: "", timeZone: "UTC", isSolePractice: false, taxLabel: "VAT", taxShareE4: 0, usualDays: 5, selfCheckDelayHours: 24, custodyLimitMinor: null, version: 1 };
 const anInvitation = () => ({ name: "Odo", email: `${aRequestId()}@example.test`, title: "", roles: ["desk"] as const, requestId: aRequestId() });
+
+const clientDetails = { name: "Ferro & Daughters", contactName: "", email: "", phone: "", addressLines: ["4 Quay"], note: "" };
+const instrumentDetails = () => ({ kind: "refractometer" as const, name: `R-${aRequestId().slice(-8)}`, description: "", serial: "", location: "", resolution: 0.001, standardUncertainty: 0.0015, upperLimit: 1.81, prismIndex: null });
+const mass = { massText: "2.143", massUnit: "ct", seal: "", remark: "" } as const;
+const anItem = (lab: LabContext) => aTakenInItem(lab);
+const aStoneCode = async (lab: LabContext) => (await aTakenInItem(lab)).stoneCodes[0]!;
+const anInvoiceNumber = async (lab: LabContext) => (await anInvoice(lab)).number;
+const valuation: ValuationInput = {
+  rowVersion: 0, purpose: "Insurance", intendedUse: "Insurance", intendedUsers: "The owner", valueType: "retailReplacementNew", valueDefinition: "As defined", valueDefinitionSource: "House definition", marketLevel: "retailIndependent", marketPlace: "Port Ellery",
+  inspection: "In hand", inspectedOn: null, effectiveOn: "2026-12-01", currency: "EUR", amount: "", amountMinor: null, isTaxIncluded: false, approachReasoning: "", otherApproachesWhyNot: "", limitingConditions: [], certification: [], priorServices: "", comparables: [],
+};
+
+async function aPicture(): Promise<Buffer> {
+  return sharp({ create: { width: 32, height: 32, channels: 3, background: "#b3154a" } }).jpeg().toBuffer();
+}
+
+async function aPhoto(lab: LabContext) {
+  const { itemId } = await aTakenInItem(lab);
+  return addPhoto(lab, { itemId, bytes: await aPicture(), fileName: "photo.jpg", sourceKey: "upload-1" });
+}
+
+/** A report as the database holds it; what it says does not matter here. */
+async function aReportNumber(lab: LabContext): Promise<string> {
+  const code = await aStoneCode(lab);
+  const [stone] = await lab.db.select({ id: stones.id, clientId: stones.clientId }).from(stones).where(eq(stones.code, code));
+  const number = `${lab.laboratory.prefix}-R-26-00001`;
+  const id = newId<"report">();
+  await lab.db.insert(reports).values({ laboratoryId: lab.laboratoryId, id, number, kind: "identification", stoneId: stone!.id, clientId: stone!.clientId, state: "issued", version: 1, pdfState: "failed", authorisedBy: lab.actorId, authorisedAt: lab.now, issuedAt: lab.now, createdAt: lab.now });
+  await lab.db.insert(reportFiles).values({ laboratoryId: lab.laboratoryId, reportId: id, pdf: Buffer.from("%PDF-"), sha256: createHash("sha256").update("%PDF-").digest(), sizeBytes: 5, templateVersion: "test", renderedAt: lab.now });
+  return number;
+}
 
 /** One entry an operation. */
 export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
@@ -72,4 +155,87 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
     call: (ctx, invitationId) => withdrawInvitation(ctx, { invitationId }),
   }),
   entry({ name: "inviteClient", operation: "clients.manage", rows: (lab) => aClient(lab), call: (ctx, clientId) => inviteClient(ctx, { clientId, requestId: newId() }) }),
+
+  // clients
+  entry({ name: "createClient", operation: "clients.manage", rows: nothing, call: (ctx) => createClient(ctx, { ...clientDetails, requestId: newId<"client">() }), hasNoIds: true }),
+  entry({ name: "findClients", operation: "clients.read", rows: nothing, call: (ctx) => findClients(ctx, "fer"), hasNoIds: true }),
+  entry({ name: "listClients", operation: "clients.read", rows: nothing, call: (ctx) => listClients(ctx), hasNoIds: true }),
+  entry({ name: "getClient", operation: "clients.read", rows: (lab) => aClient(lab), call: (ctx, id) => getClient(ctx, id) }),
+  entry({ name: "updateClient", operation: "clients.manage", rows: (lab) => aClient(lab), call: (ctx, id) => updateClient(ctx, id, { ...clientDetails, version: 1 }) }),
+  entry({ name: "grantTerms", operation: "clients.grantTerms", rows: (lab) => aClient(lab), call: (ctx, id) => grantTerms(ctx, id, { terms: "account", version: 1 }) }),
+
+  // take-in and custody
+  entry({ name: "takeInItems", operation: "takeIn.create", rows: (lab) => takeInInput(lab), call: async (ctx, input) => takeInItems(ctx, { ...input, items: [itemInput(await anInstrument(ctx))] }), mayBeRefused: true }),
+  entry({ name: "getTakeIn", operation: "takeIn.read", rows: anItem, call: (ctx, { takeInNumber }) => getTakeIn(ctx, takeInNumber) }),
+  entry({ name: "getLetterhead", operation: "takeIn.read", rows: nothing, call: (ctx) => getLetterhead(ctx), hasNoIds: true }),
+  entry({ name: "getCustodyStanding", operation: "declaredValue.read", rows: nothing, call: (ctx) => getCustodyStanding(ctx), hasNoIds: true }),
+  entry({ name: "listHolders", operation: "takeIn.read", rows: nothing, call: (ctx) => listHolders(ctx), hasNoIds: true }),
+  entry({ name: "listCustody", operation: "takeIn.read", rows: anItem, call: (ctx, { itemNumber }) => listCustody(ctx, itemNumber), isEmptyElsewhere: true }),
+  entry({
+    name: "recordHandOver",
+    operation: "custody.record",
+    rows: anItem,
+    call: (ctx, { itemNumber }) => recordHandOver(ctx, { ...mass, requestId: newId<"custodyEvent">(), itemNumber, purpose: "toBench", toPlace: "Bench 2", holder: undefined }),
+  }),
+  entry({
+    name: "releaseItem",
+    operation: "custody.release",
+    rows: anItem,
+    call: (ctx, { itemNumber }) => releaseItem(ctx, { ...mass, requestId: newId<"custodyEvent">(), itemNumber, collectedBy: "L. Ardenne", idSeen: "passport", isConditionAgreed: true }),
+    mayBeRefused: true,
+  }),
+  entry({ name: "listStones", operation: "stones.read", rows: nothing, call: (ctx) => listStones(ctx), hasNoIds: true }),
+
+  // photographs
+  entry({ name: "findItemForPhoto", operation: "photos.add", rows: anItem, call: (ctx, { itemNumber }) => findItemForPhoto(ctx, itemNumber) }),
+  entry({ name: "addPhoto", operation: "photos.add", rows: anItem, call: async (ctx, { itemId }) => addPhoto(ctx, { itemId, bytes: await aPicture(), fileName: "photo.jpg", sourceKey: "upload-2" }) }),
+  entry({ name: "getPhoto", operation: "stones.read", rows: aPhoto, call: (ctx, id) => getPhoto(ctx, id, "full") }),
+  entry({ name: "removePhoto", operation: "photos.add", rows: aPhoto, call: (ctx, id) => removePhoto(ctx, id) }),
+
+  // instruments
+  entry({ name: "registerInstrument", operation: "instruments.manage", rows: nothing, call: (ctx) => registerInstrument(ctx, { ...instrumentDetails(), requestId: newId<"instrument">() }), hasNoIds: true }),
+  entry({ name: "listInstruments", operation: "instruments.read", rows: nothing, call: (ctx) => listInstruments(ctx), hasNoIds: true }),
+  entry({ name: "findBalances", operation: "instruments.read", rows: nothing, call: (ctx) => findBalances(ctx), hasNoIds: true }),
+  entry({ name: "getInstrument", operation: "instruments.read", rows: (lab) => anInstrument(lab), call: (ctx, id) => getInstrument(ctx, id) }),
+  entry({ name: "editInstrument", operation: "instruments.manage", rows: (lab) => anInstrument(lab), call: (ctx, id) => editInstrument(ctx, id, { ...instrumentDetails(), version: 1, status: "inService", statusReason: "" }) }),
+  entry({
+    name: "recordInstrumentCheck",
+    operation: "instruments.manage",
+    rows: (lab) => anInstrument(lab),
+    call: (ctx, id) =>
+      recordInstrumentCheck(ctx, id, { requestId: newId<"instrumentCheck">(), referenceMaterial: "Quartz", nominal: { value: 1.544, text: "1.544" }, reading: { value: 1.544, text: "1.544" }, limit: { value: 0.001, text: "0.001" }, tempC: 21, nextDueOn: "2026-12-08", note: "" }),
+  }),
+
+  // invoices
+  entry({ name: "listInvoices", operation: "invoices.read", rows: nothing, call: (ctx) => listInvoices(ctx, {}), hasNoIds: true }),
+  entry({ name: "getInvoice", operation: "invoices.read", rows: anInvoiceNumber, call: (ctx, number) => getInvoice(ctx, { number }) }),
+  entry({ name: "sendInvoice", operation: "invoices.manage", rows: anInvoiceNumber, call: (ctx, number) => sendInvoice(ctx, { number }) }),
+  entry({ name: "recordDeskPayment", operation: "invoices.manage", rows: anInvoiceNumber, call: (ctx, number) => recordDeskPayment(ctx, { number, method: "cash", reference: "slip 1" }) }),
+  entry({ name: "voidInvoice", operation: "invoices.manage", rows: anInvoiceNumber, call: (ctx, number) => voidInvoice(ctx, { number, reason: "made by mistake" }), mayBeRefused: true }),
+  entry({
+    name: "refundInvoice",
+    operation: "invoices.manage",
+    rows: async (lab) => {
+      const number = await anInvoiceNumber(lab);
+      await recordDeskPayment(lab, { number, method: "cash", reference: "slip 1" });
+      return number;
+    },
+    call: (ctx, number) => refundInvoice(ctx, { number, reason: "given back" }),
+  }),
+
+  // valuations
+  entry({ name: "getValuation", operation: "valuations.read", rows: aStoneCode, call: (ctx, stoneCode) => getValuation(ctx, { stoneCode }) }),
+  entry({ name: "saveValuation", operation: "valuations.write", rows: aStoneCode, call: (ctx, stoneCode) => saveValuation(ctx, { stoneCode, input: valuation }), mayBeRefused: true }),
+  entry({ name: "signValuation", operation: "valuations.write", rows: aStoneCode, call: (ctx, stoneCode) => signValuation(ctx, { stoneCode, rowVersion: 1 }), mayBeRefused: "absent" }),
+
+  // reports
+  entry({ name: "authoriseReport", operation: "reports.authoriseIdentification", rows: aStoneCode, call: (ctx, stoneCode) => authoriseReport(ctx, { stoneCode }), mayBeRefused: true }),
+  entry({ name: "previewReport", operation: "conclusions.read", rows: aStoneCode, call: (ctx, stoneCode) => previewReport(ctx, { stoneCode }), mayBeRefused: true }),
+  entry({ name: "listReports", operation: "reports.read", rows: nothing, call: (ctx) => listReports(ctx, {}), hasNoIds: true }),
+  entry({ name: "getReport", operation: "reports.read", rows: aReportNumber, call: (ctx, number) => getReport(ctx, { number }) }),
+  entry({ name: "readReportPdf", operation: "reports.read", rows: aReportNumber, call: (ctx, number) => readReportPdf(ctx, { number }) }),
+  entry({ name: "issueReportByNumber", operation: "reports.issue", rows: aReportNumber, call: (ctx, number) => issueReportByNumber(ctx, { number }), mayBeRefused: true }),
+  entry({ name: "retryPdf", operation: "reports.issue", rows: aReportNumber, call: (ctx, number) => retryPdf(ctx, { number }) }),
+  entry({ name: "withdrawReport", operation: "reports.withdraw", rows: aReportNumber, call: (ctx, number) => withdrawReport(ctx, { number, reason: "identityError", note: "wrong stone" }) }),
+  entry({ name: "reopenStone", operation: "reports.withdraw", rows: aStoneCode, call: (ctx, stoneCode) => reopenStone(ctx, { stoneCode, reason: "amend" }), mayBeRefused: true }),
 ];

@@ -1,6 +1,7 @@
 import loraUrl from "@fontsource/lora/files/lora-latin-500-normal.woff2?url";
 import plexMonoUrl from "@fontsource/ibm-plex-mono/files/ibm-plex-mono-latin-400-normal.woff2?url";
 import plexUrl from "@fontsource/ibm-plex-sans/files/ibm-plex-sans-latin-400-normal.woff2?url";
+import plexBoldUrl from "@fontsource/ibm-plex-sans/files/ibm-plex-sans-latin-600-normal.woff2?url";
 import { registerStyle } from "./register-style.ts";
 
 /** A whole HTML document without any script, so that it opens anywhere at once. */
@@ -8,6 +9,7 @@ export function RegisterDocument({ title, children, isIndexed = false }: { title
   const fonts = [
     ["Lora", 500, loraUrl],
     ["IBM Plex Sans", 400, plexUrl],
+    ["IBM Plex Sans", 600, plexBoldUrl],
     ["IBM Plex Mono", 400, plexMonoUrl],
   ] as const;
   const faces = fonts.map(([family, weight, url]) => `@font-face{font-family:"${family}";font-weight:${weight};font-display:swap;src:url(${url}) format("woff2")}`);

@@ -13,7 +13,7 @@ h1,h2,.lab{font-family:Lora,Georgia,serif;font-weight:500;line-height:1.25}
 .lab{font-size:1.15rem;margin:0}.lab+p{margin:0;color:var(--ink2);font-size:.875rem}
 h1{font-size:1.65rem;margin:1.4rem 0 .2rem}h2{font-size:1.15rem;margin:1.4rem 0 .3rem}
 .state{display:flex;gap:.9rem;align-items:flex-start;border-radius:.6rem;padding:1rem}
-.state svg{flex:none;width:1.75rem;height:1.75rem;margin-top:.1rem}.state b{display:block}.state p{margin:0;font-size:.9rem}
+.state svg{flex:none;width:1.75rem;height:1.75rem;margin-top:.1rem}b{font-weight:600}.state b{display:block}.state p{margin:0;font-size:.9rem}
 .good{background:var(--greenbg);color:var(--green)}.bad{background:var(--redbg);color:var(--red)}.care{background:var(--strawbg);color:var(--straw)}
 .sub{color:var(--ink2);margin:.1rem 0 0}
 .two{display:grid;gap:0 1.5rem}@media (min-width:40rem){.two.pic{grid-template-columns:1fr 15rem}}

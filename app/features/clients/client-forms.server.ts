@@ -28,5 +28,6 @@ const details = {
 export const createClientForm = z.object({ requestId: requestIdField<"client">(), ...details });
 export const updateClientForm = z.object({ version: versionField(), ...details });
 export const grantTermsForm = z.object({ terms: z.enum(["prepaid", "account"], { error: "Choose the terms." }), version: versionField() });
+export const inviteClientForm = z.object({ requestId: requestIdField<"emailToken">() });
 
 export type ClientDetails = Omit<z.output<typeof createClientForm>, "requestId">;

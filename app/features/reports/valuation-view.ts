@@ -8,6 +8,8 @@ import type { ReportMatter } from "./load-report-matter.server.ts";
 export function valuationView(valuation: NonNullable<ReportMatter["valuation"]>, comparables: ReportMatter["comparables"]): ValuationView {
   const fact = (label: string, value: string) => ({ label, parts: [{ text: value }] });
   return {
+    // The reporting option must be named (USPAP Standards Rule 8-2); this product writes the full one.
+    option: { name: "Appraisal report", useRestriction: `For ${valuation.intendedUse}, by ${valuation.intendedUsers}; no other use or user is intended.` },
     value: formatMoney({ amountMinor: valuation.amountMinor!, currency: valuation.currency }),
     valueType: valueTypeNames[valuation.valueType],
     valueDefinition: valuation.valueDefinition,

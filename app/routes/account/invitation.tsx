@@ -102,7 +102,7 @@ export default function InvitationRoute({ loaderData, actionData, params }: Rout
         </CardBody>
       </Card>
       <p className="mt-4 text-sm text-ink-3">
-        Do you not know this laboratory? Then leave the page; nothing happens. <Link to="/">What Isogyre is</Link>
+        Do you not know this laboratory? Then leave the page; nothing happens. <Link to="/" className="text-tint">What Isogyre is</Link>
       </p>
     </>
   );

@@ -14,9 +14,11 @@ import { isAllowed } from "#app/domain/permissions.ts";
 import { idFromShortRef } from "#app/domain/short-ref.ts";
 import { serviceNames } from "#app/domain/take-in.ts";
 import { formatWeekdayDate } from "#app/domain/working-days.ts";
-import { grantTermsForm, updateClientForm } from "#app/features/clients/client-forms.server.ts";
+import { grantTermsForm, inviteClientForm, updateClientForm } from "#app/features/clients/client-forms.server.ts";
+import { inviteClient } from "#app/features/accounts/invite-client.server.ts";
 import { getClient } from "#app/features/clients/get-client.server.ts";
 import { grantTerms } from "#app/features/clients/grant-terms.server.ts";
+import { newRequestId } from "#app/features/new-request-id.server.ts";
 import { updateClient } from "#app/features/clients/update-client.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
@@ -33,7 +35,7 @@ function clientIdOf(ref: string) {
 export async function loader({ context, params }: Route.LoaderArgs) {
   const ctx = context.get(labContext);
   const client = await orResponse(getClient(ctx, clientIdOf(params.clientRef)));
-  return { client, timeZone: ctx.laboratory.timeZone, canManage: isAllowed(ctx.roles, "clients.manage"), canGrant: isAllowed(ctx.roles, "clients.grantTerms"), canTakeIn: isAllowed(ctx.roles, "takeIn.create") };
+  return { client, requestId: newRequestId(), timeZone: ctx.laboratory.timeZone, canManage: isAllowed(ctx.roles, "clients.manage"), canGrant: isAllowed(ctx.roles, "clients.grantTerms"), canTakeIn: isAllowed(ctx.roles, "takeIn.create") };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
@@ -51,6 +53,16 @@ export async function action({ request, context, params }: Route.ActionArgs) {
     }
     return redirect(here, { headers: { "Set-Cookie": await noticeHeader(submission.value.terms === "account" ? "This client has account terms now." : "This client pays before issue again.") } });
   }
+  if (formData.get("intent") === "invite") {
+    const submission = parseWithZod(formData, { schema: inviteClientForm });
+    if (submission.status !== "success") return formInvalid(submission);
+    try {
+      const { to } = await inviteClient(ctx, { clientId, requestId: submission.value.requestId });
+      return redirect(here, { headers: { "Set-Cookie": await noticeHeader(`A link to their own pages is on its way to ${to}.`) } });
+    } catch (error) {
+      return formRefused(submission, error);
+    }
+  }
   const submission = parseWithZod(formData, { schema: updateClientForm });
   if (submission.status !== "success") return formInvalid(submission);
   try {
@@ -64,7 +76,7 @@ export async function action({ request, context, params }: Route.ActionArgs) {
 export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: `${(loaderData as { client?: { name: string } } | undefined)?.client?.name ?? "Client"} · Isogyre` }];
 
 export default function ClientRoute({ loaderData, actionData, params }: Route.ComponentProps) {
-  const { client, timeZone, canManage, canGrant, canTakeIn } = loaderData;
+  const { client, requestId, timeZone, canManage, canGrant, canTakeIn } = loaderData;
   const base = `/lab/${params.labSlug}`;
   return (
     <>
@@ -136,6 +148,23 @@ export default function ClientRoute({ loaderData, actionData, params }: Route.Co
               />
             </CardBody>
           </Card>
+          {canManage ? (
+            <Card title="Their own pages" id="own-pages">
+              <CardBody>
+                <p className="text-ink-2">With a link by e-mail the client can follow their items, pay, and fetch their reports.</p>
+                {client.email ? (
+                  <Form method="post" className="mt-3">
+                    <input type="hidden" name="requestId" value={requestId} />
+                    <Button look="quiet" name="intent" value="invite">
+                      Send the link
+                    </Button>
+                  </Form>
+                ) : (
+                  <p className="mt-2 text-sm text-ink-3">There is no e-mail address yet. Add one first.</p>
+                )}
+              </CardBody>
+            </Card>
+          ) : null}
           <Card title="Terms" id="terms">
             <CardBody>
               <p className="text-ink-2">

@@ -26,7 +26,7 @@ import { getCustodyStanding } from "#app/features/custody/get-custody-standing.s
 import { findBalances } from "#app/features/instruments/find-balances.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import { examinedCount } from "#app/features/take-ins/examined-count.ts";
-import { listPrices } from "#app/features/take-ins/list-prices.server.ts";
+import { listOfferedServices } from "#app/features/take-ins/list-offered-services.server.ts";
 import { servicesOf } from "#app/features/take-ins/services-of.ts";
 import { takeInForm } from "#app/features/take-ins/take-in-forms.server.ts";
 import { takeInItems } from "#app/features/take-ins/take-in-items.server.ts";
@@ -41,7 +41,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   const ctx = context.get(labContext);
   const { laboratory, now } = ctx;
   const clientId = idFromShortRef<"client">(url.searchParams.get("client") ?? "");
-  const [prices, balances, standing, client] = await orResponse(Promise.all([listPrices(ctx), findBalances(ctx), getCustodyStanding(ctx), clientId ? getClient(ctx, clientId) : null]));
+  const [prices, balances, standing, client] = await orResponse(Promise.all([listOfferedServices(ctx), findBalances(ctx), getCustodyStanding(ctx), clientId ? getClient(ctx, clientId) : null]));
   const today = calendarDateIn(now, laboratory.timeZone);
   return {
     requestId: newRequestId(),

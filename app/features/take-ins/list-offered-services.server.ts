@@ -3,8 +3,8 @@ import { prices } from "#app/db/schema/index.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import { requireRole } from "#app/features/require-role.ts";
 
-/** The price list that a fee is agreed from. */
-export async function listPrices(ctx: LabContext) {
+/** The services on offer and their prices: what a fee is agreed from. */
+export async function listOfferedServices(ctx: LabContext) {
   requireRole(ctx, "prices.read");
   return ctx.db
     .select({ service: prices.service, label: prices.label, amountMinor: prices.amountMinor })
