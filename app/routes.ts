@@ -5,6 +5,8 @@ export default [
   route("healthz", "routes/healthz.ts"),
   route("room", "routes/room.ts"),
 
+  route("species-table/:fileName", "routes/species-table.ts"),
+
   // accounts
   layout("routes/account/layout.tsx", [
     route("sign-in", "routes/account/sign-in.tsx"),
@@ -66,6 +68,10 @@ export default [
       route("instruments/:instrumentRef", "routes/lab/instruments/detail.tsx"),
 
       // bench
+      route("stones/:stoneCode", "routes/lab/stones/bench.tsx"),
+      route("stones/:stoneCode/readings/:sequence/strike", "routes/lab/stones/strike.tsx"),
+      route("stones/:stoneCode/conclusion", "routes/lab/stones/conclusion.tsx"),
+      route("stones/:stoneCode/second-check", "routes/lab/stones/second-check.tsx"),
       route("stones/:stoneCode/valuation", "routes/lab/stones/valuation.tsx"),
       route("stones/:stoneCode/report", "routes/lab/stones/report.tsx"),
       route("stones/:stoneCode/report/draft.pdf", "routes/lab/stones/report-draft.ts"),

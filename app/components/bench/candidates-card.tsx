@@ -8,7 +8,7 @@ import { EvidenceLanes } from "./evidence-lanes.tsx";
 export function CandidatesCard({ ranking, isWithTyped = false }: { ranking: BenchRanking; /** The reading that is being typed is counted in. */ isWithTyped?: boolean }) {
   const { candidates, hasEvidence, speciesCount } = ranking;
   return (
-    <Card title="Candidates" note={`of ${speciesCount} species, equal before the readings`} aside={<>{isWithTyped ? <Chip tone="blue">with what you type</Chip> : null}<Chip tone="tint">Table {ranking.tableVersion}</Chip></>}>
+    <Card title="Candidates" note={`of ${speciesCount} species, weighed by how common they are`} aside={<>{isWithTyped ? <Chip tone="blue">with what you type</Chip> : null}<Chip tone="tint">Table {ranking.tableVersion}</Chip></>}>
       {hasEvidence ? (
         <div aria-live="polite" aria-atomic="false">
           <ol>
@@ -58,10 +58,10 @@ const mostShown = 3;
 
 function RuledOutList({ ranking: { ruledOut, ruledOutCount } }: { ranking: BenchRanking }) {
   if (ruledOutCount === 0) return null;
-  const reason = ({ name, because, sequences }: (typeof ruledOut)[number]) => (
+  const reason = ({ name, because, readings }: (typeof ruledOut)[number]) => (
     <>
       {name}: {because}
-      {sequences.length > 0 ? ` (reading ${sequences.join(", ")})` : ""}.
+      {readings.length > 0 ? ` (${readings.map(({ sequence }) => (sequence === null ? "what you type" : `reading ${sequence}`)).join(", ")})` : ""}.
     </>
   );
   return (
@@ -79,6 +79,7 @@ function RuledOutList({ ranking: { ruledOut, ruledOutCount } }: { ranking: Bench
             {ruledOut.slice(mostShown).map((one) => (
               <li key={one.speciesId}>{reason(one)}</li>
             ))}
+            {ruledOutCount > ruledOut.length ? <li>{ruledOutCount - ruledOut.length} less likely ones are ruled out as well.</li> : null}
           </ul>
         </details>
       ) : null}

@@ -3,10 +3,8 @@ import { Chip } from "#app/components/ui/chip.tsx";
 import { EmptyState } from "#app/components/ui/empty-state.tsx";
 import { Cell, HeaderCell, Table } from "#app/components/ui/table.tsx";
 import { observationKindNames, readingQualityNames } from "#app/domain/reading.ts";
+import type { TimedReading } from "#app/features/readings/present-readings.ts";
 import { readingConditions, readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
-import type { ReadingView } from "#app/features/readings/reading-view.ts";
-
-export type TimedReading = Omit<ReadingView, "observedAt" | "strike"> & { when: string; day: string; strike: { reason: string; when: string; by: string } | null };
 
 type ReadingsTableProps = {
   readings: readonly TimedReading[];

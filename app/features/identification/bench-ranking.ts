@@ -1,3 +1,5 @@
+export type Measured = Readonly<{ value: number; u: number }>;
+
 /** How one property of one species stands to what was observed, for a lane of the bench. */
 export type Lane = Readonly<{
   property: string;
@@ -7,9 +9,8 @@ export type Lane = Readonly<{
   /** In words: "1.757–1.779". */
   reference: string;
   observed: string;
-  /** The species' range; null where the property is no number. */
-  range: readonly [number, number] | null;
-  measured: Readonly<{ value: number; u: number }> | null;
+  /** Null where the property is no number. */
+  scale: Readonly<{ axisMin: number; axisMax: number; referenceLow: number; referenceHigh: number; observedLow: number; observedHigh: number; u: number }> | null;
 }>;
 
 export type BenchCandidate = Readonly<{ speciesId: string; name: string; probability: number; lanes: readonly Lane[] }>;
@@ -17,8 +18,8 @@ export type RuledOut = Readonly<{
   speciesId: string;
   name: string;
   because: string;
-  /** Readings that contradict it by themselves, by their numbers; empty where only all of them together do. */
-  sequences: readonly number[];
+  /** Readings that contradict it by themselves; without a number the one that is being typed; none where only all of them together do. */
+  readings: ReadonlyArray<Readonly<{ sequence: number | null; because: string }>>;
 }>;
 
 /** What the bench shows of a ranking: from saved readings on the server, with the one being typed in the browser. */
@@ -31,10 +32,11 @@ export type BenchRanking = Readonly<{
   /** Candidates beyond those shown. */
   otherCount: number;
   unlisted: number;
+  /** The likeliest of them first; on the server not all. */
   ruledOut: readonly RuledOut[];
   ruledOutCount: number;
   inseparable: ReadonlyArray<Readonly<{ names: readonly string[]; settledBy: string }>>;
   /** Where the readings stand on the map of index and density. */
-  index: Readonly<{ value: number; u: number }> | null;
-  density: Readonly<{ value: number; u: number }> | null;
+  index: Measured | null;
+  density: Measured | null;
 }>;

@@ -10,7 +10,7 @@ import { requireRole } from "#app/features/require-role.ts";
 import { moveExamination } from "#app/features/stones/move-examination.server.ts";
 import type { ConclusionInput } from "./conclusion-forms.server.ts";
 import { conclusionGate } from "./conclusion-gate.ts";
-import { rankStone } from "./rank-stone.server.ts";
+import { findSpeciesId, rankStone } from "./rank-stone.server.ts";
 
 /**
  * examining → concluded, by a person. Refused while the evidence does not carry it; the ranking that lay before the
@@ -41,12 +41,13 @@ export async function proposeConclusion(ctx: LabContext, { stoneCode, requestId,
 
     const readings = await listReadings(scope, { stoneCode });
     const examined = readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck);
-    const { ranking, table, speciesIdOf, contradictionsOf } = await rankStone(scope, { readings: examined });
-    const speciesId = speciesIdOf(input.speciesName);
+    const { snapshot, contradictionsOf } = await rankStone(scope, { readings: examined });
+    const speciesId = findSpeciesId(input.speciesName);
     const problems = conclusionGate(examined, speciesId && input.confidence !== "notDetermined" ? contradictionsOf(speciesId) : [], input);
     const [first] = Object.values(problems);
     if (first) throw new AppError("invalid_input", first[0] ?? "This conclusion is not carried by the readings.", { fieldErrors: problems });
 
+    const ranked = snapshot();
     if (stone.state === "returned") await moveExamination(scope, { stoneId: stone.id, from: "returned", to: "examining", why: "Examination taken up again after the check returned it" });
     await moveExamination(scope, { stoneId: stone.id, from: "examining", to: "concluded", why: "Conclusion proposed" });
     await tx.update(stones).set({ version: sql`${stones.version} + 1` }).where(and(eq(stones.laboratoryId, laboratoryId), eq(stones.id, stone.id)));
@@ -57,9 +58,9 @@ export async function proposeConclusion(ctx: LabContext, { stoneCode, requestId,
       version: (latest?.version ?? 0) + 1,
       speciesId,
       ...input,
-      ranking,
-      speciesTableVersion: table.version,
-      modelVersion: ranking.modelVersion,
+      ranking: ranked,
+      speciesTableVersion: ranked.ranking.tableVersion,
+      modelVersion: ranked.ranking.modelVersion,
       concludedAt: now,
       concludedBy: actorId,
     });

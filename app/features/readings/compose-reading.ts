@@ -3,7 +3,7 @@ import { decimalPlaces, parseDecimal } from "#app/domain/decimal.ts";
 import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
 import { derivedDensity, derivedIndex, differenceOfEdges } from "./derived-values.ts";
 import type { ReadingDraft } from "./reading-draft.ts";
-import { angleUncertaintyDeg, edgeUncertainty, gaugeUncertaintyMm, prismIndexUncertainty, spotUncertainty, waterWeighingUncertaintyCt, weighingUncertaintyCt } from "./usual-uncertainty.ts";
+import { angleUncertaintyDeg, edgeUncertainty, gaugeUncertaintyMm, spotUncertainty, usualUncertainty, waterWeighingUncertaintyCt, weighingUncertaintyCt } from "./usual-uncertainty.ts";
 
 /** What a reading needs to know of the instrument that it was made on. */
 export type ReadingInstrument = Readonly<{ resolution: number | null; standardUncertainty: number | null; upperLimit: number | null; prismIndex: number | null }>;
@@ -72,9 +72,9 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
         if (!isEmpty) {
           const uAngle = angleUncertaintyDeg(instrument);
           const angleDeg = number("angleDeg", draft.angleDeg, { name: "angleDeg", what: "the angle", unit: "deg", example: "55.23", min: 30, max: 89.9, mostDecimals: 3, isReadOnInstrument: true, u: uAngle });
-          const prismN = number("prismN", draft.prismN, { ...indexRule, name: "prismN", what: "the prism's index", example: "1.880", min: 1.4, max: 2.7, mostDecimals: 5, isReadOnInstrument: false, u: prismIndexUncertainty });
+          const prismN = number("prismN", draft.prismN, { ...indexRule, name: "prismN", what: "the prism's index", example: "1.880", min: 1.4, max: 2.7, mostDecimals: 5, isReadOnInstrument: false, u: usualUncertainty.prismIndex });
           if (angleDeg !== undefined && prismN !== undefined) {
-            const derived = derivedIndex({ angleDeg, prismN, uAngleDeg: uAngle, uPrismN: prismIndexUncertainty });
+            const derived = derivedIndex({ angleDeg, prismN, uAngleDeg: uAngle, uPrismN: usualUncertainty.prismIndex });
             if (derived.value < 1.3) refuse("angleDeg", `This angle gives an index of ${derived.value.toFixed(3)}, below that of any stone. Does the scale show the complement?`);
             else values.push(derived);
           }
@@ -130,12 +130,13 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
     const isHung = method === "suspended";
     const air = number("massAirCt", massAirCt, { ...massRule, name: "massAirCt", what: "the weight in air", example: "2.143", u: uAir });
     const liquid = number("massLiquidCt", massLiquidCt, { ...massRule, name: "massLiquidCt", what: isHung ? "the weight in water" : "what the beaker gained", example: isHung ? "1.606" : "0.537", u: uLiquid });
-    const temp = number("tempC", tempC, { name: "tempC", what: "the water's temperature", unit: "degC", example: "21.4", min: 0, max: 40, mostDecimals: 2, u: 0.5 });
+    const temp = number("tempC", tempC, { name: "tempC", what: "the water's temperature", unit: "degC", example: "21.4", min: 0, max: 40, mostDecimals: 2, u: usualUncertainty.waterTempC });
     if (air === undefined || liquid === undefined) return;
     if (liquid >= air) {
       const message = isHung ? "The weight in water" : "What the beaker gained";
       return refuse("massLiquidCt", `${message} must be less than the weight in air (${massAirCt.trim()} ct).`);
     }
+    if (!isHung && liquid === 0) return refuse("massLiquidCt", "The beaker gains more than nothing when a stone hangs in it.");
     if (temp === undefined) return;
     const sg = derivedDensity({ method, massAirCt: air, massLiquidCt: liquid, tempC: temp, uAirCt: uAir, uLiquidCt: uLiquid });
     if (sg.value < 0.8 || sg.value > 25) return refuse("massLiquidCt", `These weights give a density of ${sg.value.toPrecision(3)}, which no stone has. Is a digit wrong, or the method another?`);

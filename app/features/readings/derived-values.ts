@@ -1,7 +1,7 @@
 import type { ReadingValue, WeighingMethod } from "#app/domain/reading.ts";
 import { hydrostaticDensity } from "#app/gemmology/density/hydrostatic-density.ts";
 import { indexFromCriticalAngle } from "#app/gemmology/optics/index-from-critical-angle.ts";
-import { birefringenceUncertainty, waterTempUncertaintyC } from "./usual-uncertainty.ts";
+import { birefringenceUncertainty, usualUncertainty } from "./usual-uncertainty.ts";
 
 /*
  * Numbers that follow from what was read. Each names its formula with a version: a reading keeps the value that its
@@ -12,9 +12,9 @@ export function differenceOfEdges({ low, high, edgeUncertainty }: { low: number;
   return derived("birefringence", { value: high - low, unit: "1", u: birefringenceUncertainty(edgeUncertainty), formula: "difference of edges v1" });
 }
 
-/** Air of 20 °C at 1013 hPa; the formula and its uncertainty: domain of hydrostaticDensity. */
+/** In ordinary air, whose buoyancy the formula takes off. */
 export function derivedDensity({ method, massAirCt, massLiquidCt, tempC, uAirCt, uLiquidCt }: { method: WeighingMethod; massAirCt: number; massLiquidCt: number; tempC: number; uAirCt: number; uLiquidCt: number }): ReadingValue {
-  const { sg, uSg } = hydrostaticDensity({ method, massAirCt, massLiquidCt, tempC, uMassAirCt: uAirCt, uMassLiquidCt: uLiquidCt, uTempC: waterTempUncertaintyC });
+  const { sg, uSg } = hydrostaticDensity({ method, massAirCt, massLiquidCt, tempC, uMassAirCt: uAirCt, uMassLiquidCt: uLiquidCt, uTempC: usualUncertainty.waterTempC });
   return derived("sg", { value: sg, unit: "1", u: uSg, formula: `hydrostatic density, ${method === "suspended" ? "hung in water" : "beaker on the pan"} v1` });
 }
 

@@ -1,5 +1,5 @@
 import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
-import type { Evidence } from "#app/gemmology/ranking/evidence.ts";
+import type { Evidence, RefractiveEvidence } from "#app/gemmology/ranking/evidence.ts";
 import { characterOf } from "./optic-character.ts";
 
 /** A reading as the ranking takes it: one that was saved, or the one that is being typed. */
@@ -11,24 +11,18 @@ export type RankedReading = Readonly<{ detail: ReadingDetail; quality: ReadingQu
  */
 export function evidenceFromReadings(readings: readonly RankedReading[]): Evidence {
   const standing = readings.filter(({ quality, strike }) => quality !== "noResult" && !strike);
-  const evidence: Evidence = {};
   const ri = standing.flatMap((reading) => riOf(reading) ?? []);
-  if (ri.length > 0) evidence.ri = ri;
   const polariscope = bestPolariscope(standing);
   const character = polariscope && characterOf(polariscope);
-  if (character) evidence.opticCharacter = character;
-  if (polariscope?.sign && (character === "uniaxial" || character === "biaxial")) evidence.opticSign = polariscope.sign;
+  const sign = character === "uniaxial" || character === "biaxial" ? polariscope?.sign : null;
   const sg = meanDensity(standing);
-  if (sg) evidence.sg = sg;
-  return evidence;
+  return { ...(ri.length > 0 && { ri }), ...(character && { opticCharacter: character }), ...(sign && { opticSign: sign }), ...(sg && { sg }) };
 }
-
-type RiEvidence = NonNullable<Evidence["ri"]>[number];
 
 /** Poor readings say less: their uncertainty is widened, so that one of them cannot outweigh a good one. */
 const widening: Readonly<Record<ReadingQuality, number>> = { good: 1, fair: 1.5, poor: 3, noResult: 1 };
 
-function riOf({ detail, quality, values }: RankedReading): RiEvidence | undefined {
+function riOf({ detail, quality, values }: RankedReading): RefractiveEvidence | undefined {
   const get = (name: ReadingValueName) => values.find((value) => value.name === name);
   const u = (value: ReadingValue | undefined) => (value?.standardUncertainty ?? 0.0015) * widening[quality];
   switch (detail.kind) {

@@ -1,6 +1,8 @@
 import { formatInstant } from "#app/domain/calendar-date.ts";
 import type { ReadingView } from "./reading-view.ts";
 
+export type TimedReading = ReturnType<typeof presentReadings>[number];
+
 /** Readings with their instants as the laboratory's clock shows them. */
 export function presentReadings(readings: readonly ReadingView[], timeZone: string) {
   return readings.map(({ observedAt, check, strike, ...reading }) => ({

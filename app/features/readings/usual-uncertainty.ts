@@ -7,16 +7,28 @@ type OfInstrument = Readonly<{ standardUncertainty: number | null; resolution: n
  * study of its own: house values after common practice, to be overwritten on the instrument's card.
  */
 
+export const usualUncertainty = {
+  edge: 0.0015,
+  /** Of an edge's: zero and prism cancel in the gap between two edges of one facet. */
+  gapShare: 0.8,
+  criticalAngleDeg: 0.03,
+  prismIndex: 0.0005,
+  /** Index by critical angle, in the middle of the scale. */
+  criticalAngleIndex: 0.0007,
+  waterTempC: 0.5,
+  gaugeMm: 0.015,
+} as const;
+
 /** One edge on the index scale: 0.0015 in yellow light on a good facet, twice that in white light or on a fair one. */
 export function edgeUncertainty({ instrument, light, quality }: { instrument: OfInstrument | null; light: Light; quality: ReadingQuality }): number {
-  const own = instrument?.standardUncertainty ?? 0.0015;
+  const own = instrument?.standardUncertainty ?? usualUncertainty.edge;
   if (quality === "poor") return Math.max(own, 0.005);
   return light === "white" || quality === "fair" ? Math.max(own, 0.003) : own;
 }
 
-/** The gap between two edges of one facet: zero and prism cancel, so it is known better than either edge. */
+/** The gap between two edges of one facet is known better than either edge. */
 export function birefringenceUncertainty(edge: number): number {
-  return 0.8 * edge;
+  return usualUncertainty.gapShare * edge;
 }
 
 export function spotUncertainty({ quality }: { quality: ReadingQuality }): number {
@@ -24,10 +36,8 @@ export function spotUncertainty({ quality }: { quality: ReadingQuality }): numbe
 }
 
 export function angleUncertaintyDeg(instrument: OfInstrument | null): number {
-  return instrument?.standardUncertainty ?? 0.03;
+  return instrument?.standardUncertainty ?? usualUncertainty.criticalAngleDeg;
 }
-
-export const prismIndexUncertainty = 0.0005;
 
 /** A weighing in air, carats: by the balance's step where it has no study. */
 export function weighingUncertaintyCt(instrument: OfInstrument | null): number {
@@ -40,8 +50,6 @@ export function waterWeighingUncertaintyCt(instrument: OfInstrument | null): num
   return Math.hypot(weighingUncertaintyCt(instrument), (instrument?.resolution ?? 0.001) >= 0.01 ? 0.0104 : 0.0037);
 }
 
-export const waterTempUncertaintyC = 0.5;
-
 export function gaugeUncertaintyMm(instrument: OfInstrument | null): number {
-  return instrument?.standardUncertainty ?? 0.015;
+  return instrument?.standardUncertainty ?? usualUncertainty.gaugeMm;
 }

@@ -2,6 +2,7 @@ import { and, eq, sql } from "drizzle-orm";
 import { clients, items, secondChecks, stones, takeIns, users, type InstrumentKind } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
+import type { Nature } from "#app/domain/conclusion.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import type { Id } from "#app/domain/ids.ts";
 import { isAllowed } from "#app/domain/permissions.ts";
@@ -36,6 +37,8 @@ export type CheckView = Readonly<{
   outcome: "agreed" | "returned" | null;
   /** Empty to a checker who has not compared yet. */
   reason: string;
+  /** What the checker said before they compared. */
+  own: { species: string; nature: Nature } | null;
 }>;
 
 /**
@@ -45,12 +48,14 @@ export type CheckView = Readonly<{
 export async function getBench(ctx: LabContext, { stoneCode }: { stoneCode: string }) {
   requireRole(ctx, "stones.read");
   const seesReadings = isAllowed(ctx.roles, "readings.read");
-  const [head, readings] = await Promise.all([readHead(ctx, stoneCode), seesReadings ? listReadings(ctx, { stoneCode }) : Promise.resolve<ReadingView[] | null>(null)]);
+  const [head, readings] = await Promise.all([getStoneHead(ctx, { stoneCode }), seesReadings ? listReadings(ctx, { stoneCode }) : Promise.resolve<ReadingView[] | null>(null)]);
   return { ...head, readings };
 }
 export type Bench = Awaited<ReturnType<typeof getBench>>;
 
-async function readHead(ctx: LabContext, stoneCode: string) {
+/** How one stone stands, in one query; without its readings. */
+export async function getStoneHead(ctx: LabContext, { stoneCode }: { stoneCode: string }) {
+  requireRole(ctx, "stones.read");
   const { db, laboratoryId, actorId, roles, laboratory } = ctx;
   const seesReadings = isAllowed(roles, "readings.read");
   const actor = sql.param(actorId, secondChecks.checkerId);
@@ -80,10 +85,10 @@ async function readHead(ctx: LabContext, stoneCode: string) {
       examiner: users.name,
       hasOwnReadings: sql<number>`exists (select 1 from observations o where o.laboratory_id = ${stones.laboratoryId} and o.stone_id = ${stones.id} and o.observer_id = ${actor} and o.second_check_id is null)`,
       consents: sql<string | null>`(select json_arrayagg(c.code) from item_consents c where c.laboratory_id = ${items.laboratoryId} and c.item_id = ${items.id} and c.is_given)`,
-      conclusion: sql<string | null>`(select json_arrayagg(json_object('version', k.version, 'concludedAt', date_format(k.concluded_at, '%Y-%m-%dT%H:%i:%s.%fZ'), 'by', p.name, 'isOwn', k.concluded_by = ${actor}))
+      conclusion: sql<string | null>`(select json_arrayagg(json_object('version', k.version, 'concludedAt', date_format(k.concluded_at, '%Y-%m-%dT%H:%i:%s.%fZ'), 'by', p.name, 'isOwn', k.concluded_by = ${actor}, 'speciesName', k.species_name, 'variety', k.variety, 'nature', k.nature))
         from conclusions k join users p on p.id = k.concluded_by where k.laboratory_id = ${stones.laboratoryId} and k.stone_id = ${stones.id})`,
       checks: sql<string | null>`(select json_arrayagg(json_object('version', k.version, 'kind', s.kind, 'checker', p.name, 'isOwn', s.checker_id = ${actor}, 'startedAt', date_format(s.started_at, '%Y-%m-%dT%H:%i:%s.%fZ'),
-        'comparedAt', date_format(s.compared_at, '%Y-%m-%dT%H:%i:%s.%fZ'), 'outcome', s.outcome, 'reason', s.reason))
+        'comparedAt', date_format(s.compared_at, '%Y-%m-%dT%H:%i:%s.%fZ'), 'outcome', s.outcome, 'reason', s.reason, 'ownSpecies', s.own_species, 'ownNature', s.own_nature))
         from second_checks s join users p on p.id = s.checker_id join conclusions k on k.laboratory_id = s.laboratory_id and k.id = s.conclusion_id
         where s.laboratory_id = ${stones.laboratoryId} and s.stone_id = ${stones.id})`,
       instruments: seesReadings
@@ -110,11 +115,13 @@ async function readHead(ctx: LabContext, stoneCode: string) {
   const concludedAt = latest ? new Date(latest.concludedAt) : null;
   const isCheckerBlind = Boolean(check && Number(check.isOwn) && check.comparedAt === null);
   return {
-    stone: { ...stone, photoRef: photoId && shortRef(photoId), clientRef: shortRef(clientId) },
+    // The last weight is the first examiner's reading: a checker weighs for themselves.
+    stone: { ...stone, weightText: isCheckerBlind ? "" : stone.weightText, photoRef: photoId && shortRef(photoId), clientRef: shortRef(clientId) },
     consents: parseJsonRows<ConsentCode>(consents),
     isExaminer: examinerId === actorId,
     isInvolved,
-    conclusion: latest && concludedAt ? { version: latest.version, concludedAt, by: latest.by } : null,
+    /** What was concluded is there for those who may read it, and not while they check it. */
+    conclusion: latest && concludedAt ? { version: latest.version, concludedAt, by: latest.by, found: isCheckerBlind || !seesReadings ? null : { speciesName: latest.speciesName, variety: latest.variety, nature: latest.nature } } : null,
     check: check ? checkView(check, { isBlind: isCheckerBlind }) : null,
     /** The viewer is making a check and has not compared it: nothing of the examination is theirs to see. */
     isCheckerBlind,
@@ -123,8 +130,8 @@ async function readHead(ctx: LabContext, stoneCode: string) {
   };
 }
 
-type ConclusionRow = { version: number; concludedAt: string; by: string; isOwn: number };
-type CheckRow = { version: number; kind: CheckView["kind"]; checker: string; isOwn: number; startedAt: string; comparedAt: string | null; outcome: CheckView["outcome"]; reason: string };
+type ConclusionRow = { version: number; concludedAt: string; by: string; isOwn: number; speciesName: string; variety: string; nature: Nature };
+type CheckRow = { version: number; kind: CheckView["kind"]; checker: string; isOwn: number; startedAt: string; comparedAt: string | null; outcome: CheckView["outcome"]; reason: string; ownSpecies: string; ownNature: Nature | null };
 type InstrumentRow = {
   id: string;
   kind: InstrumentKind;
@@ -138,8 +145,8 @@ type InstrumentRow = {
   check: string | { referenceMaterial: string; checkedAt: string; nextDueOn: string; deviation: string } | null;
 };
 
-function checkView({ kind, checker, isOwn, startedAt, comparedAt, outcome, reason }: CheckRow, { isBlind }: { isBlind: boolean }): CheckView {
-  return { kind, checker, isOwn: Boolean(Number(isOwn)), startedAt: new Date(startedAt), comparedAt: comparedAt ? new Date(comparedAt) : null, outcome, reason: isBlind ? "" : reason };
+function checkView({ kind, checker, isOwn, startedAt, comparedAt, outcome, reason, ownSpecies, ownNature }: CheckRow, { isBlind }: { isBlind: boolean }): CheckView {
+  return { kind, checker, isOwn: Boolean(Number(isOwn)), startedAt: new Date(startedAt), comparedAt: comparedAt ? new Date(comparedAt) : null, outcome, reason: isBlind ? "" : reason, own: ownNature && { species: ownSpecies, nature: ownNature } };
 }
 
 function benchInstrument({ id, check, ...row }: InstrumentRow, { today, timeZone }: { today: string; timeZone: string }): BenchInstrument {

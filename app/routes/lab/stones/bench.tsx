@@ -1,15 +1,19 @@
+import type { SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
-import { useState } from "react";
-import { redirect } from "react-router";
+import { useMemo, useState } from "react";
+import { Link, redirect } from "react-router";
 import { CheckOffer } from "#app/components/bench/check-offer.tsx";
 import { NewReading } from "#app/components/bench/new-reading.tsx";
 import { ReadingsTable } from "#app/components/bench/readings-table.tsx";
 import { StoneHeader } from "#app/components/bench/stone-header.tsx";
 import { TestChoice } from "#app/components/bench/test-choice.tsx";
+import { LiveCandidates } from "#app/components/bench/live-candidates.tsx";
 import { LinkButton } from "#app/components/ui/button.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
+import { Caution } from "#app/components/ui/caution.tsx";
 import { isAllowed } from "#app/domain/permissions.ts";
-import { observationKindNames, observationKinds, type ObservationKind } from "#app/domain/reading.ts";
+import { observationKinds, type ObservationKind } from "#app/domain/reading.ts";
+import { rankStone } from "#app/features/identification/rank-stone.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { latestSize } from "#app/features/readings/latest-size.ts";
@@ -23,6 +27,7 @@ import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
 import type { Route } from "./+types/bench";
 
+const testOf = (url: URL): ObservationKind => observationKinds.find((kind) => kind === url.searchParams.get("test")) ?? "refractometer";
 const checkName = (isSolePractice: boolean) => (isSolePractice ? "Self-check" : "Second check");
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {
@@ -45,6 +50,9 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
     check: isOffered ? null : check && { kind: check.kind, checker: check.checker, isCompared: check.comparedAt !== null, outcome: check.outcome, reason: check.reason },
     conclusion: isOffered ? null : conclusion && { version: conclusion.version, by: conclusion.by },
     instruments: isOffered ? [] : instruments,
+    ranking: shown && (await rankStone(ctx, { readings: shown.filter(({ isOfSecondCheck }) => !isOfSecondCheck) })).bench,
+    test: testOf(url),
+    areCandidatesHidden: url.searchParams.get("candidates") === "hidden",
     requestId: newRequestId(),
     can: {
       record: isAllowed(ctx.roles, "readings.record") && bench.stone.goodsState !== "released" && ["received", "examining", "returned"].includes(state),
@@ -69,28 +77,115 @@ export async function action({ request, context, params, url }: Route.ActionArgs
   }
 }
 
-export const meta: Route.MetaFunction<typeof loader> = ({ params, loaderData }) => [{ title: `${params.stoneCode}${loaderData ? `, ${loaderData.stone.description}` : ""} · Isogyre` }];
+export const meta: Route.MetaFunction = ({ params, loaderData }) => [{ title: `${params.stoneCode}${loaderData ? `, ${loaderData.stone.description}` : ""} · Isogyre` }];
 
 export default function BenchRoute({ loaderData, actionData, params }: Route.ComponentProps) {
-  const { stone, readings, can } = loaderData;
+  const { stone, conclusion, check, can, mayCheck, checkName: nameOfCheck } = loaderData;
   const base = `/lab/${params.labSlug}/stones/${stone.code}`;
   return (
     <>
       <StoneHeader
         stone={stone}
         labSlug={params.labSlug}
-        checkName={loaderData.checkName}
+        checkName={nameOfCheck}
         size={loaderData.size}
         actions={
           <>
-            {can.readConclusion && loaderData.conclusion ? <LinkButton to={`${base}/conclusion`}>Conclusion</LinkButton> : null}
-            {can.conclude && !loaderData.conclusion ? <LinkButton to={`${base}/conclusion`} look="primary">Conclude</LinkButton> : null}
-            {loaderData.check || loaderData.mayCheck ? <LinkButton to={`${base}/second-check`}>{loaderData.checkName}</LinkButton> : null}
+            {can.conclude ? (
+              <LinkButton to={`${base}/conclusion`} look="primary">
+                {conclusion ? "Conclude again" : "Conclude"}
+              </LinkButton>
+            ) : conclusion && can.readConclusion ? (
+              <LinkButton to={`${base}/conclusion`}>Conclusion</LinkButton>
+            ) : null}
+            {check || mayCheck ? <LinkButton to={`${base}/second-check`}>{nameOfCheck}</LinkButton> : null}
           </>
         }
       />
-      {loaderData.isOffered ? <CheckOffer base={base} /> : null}
-      {readings ? <Examination {...{ loaderData, params, base }} lastResult={actionData?.result} readings={readings} /> : loaderData.isOffered ? null : <ForTheDesk condition={loaderData.condition} takeInTo={`/lab/${params.labSlug}/take-ins/${stone.takeInNumber}`} />}
+      {check?.outcome === "returned" && stone.state !== "concluded" ? (
+        <Caution className="mb-5">
+          The check by {check.checker} returned this stone: {check.reason}
+        </Caution>
+      ) : null}
+      {loaderData.isOffered ? (
+        <CheckOffer base={base} />
+      ) : loaderData.readings && loaderData.ranking ? (
+        <Examination {...loaderData} readings={loaderData.readings} ranking={loaderData.ranking} base={base} lastResult={actionData?.result} />
+      ) : (
+        <Card title="Readings and conclusions" className="max-w-3xl">
+          <CardBody>
+            <p className="text-ink-2">They are for those who examine and value. Custody, the label and the receipt are with the take-in.</p>
+            <p className="mt-3">
+              <LinkButton to={`/lab/${params.labSlug}/take-ins/${stone.takeInNumber}`}>Take-in {stone.takeInNumber}</LinkButton>
+            </p>
+          </CardBody>
+        </Card>
+      )}
     </>
+  );
+}
+
+type LoaderData = Route.ComponentProps["loaderData"];
+type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; lastResult: SubmissionResult<string[]> | undefined };
+
+function Examination({ readings, ranking, instruments, test, requestId, areCandidatesHidden, can, condition, stone, base, lastResult }: ExaminationProps) {
+  const [typed, setTyped] = useState<ComposedReading | null>(null);
+  const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
+  const struckCount = readings.filter(({ strike }) => strike).length;
+  const hidden = areCandidatesHidden ? "&candidates=hidden" : "";
+  return (
+    <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_24rem] xl:grid-cols-[minmax(0,1fr)_30.75rem]">
+      <div className="grid min-w-0 gap-5">
+        {can.record ? (
+          <Card title="New reading" note="kept as you type it, never overwritten">
+            <TestChoice current={test} hrefOf={(kind) => `?test=${kind}${hidden}`} />
+            <NewReading
+              // A saved reading clears the form; a refused one keeps what was typed.
+              key={`${test}-${readings.length}`}
+              {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden }}
+              onDraft={setTyped}
+            />
+          </Card>
+        ) : null}
+        <Card title="Readings" note={`${readings.length - struckCount} kept, ${struckCount} struck`}>
+          <ReadingsTable
+            readings={readings}
+            strikeHref={(sequence) => `${base}/readings/${sequence}/strike`}
+            canStrike={({ isOwn, isOfSecondCheck }) => !isOfSecondCheck && (can.strikeAll || (can.strikeOwn && isOwn))}
+          />
+        </Card>
+        {condition ? (
+          <p className="px-1 text-sm text-ink-2">
+            Condition when taken in: {condition}
+            {stone.isMounted ? `. Weight with the setting: ${stone.itemMass}.` : ""}
+          </p>
+        ) : null}
+      </div>
+      <div className="grid min-w-0 gap-5">
+        {areCandidatesHidden ? (
+          <Card title="Candidates" note="hidden while you read">
+            <CardBody>
+              <p className="text-ink-2">Readings made now are marked as made without candidates in view.</p>
+              <p className="mt-3">
+                <Link to={`?test=${test}`} preventScrollReset className="text-link">
+                  Show the candidates
+                </Link>
+              </p>
+            </CardBody>
+          </Card>
+        ) : (
+          <>
+            <LiveCandidates saved={ranking} readings={examined} typed={can.record ? typed : null} />
+            {can.record ? (
+              <p className="no-print px-1 text-sm">
+                <Link to={`?test=${test}&candidates=hidden`} preventScrollReset className="text-link">
+                  Hide the candidates while reading
+                </Link>
+              </p>
+            ) : null}
+          </>
+        )}
+      </div>
+    </div>
   );
 }

@@ -1,0 +1,74 @@
+import { QueryClient, QueryClientProvider, useQuery } from "@tanstack/react-query";
+import { useDeferredValue, useMemo, useState } from "react";
+import { IndexDensityMap, type MapSpecies } from "#app/components/charts/index-density-map.tsx";
+import { Card, CardBody } from "#app/components/ui/card.tsx";
+import type { BenchRanking } from "#app/features/identification/bench-ranking.ts";
+import { rankReadings, type NumberedReading } from "#app/features/identification/rank-readings.ts";
+import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
+import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
+import { CandidatesCard } from "./candidates-card.tsx";
+
+type LiveCandidatesProps = {
+  /** As the server ranked what was saved; shown until the table is here, and without script. */
+  saved: BenchRanking;
+  readings: readonly NumberedReading[];
+  /** The reading that is being typed; null while it is none. */
+  typed: ComposedReading | null;
+};
+
+/** The candidates as digits are typed, before anything is saved: the server's own code, run here. */
+export function LiveCandidates(props: LiveCandidatesProps) {
+  const [queries] = useState(() => new QueryClient());
+  return (
+    <QueryClientProvider client={queries}>
+      <Live {...props} />
+    </QueryClientProvider>
+  );
+}
+
+function Live({ saved, readings, typed }: LiveCandidatesProps) {
+  const { data: table } = useQuery({
+    queryKey: ["species-table", saved.tableVersion],
+    queryFn: async ({ signal }): Promise<SpeciesTable> => {
+      const response = await fetch(`/species-table/${saved.tableVersion}.json`, { signal });
+      if (!response.ok) throw new Error(`species table: ${response.status}`);
+      return (await response.json()) as SpeciesTable;
+    },
+    staleTime: Infinity,
+    gcTime: Infinity,
+  });
+  const latest = useDeferredValue(typed);
+  const ranking = useMemo(() => {
+    if (!table) return saved;
+    return rankReadings(latest ? [...readings, { ...latest, sequence: null }] : readings, table);
+  }, [table, saved, readings, latest]);
+  return (
+    <>
+      <CandidatesCard ranking={ranking} isWithTyped={Boolean(table && latest && latest.values.length + (latest.detail.kind === "polariscope" ? 1 : 0) > 0)} />
+      {table && (ranking.index || ranking.density) ? <StandingMap table={table} ranking={ranking} /> : null}
+    </>
+  );
+}
+
+function StandingMap({ table, ranking }: { table: SpeciesTable; ranking: BenchRanking }) {
+  const species = useMemo(() => mapSpecies(table, ranking), [table, ranking]);
+  const { index, density } = ranking;
+  return (
+    <Card title="Index and density" note="every species in the table">
+      <CardBody>
+        <IndexDensityMap species={species} reading={{ ri: index?.value, riU: index?.u, sg: density?.value, sgU: density?.u }} mostNames={3} />
+      </CardBody>
+    </Card>
+  );
+}
+
+function mapSpecies({ nodes }: SpeciesTable, { candidates, ruledOut }: BenchRanking): MapSpecies[] {
+  const shown = new Set(candidates.map(({ speciesId }) => speciesId));
+  const out = new Set(ruledOut.map(({ speciesId }) => speciesId));
+  return nodes.flatMap(({ id, name, forms }) => {
+    const indices = forms.flatMap(({ lowIndex, highIndex, spotIndex }) => [...(lowIndex ?? spotIndex ?? []), ...(highIndex ?? [])]);
+    const densities = forms.flatMap(({ sg }) => sg ?? []);
+    if (indices.length === 0 || densities.length === 0) return [];
+    return [{ id, name, riLow: Math.min(...indices), riHigh: Math.max(...indices), sgLow: Math.min(...densities), sgHigh: Math.max(...densities), standing: shown.has(id) ? "candidate" : out.has(id) ? "contradicted" : "open" }];
+  });
+}
