@@ -1,10 +1,10 @@
-import type { TreatmentCode, TreatmentFinding, TreatmentStatus } from "#app/domain/conclusion.ts";
+import type { LimitCode, TreatmentCode, TreatmentFinding, TreatmentStatus } from "#app/domain/conclusion.ts";
 import { criticalAngle, density, edge, edges, overLimit, polars, seen, size, spot, struck, weight } from "./readings.ts";
 import type { Story } from "./story.ts";
 
 const finding = (code: TreatmentCode, status: TreatmentStatus, evidence = ""): TreatmentFinding => ({ code, status, extent: null, evidence });
 const heatingOpen = [finding("heating", "notDeterminable"), finding("glassFilling", "notDetected", "no flash, no bubbles in fissures")];
-const bench = ["benchOnly", "treatmentNotDeterminable", "originNotExamined"];
+const bench: LimitCode[] = ["benchOnly", "treatmentNotDeterminable", "originNotExamined"];
 
 /**
  * Two dozen invented stones at every stage. The readings are those of real materials (fixtures/species), with the scatter of
@@ -35,7 +35,7 @@ export const marramStories: readonly Story[] = [
     report: "issued", isPaid: true, isReleased: true,
   },
   {
-    description: "Black bead strand, 61 beads", photo: { outline: "bead", hue: "black", lengthMm: 8 }, client: "museum", daysAgo: 31, mount: "strung", mass: "41.20", massUnit: "g",
+    description: "Black bead strand, 61 beads", photo: { outline: "bead", hue: "black", lengthMm: 8 }, client: "museum", daysAgo: 31, mount: "strung", stoneCount: 61, mass: "41.20", massUnit: "g",
     readings: [spot("1.54", { facet: "dome" }), polars("staysLight", { note: "thin edge of one chipped bead" }), seen("Even black colour, concentrated at drill holes; waxy fracture on a chip")],
     conclusion: {
       speciesName: "Chalcedony", variety: "Black chalcedony", nature: "natural", natureEvidence: "Fine aggregate structure and waxy fracture at a chip.", confidence: "consistentWith", evidence: "Aggregate behaviour; spot index; fracture and lustre.",
@@ -148,7 +148,7 @@ export const marramStories: readonly Story[] = [
   { description: "Yellow-green cabochon with a moving band of light", photo: { outline: "cabochon", hue: "yellow-green", lengthMm: 9 }, client: "museum", daysAgo: 1, mass: "4.02" },
   { description: "Pink cushion", photo: { outline: "cushion", hue: "pink", lengthMm: 8 }, client: "ferro", daysAgo: 0, mass: "2.71" },
   { description: "White translucent bangle", photo: null, client: "museum", daysAgo: 0, mass: "52.40", massUnit: "g", mount: "loose" },
-  { description: "Three green ovals in one paper", photo: { outline: "oval", hue: "green", lengthMm: 6 }, client: "castellan", daysAgo: 0, mass: "3.30" },
+  { description: "Three green ovals in one paper", photo: { outline: "oval", hue: "green", lengthMm: 6 }, client: "castellan", daysAgo: 0, mass: "3.30", stoneCount: 3 },
 ];
 
 export const tarnStories: readonly Story[] = [

@@ -1,4 +1,4 @@
-import type { Confidence, ConclusionDescription, Nature, RejectedAlternative, TreatmentFinding } from "#app/domain/conclusion.ts";
+import type { Confidence, ConclusionDescription, LimitCode, Nature, RejectedAlternative, TreatmentFinding } from "#app/domain/conclusion.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import type { ReadingDraft } from "#app/features/readings/reading-draft.ts";
 import type { GemOutline } from "../draw-gem-photo.ts";
@@ -15,7 +15,7 @@ export type Conclusion = {
   treatments?: TreatmentFinding[];
   evidence: string;
   rejected: RejectedAlternative[];
-  limits?: string[];
+  limits?: LimitCode[];
   contradictionsExplained?: string;
   description: Partial<ConclusionDescription>;
 };
@@ -29,6 +29,7 @@ export type Story = {
   daysAgo: number;
   mount?: "loose" | "mounted" | "strung";
   mass: string;
+  stoneCount?: number;
   massUnit?: "ct" | "g";
   condition?: string;
   declared?: number;
