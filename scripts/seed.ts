@@ -1,5 +1,5 @@
 import { readFileSync } from "node:fs";
-import { eq } from "drizzle-orm";
+import { inArray } from "drizzle-orm";
 import { openDb } from "#app/db/client.server.ts";
 import { laboratories } from "#app/db/schema/index.ts";
 import { renderInProcess } from "#app/features/reports/render-in-process.server.ts";
@@ -13,8 +13,9 @@ import { tellStory } from "./demo/tell-story.ts";
 
 /** Loads the demonstration laboratories by the product's own operations; does nothing when they are there. */
 const { db, close } = openDb(process.env.DATABASE_URL ?? "");
-const [there] = await db.select({ id: laboratories.id }).from(laboratories).where(eq(laboratories.slug, "marram-quay"));
-if (!there) await load();
+const there = (await db.select({ slug: laboratories.slug }).from(laboratories).where(inArray(laboratories.slug, ["marram-quay", "tarn-and-vale"]))).map(({ slug }) => slug);
+if (there.length === 1) console.error("The demonstration was loaded only in part, by a start that was interrupted. Remove the folder .data (or empty the database) and start again, or start with ISOGYRE_DEMO=0.");
+if (there.length === 0) await load();
 await close();
 
 async function load(): Promise<void> {

@@ -97,7 +97,7 @@ export const marramStories: readonly Story[] = [
   },
   {
     description: "Colourless round", photo: { outline: "round", hue: "colourless", lengthMm: 5 }, client: "castellan", daysAgo: 6, mass: "0.512",
-    readings: [weight("0.512"), size("5.14", "5.17", "3.16", "round"), overLimit({ note: "only the liquid’s edge on two facets" }), polars("anomalous", { note: "faint strain at the girdle" })],
+    readings: [weight("0.512"), size("5.17", "5.14", "3.16", "round"), overLimit({ note: "only the liquid’s edge on two facets" }), polars("anomalous", { note: "faint strain at the girdle" })],
   },
   {
     description: "Brownish red round", photo: { outline: "round", hue: "red", lengthMm: 7 }, client: "holm", daysAgo: 5, mass: "1.88",

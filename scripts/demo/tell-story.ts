@@ -66,7 +66,7 @@ export async function tellStory(lab: Laboratory, story: Story, { now, cast }: { 
   if (!story.readings) return;
 
   later();
-  await recordHandOver(lab.as(cast.examiner, clock), { requestId: newId<"custodyEvent">(), itemNumber: item!.number, purpose: "toBench", toPlace: "Bench 2", holder: undefined, massText: "", massUnit: "ct", seal: "", remark: "" });
+  await recordHandOver(lab.as(cast.examiner, clock), { requestId: newId<"custodyEvent">(), itemNumber: item!.number, purpose: "toBench", toPlace: "Bench 2", holder: undefined, massText: story.mass, massUnit: story.massUnit ?? "ct", seal: "", remark: "" });
   await readAll(cast.examiner, story.readings);
   if (!story.conclusion) return;
   await conclude(story.conclusion);
@@ -104,9 +104,9 @@ export async function tellStory(lab: Laboratory, story: Story, { now, cast }: { 
   }
   if (story.isReleased) {
     later();
-    await recordHandOver(lab.as(cast.desk, clock), { requestId: newId<"custodyEvent">(), itemNumber: item!.number, purpose: "toSafe", toPlace: "Safe 1", holder: undefined, massText: story.mass, massUnit: "ct", seal: "", remark: "" });
+    await recordHandOver(lab.as(cast.desk, clock), { requestId: newId<"custodyEvent">(), itemNumber: item!.number, purpose: "toSafe", toPlace: "Safe 1", holder: undefined, massText: story.mass, massUnit: story.massUnit ?? "ct", seal: "", remark: "" });
     later();
-    await releaseItem(lab.as(cast.desk, clock), { requestId: newId<"custodyEvent">(), itemNumber: item!.number, collectedBy: "the client", idSeen: "the receipt; known to us", massText: story.mass, massUnit: "ct", isConditionAgreed: true, seal: "", remark: "" });
+    await releaseItem(lab.as(cast.desk, clock), { requestId: newId<"custodyEvent">(), itemNumber: item!.number, collectedBy: "the client", idSeen: "the receipt; known to us", massText: story.mass, massUnit: story.massUnit ?? "ct", isConditionAgreed: true, seal: "", remark: "" });
   }
 
   async function readAll(person: string, readings: readonly Reading[], isForSecondCheck = false): Promise<void> {

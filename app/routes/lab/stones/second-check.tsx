@@ -86,7 +86,6 @@ async function readable(ctx: Parameters<typeof getBench>[0], stoneCode: string) 
   return getBench(ctx, { stoneCode });
 }
 
-type Answer = { intent: string; result?: SubmissionResult<string[]> };
 
 export async function action({ request, context, params, url }: Route.ActionArgs) {
   const ctx = context.get(labContext);
