@@ -52,6 +52,17 @@ import { readReportPdf } from "#app/features/reports/read-report-pdf.server.ts";
 import { reopenStone } from "#app/features/reports/reopen-stone.server.ts";
 import { retryPdf } from "#app/features/reports/retry-pdf.server.ts";
 import { withdrawReport } from "#app/features/reports/withdraw-report.server.ts";
+import { getConclusion } from "#app/features/identification/get-conclusion.server.ts";
+import { proposeConclusion } from "#app/features/identification/propose-conclusion.server.ts";
+import { rankStone } from "#app/features/identification/rank-stone.server.ts";
+import { listReadings } from "#app/features/readings/list-readings.server.ts";
+import { recordReading } from "#app/features/readings/record-reading.server.ts";
+import { strikeReading } from "#app/features/readings/strike-reading.server.ts";
+import { compareSecondCheck } from "#app/features/second-checks/compare-second-check.server.ts";
+import { decideSecondCheck } from "#app/features/second-checks/decide-second-check.server.ts";
+import { startSecondCheck } from "#app/features/second-checks/start-second-check.server.ts";
+import { getBench } from "#app/features/stones/get-bench.server.ts";
+import { listOfferedServices } from "#app/features/take-ins/list-offered-services.server.ts";
 import { listStones } from "#app/features/stones/list-stones.server.ts";
 import { getLetterhead } from "#app/features/take-ins/get-letterhead.server.ts";
 import { getTakeIn } from "#app/features/take-ins/get-take-in.server.ts";
@@ -61,6 +72,8 @@ import { saveValuation } from "#app/features/valuations/save-valuation.server.ts
 import { signValuation } from "#app/features/valuations/sign-valuation.server.ts";
 import type { ValuationInput } from "#app/features/valuations/valuation-forms.server.ts";
 import { aRequestId } from "../setup/an-app.ts";
+import { aBench, aReading, corundum } from "../setup/bench-factory.ts";
+import { aConcludedStone, aConclusion } from "../setup/conclusion-factory.ts";
 import { anInvoice } from "../setup/an-invoice.ts";
 import { aClient, aMember, anInstrument } from "../setup/factories.ts";
 import { aTakenInItem, itemInput, takeInInput } from "../setup/take-in-factory.ts";
@@ -75,10 +88,10 @@ export type OperationEntry<Ids> = {
   call: (ctx: LabContext, ids: Ids) => Promise<unknown>;
   /** It names no row, so another laboratory's cannot be asked for. */
   hasNoIds?: true;
-  /** With the role, it may still be refused for the state the rows are in; "absent": for a part that `rows` does not make. */
-  mayBeRefused?: true | "absent";
-  /** A list below a row: of another laboratory's row it is empty instead of not found. */
-  isEmptyElsewhere?: true;
+  /** With the role, it may still be refused for the state the rows are in; "absent": for a part that `rows` does not make; "notTheirs": for being somebody else's. */
+  mayBeRefused?: true | "absent" | "notTheirs";
+  /** A list below a row: or what may not be there yet: of another laboratory's row it is empty instead of not found. */
+  isEmptyElsewhere?: "list" | "null";
 };
 
 /** Keeps the type of `rows` and `call` together and forgets it in the list. */
@@ -170,7 +183,7 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
   entry({ name: "getLetterhead", operation: "takeIn.read", rows: nothing, call: (ctx) => getLetterhead(ctx), hasNoIds: true }),
   entry({ name: "getCustodyStanding", operation: "declaredValue.read", rows: nothing, call: (ctx) => getCustodyStanding(ctx), hasNoIds: true }),
   entry({ name: "listHolders", operation: "takeIn.read", rows: nothing, call: (ctx) => listHolders(ctx), hasNoIds: true }),
-  entry({ name: "listCustody", operation: "takeIn.read", rows: anItem, call: (ctx, { itemNumber }) => listCustody(ctx, itemNumber), isEmptyElsewhere: true }),
+  entry({ name: "listCustody", operation: "takeIn.read", rows: anItem, call: (ctx, { itemNumber }) => listCustody(ctx, itemNumber), isEmptyElsewhere: "list" }),
   entry({
     name: "recordHandOver",
     operation: "custody.record",
@@ -185,6 +198,51 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
     mayBeRefused: true,
   }),
   entry({ name: "listStones", operation: "stones.read", rows: nothing, call: (ctx) => listStones(ctx), hasNoIds: true }),
+
+  entry({ name: "listOfferedServices", operation: "prices.read", rows: nothing, call: (ctx) => listOfferedServices(ctx), hasNoIds: true }),
+
+  // bench
+  entry({ name: "getBench", operation: "stones.read", rows: aStoneCode, call: (ctx, stoneCode) => getBench(ctx, { stoneCode }) }),
+  entry({ name: "listReadings", operation: "readings.read", rows: aStoneCode, call: (ctx, stoneCode) => listReadings(ctx, { stoneCode }), isEmptyElsewhere: "list" }),
+  entry({ name: "rankStone", operation: "readings.read", rows: nothing, call: (ctx) => rankStone(ctx, { readings: [] }), hasNoIds: true }),
+  entry({ name: "recordReading", operation: "readings.record", rows: (lab) => aBench(lab), call: (ctx, bench) => recordReading(ctx, aReading(bench, corundum.free)) }),
+  entry({
+    name: "strikeReading",
+    operation: "readings.record",
+    rows: async (lab) => {
+      const bench = await aBench(lab);
+      const { sequence } = await recordReading(lab, aReading(bench, corundum.free));
+      return { stoneCode: bench.stoneCode, sequence };
+    },
+    call: (ctx, { stoneCode, sequence }) => strikeReading(ctx, { stoneCode, sequence, reason: "liquid edge" }),
+    mayBeRefused: "notTheirs",
+  }),
+  entry({ name: "getConclusion", operation: "conclusions.read", rows: async (lab) => (await aConcludedStone(lab)).stoneCode, call: (ctx, stoneCode) => getConclusion(ctx, { stoneCode }), isEmptyElsewhere: "null" }),
+  entry({
+    name: "proposeConclusion",
+    operation: "conclusions.propose",
+    rows: async (lab) => {
+      const bench = await aBench(lab);
+      return aConclusion(lab, bench);
+    },
+    call: (ctx, conclusion) => proposeConclusion(ctx, conclusion),
+    mayBeRefused: true,
+  }),
+  entry({ name: "startSecondCheck", operation: "secondChecks.do", rows: async (lab) => (await aConcludedStone(lab)).stoneCode, call: (ctx, stoneCode) => startSecondCheck(ctx, { stoneCode, requestId: newId<"secondCheck">() }) }),
+  entry({
+    name: "compareSecondCheck",
+    operation: "secondChecks.do",
+    rows: async (lab) => (await aConcludedStone(lab)).stoneCode,
+    call: (ctx, stoneCode) => compareSecondCheck(ctx, { stoneCode, ownSpecies: "Corundum", ownNature: "synthetic" }),
+    mayBeRefused: "absent",
+  }),
+  entry({
+    name: "decideSecondCheck",
+    operation: "secondChecks.do",
+    rows: async (lab) => (await aConcludedStone(lab)).stoneCode,
+    call: (ctx, stoneCode) => decideSecondCheck(ctx, { stoneCode, outcome: "agreed", reason: "" }),
+    mayBeRefused: "absent",
+  }),
 
   // photographs
   entry({ name: "findItemForPhoto", operation: "photos.add", rows: anItem, call: (ctx, { itemNumber }) => findItemForPhoto(ctx, itemNumber) }),

@@ -43,7 +43,7 @@ export async function getConclusion(ctx: LabContext, { stoneCode }: { stoneCode:
     .where(and(eq(stones.laboratoryId, laboratoryId), eq(stones.code, stoneCode)))
     .orderBy(desc(conclusions.version))
     .limit(1);
-  if (!found) return undefined;
+  if (!found) return null;
   if (found.checkerId === actorId && found.comparedAt === null) throw new AppError("forbidden", "You are checking this stone: its conclusion is kept from you until you compare.");
   return { ...found.conclusion, by: found.by };
 }

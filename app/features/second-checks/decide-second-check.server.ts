@@ -22,14 +22,16 @@ export async function decideSecondCheck(ctx: LabContext, { stoneCode, outcome, r
     const [check] = await tx
       .select({ id: secondChecks.id, kind: secondChecks.kind, stoneId: stones.id })
       .from(stones)
-      .innerJoin(secondChecks, and(eq(secondChecks.laboratoryId, stones.laboratoryId), eq(secondChecks.stoneId, stones.id), eq(secondChecks.checkerId, actorId), isNotNull(secondChecks.comparedAt), isNull(secondChecks.decidedAt)))
+      .leftJoin(secondChecks, and(eq(secondChecks.laboratoryId, stones.laboratoryId), eq(secondChecks.stoneId, stones.id), eq(secondChecks.checkerId, actorId), isNotNull(secondChecks.comparedAt), isNull(secondChecks.decidedAt)))
       .where(and(eq(stones.laboratoryId, laboratoryId), eq(stones.code, stoneCode)))
       .for("update");
-    if (!check) throw new AppError("conflict", "There is no compared check of yours to decide: it was decided already, or not compared yet.");
+    if (!check) throw new AppError("not_found", "There is no stone of this number.");
+    const { id: checkId } = check;
+    if (!checkId) throw new AppError("conflict", "There is no compared check of yours to decide: it was decided already, or not compared yet.");
     const [decided] = await tx
       .update(secondChecks)
       .set({ outcome, reason, decidedAt: now })
-      .where(and(eq(secondChecks.laboratoryId, laboratoryId), eq(secondChecks.id, check.id), isNull(secondChecks.decidedAt)));
+      .where(and(eq(secondChecks.laboratoryId, laboratoryId), eq(secondChecks.id, checkId), isNull(secondChecks.decidedAt)));
     if (decided.affectedRows !== 1) throw new AppError("conflict", "This check was decided already.");
     const name = check.kind === "selfCheck" ? "Self-check" : "Second check";
     await moveExamination(scope, outcome === "agreed" ? { stoneId: check.stoneId, from: "concluded", to: "checked", why: `${name} agrees` } : { stoneId: check.stoneId, from: "concluded", to: "returned", why: reason.slice(0, 500) });

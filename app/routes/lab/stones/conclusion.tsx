@@ -140,7 +140,7 @@ function Propose({ form: { requestId, speciesNames, ranking, readings, startFrom
 }
 
 /** The last conclusion as it was, where there is one to think again about; else nothing but what the take-in knows. */
-function startFrom(previous: ConclusionView | undefined, { isMounted }: { isMounted: boolean }): { requestKey: string; values: Omit<ConclusionShape, "requestId" | "version"> & { version: string } } {
+function startFrom(previous: ConclusionView | null, { isMounted }: { isMounted: boolean }): { requestKey: string; values: Omit<ConclusionShape, "requestId" | "version"> & { version: string } } {
   const said = new Map(previous?.treatments.map((finding) => [finding.code, finding]));
   return {
     requestKey: String(previous?.version ?? 0),
