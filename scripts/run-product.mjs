@@ -159,7 +159,7 @@ function startStandIns({ crew, standIns, secrets, onEnd }) {
 /** The species table always, the demonstration laboratory unless ISOGYRE_DEMO=0; both may be loaded again and again. */
 async function loadData(crew, env) {
   const scripts = ["scripts/load-species.ts", ...(env.ISOGYRE_DEMO === "0" ? [] : ["scripts/seed.ts"])];
-  for (const script of scripts) if (fs.existsSync(script)) await crew.run(process.execPath, ["--import", "tsx", script], { env });
+  for (const script of scripts) if (fs.existsSync(script)) await crew.run(process.execPath, ["--import", "tsx", script], { env, isQuiet: true });
 }
 
 /** Serves until told to stop: a server that crashes is started again, unless it keeps crashing. */

@@ -7,7 +7,7 @@ import type { Services } from "#app/features/services.ts";
 import { createPasswords } from "#app/integrations/passwords.server.ts";
 import { createStripe } from "#app/integrations/stripe.server.ts";
 import { createUploads } from "#app/integrations/uploads.server.ts";
-import { addPeople, openDemoLaboratory, type Person } from "./demo/open-laboratories.ts";
+import { addPeople, checkInstrumentsAgain, openDemoLaboratory, type Person } from "./demo/open-laboratories.ts";
 import { marramStories, tarnStories } from "./demo/stories.ts";
 import { tellStory } from "./demo/tell-story.ts";
 
@@ -49,6 +49,7 @@ async function load(): Promise<void> {
   for (const story of [...marramStories].sort((a, b) => b.daysAgo - a.daysAgo)) {
     await tellStory(marram, story, { now, cast: { desk: "joss", examiner: "ifeoma", checker: "mattias", appraiser: "teodora", owner: "rosalind" } });
   }
+  await checkInstrumentsAgain(marram, { owner: "rosalind", now });
   const tarn = await openDemoLaboratory(setting, ids, {
     name: "Tarn & Vale Valuers", slug: "tarn-and-vale", prefix: "TV", isSolePractice: true, owner: "corwen",
     addressLines: ["The Tannery", "Upper Tarn"], phone: "+00 0000 000001", email: "post@tarnandvale.example",

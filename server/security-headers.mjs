@@ -12,7 +12,7 @@ export function securityHeaders({ isSecure, uploadOrigins, payOrigin }) {
   const others = helmet({
     contentSecurityPolicy: false, // below: it has a nonce a response, and a page may have its own
     crossOriginEmbedderPolicy: false,
-    frameguard: { action: "deny" },
+    frameguard: false, // below, for the same reason
     // The default, no-referrer, makes a browser send "Origin: null" with every form post without script.
     referrerPolicy: { policy: "same-origin" },
     strictTransportSecurity: isSecure ? { maxAge: twoYearsSeconds, includeSubDomains: true } : false,
@@ -29,6 +29,7 @@ export function securityHeaders({ isSecure, uploadOrigins, payOrigin }) {
       `connect-src ${["'self'", ...uploadOrigins].join(" ")}`,
       "manifest-src 'self'",
       "media-src 'self' blob:",
+      "frame-src 'self'", // a report's draft, shown within its page
       "worker-src 'self'",
       `form-action 'self' ${payOrigin}`,
       "frame-ancestors 'none'",
@@ -45,6 +46,7 @@ export function securityHeaders({ isSecure, uploadOrigins, payOrigin }) {
     const writeHead = response.writeHead;
     response.writeHead = function (...args) {
       if (!response.hasHeader("Content-Security-Policy")) response.setHeader("Content-Security-Policy", policyFor(nonce));
+      if (!response.hasHeader("X-Frame-Options")) response.setHeader("X-Frame-Options", "DENY");
       if (!response.hasHeader("Cache-Control")) response.setHeader("Cache-Control", request.headers.cookie ? "private, no-store" : "no-cache");
       return writeHead.apply(this, args);
     };

@@ -1,5 +1,5 @@
 /** A stored PDF, shown or saved under its number, never cached by anybody in between. */
-export function pdfResponse({ pdf, fileName }: { pdf: Buffer; fileName: string }): Response {
+export function pdfResponse({ pdf, fileName }: { pdf: Buffer; fileName: string }, { isFramed = false }: { /** One of our own pages shows it within. */ isFramed?: boolean } = {}): Response {
   return new Response(new Uint8Array(pdf), {
     headers: {
       "Content-Type": "application/pdf",
@@ -7,6 +7,7 @@ export function pdfResponse({ pdf, fileName }: { pdf: Buffer; fileName: string }
       "Content-Disposition": `inline; filename="${fileName.replace(/[^\w.-]/g, "_")}"`,
       "Cache-Control": "private, no-store",
       "X-Content-Type-Options": "nosniff",
+      ...(isFramed ? { "X-Frame-Options": "SAMEORIGIN", "Content-Security-Policy": "default-src 'none'; object-src 'self'; style-src 'unsafe-inline'; frame-ancestors 'self'" } : {}),
     },
   });
 }

@@ -51,7 +51,7 @@ export async function openDemoLaboratory(setting: Setting, ids: ReadonlyMap<stri
   const ownerId = ids.get(plan.owner)!;
   const basics = { name: plan.name, slug: plan.slug, prefix: plan.prefix, isSolePractice: plan.isSolePractice, timeZone: "Europe/Lisbon", currency: "EUR" as const };
   const { laboratoryId } = await openLaboratory({ db, services, now }, { ownerId, laboratory: basics });
-  const rest = { addressLines: plan.addressLines, phone: plan.phone, email: plan.email, taxShareE4: 2300, taxLabel: "VAT 23 %", custodyLimitMinor: 25_000_000, selfCheckDelayHours: 24 };
+  const rest = { addressLines: plan.addressLines, phone: plan.phone, email: plan.email, taxShareE4: 2300, taxLabel: "VAT", custodyLimitMinor: 25_000_000, selfCheckDelayHours: 24 };
   await db.update(laboratories).set(rest).where(eq(laboratories.id, laboratoryId));
 
   await db.delete(membershipRoles).where(and(eq(membershipRoles.laboratoryId, laboratoryId), eq(membershipRoles.userId, ownerId)));
@@ -84,6 +84,21 @@ const instrumentPlans = [
   { kind: "microscope", name: "M1", description: "darkfield microscope, 10–70×", location: "Bench 1", check: null, ageDays: 0 },
 ] as const;
 
+/** Since then each was checked again, but for one whose check is overdue. */
+export async function checkInstrumentsAgain({ as, instruments }: Laboratory, { owner, now }: { owner: string; now: Date }): Promise<void> {
+  for (const plan of instrumentPlans) {
+    if (!plan.check || plan.name === "R1") continue;
+    await checkInstrument(as(owner, new Date(now.getTime() - plan.ageDays * 24 * 60 * 60 * 1000)), { id: instruments.get(plan.name)!, check: plan.check, usualDays: 14 });
+  }
+}
+
+async function checkInstrument(owner: LabContext, { id, check, usualDays }: { id: InstrumentId; check: readonly [string, string, string, string]; usualDays: number }): Promise<void> {
+  const [referenceMaterial, nominal, reading, limit] = check;
+  const typed = (text: string) => ({ value: Number(text), text });
+  const nextDueOn = addDays(calendarDateIn(owner.now, owner.laboratory.timeZone), usualDays);
+  await recordInstrumentCheck(owner, id, { requestId: newId<"instrumentCheck">(), referenceMaterial, nominal: typed(nominal), reading: typed(reading), limit: typed(limit), tempC: 21.5, nextDueOn, note: "" });
+}
+
 async function addInstruments(owner: LabContext): Promise<Map<string, InstrumentId>> {
   const instruments = new Map<string, InstrumentId>();
   for (const plan of instrumentPlans) {
@@ -94,12 +109,7 @@ async function addInstruments(owner: LabContext): Promise<Map<string, Instrument
       upperLimit: "upperLimit" in plan ? plan.upperLimit : null, prismIndex: "prismIndex" in plan ? plan.prismIndex : null,
     });
     instruments.set(name, id);
-    if (plan.check) {
-      const [referenceMaterial, nominal, reading, limit] = plan.check;
-      const typed = (text: string) => ({ value: Number(text), text });
-      const checkedOn = calendarDateIn(owner.now, owner.laboratory.timeZone);
-      await recordInstrumentCheck(owner, id, { requestId: newId<"instrumentCheck">(), referenceMaterial, nominal: typed(nominal), reading: typed(reading), limit: typed(limit), tempC: 21.5, nextDueOn: addDays(checkedOn, name === "R1" ? 20 : 60), note: "" });
-    }
+    if (plan.check) await checkInstrument(owner, { id, check: plan.check, usualDays: name === "R1" ? 20 : 60 });
   }
   return instruments;
 }

@@ -8,7 +8,7 @@ import { EvidenceLanes } from "./evidence-lanes.tsx";
 export function CandidatesCard({ ranking, isWithTyped = false }: { ranking: BenchRanking; /** The reading that is being typed is counted in. */ isWithTyped?: boolean }) {
   const { candidates, hasEvidence, speciesCount } = ranking;
   return (
-    <Card title="Candidates" note={`of ${speciesCount} species, weighed by how common they are`} aside={<>{isWithTyped ? <Chip tone="blue">with what you type</Chip> : null}<Chip tone="tint">Table {ranking.tableVersion}</Chip></>}>
+    <Card title="Candidates" note={`of ${speciesCount}, by prevalence`} aside={<>{isWithTyped ? <Chip tone="blue">with what you type</Chip> : null}<Chip tone="tint">Table {ranking.tableVersion.slice(0, 8)}</Chip></>}>
       {hasEvidence ? (
         <div aria-live="polite" aria-atomic="false">
           <ol>
@@ -43,7 +43,7 @@ function CandidateItem({ candidate: { name, probability, lanes } }: { candidate:
     <li className="border-t border-rule px-4.5 py-2.5">
       <div className="flex items-baseline gap-2.5">
         <h3>{name}</h3>
-        <span className="ml-auto font-mono text-base font-medium">{percent(probability)}</span>
+        <span className="ml-auto shrink-0 font-mono text-base font-medium whitespace-nowrap">{percent(probability)}</span>
       </div>
       <svg aria-hidden="true" className="my-1.5 block h-1.25 w-full overflow-hidden rounded-full">
         <rect width="100%" height="100%" className="fill-track" />

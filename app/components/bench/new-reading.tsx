@@ -1,6 +1,7 @@
 import { getFormProps, useForm, type SubmissionResult } from "@conform-to/react";
 import { useState, type FormEvent } from "react";
 import { Form, useNavigation } from "react-router";
+import { formatCalendarDate } from "#app/domain/calendar-date.ts";
 import { Button } from "#app/components/ui/button.tsx";
 import { fieldProps } from "#app/components/ui/field-props.ts";
 import { FormAlert } from "#app/components/ui/form-alert.tsx";
@@ -53,7 +54,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
   }
 
   return (
-    <Form method="post" preventScrollReset {...getFormProps(form)} onChange={onType} className="grid gap-x-7 gap-y-4 px-4.5 py-4 md:grid-cols-[minmax(0,19rem)_minmax(0,1fr)]">
+    <Form method="post" preventScrollReset {...getFormProps(form)} onChange={onType} className="group/reading grid gap-x-7 gap-y-4 px-4.5 py-4 md:grid-cols-[minmax(0,19rem)_minmax(0,1fr)]">
       <input type="hidden" name="kind" value={kind} />
       <input type="hidden" name={fields.requestId.name} defaultValue={fields.requestId.initialValue} key={fields.requestId.key} />
       {areCandidatesHidden ? <input type="hidden" name="areCandidatesHidden" value="on" /> : null}
@@ -97,7 +98,8 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
           {...fieldProps(fields.noResultReason)}
           label="Why there is no reading"
           isRequired={false}
-          emptyLabel="There is one"
+          className="hidden group-has-[[value=noResult]:checked]/reading:block"
+          emptyLabel="Choose"
           options={noResultReasons.map((value) => ({ value, label: value[0]!.toUpperCase() + value.slice(1) }))}
         />
         {kind === "free" ? null : (
@@ -127,7 +129,7 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
           <dt className="text-ink-3">Instrument</dt>
           <dd>
             {instrument.name}
-            {instrument.check ? `, checked ${instrument.check.checkedOn} on ${instrument.check.referenceMaterial}` : ", no check on record"}
+            {instrument.check ? `, checked ${formatCalendarDate(instrument.check.checkedOn)} on ${instrument.check.referenceMaterial}` : ", no check on record"}
             {instrument.isOutOfCheck && instrument.check ? <span className="text-straw">; the next one is overdue</span> : null}
             {instrument.status === "restricted" ? <span className="text-straw">; restricted</span> : null}
           </dd>

@@ -18,7 +18,7 @@ export async function listDemonstrationPeople({ db }: Pick<AppContext, "db">) {
     .leftJoin(membershipRoles, and(eq(membershipRoles.laboratoryId, memberships.laboratoryId), eq(membershipRoles.userId, users.id)))
     .where(eq(users.isDemonstration, true))
     .groupBy(users.id, users.name, users.email, laboratories.id, laboratories.name)
-    .orderBy(asc(laboratories.name), asc(users.id))
+    .orderBy(sql`${laboratories.name} is null`, asc(laboratories.name), asc(users.id))
     .limit(50);
   return rows.map(({ roles: held, ...person }) => ({ ...person, work: workOf((held ?? "").split(",")) }));
 }

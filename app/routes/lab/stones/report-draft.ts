@@ -5,5 +5,5 @@ import { pdfResponse } from "#app/web/pdf-response.server.ts";
 import type { Route } from "./+types/report-draft";
 
 export async function loader({ context, params }: Route.LoaderArgs) {
-  return pdfResponse(await orResponse(renderDraft(context.get(labContext), { stoneCode: params.stoneCode })));
+  return pdfResponse(await orResponse(renderDraft(context.get(labContext), { stoneCode: params.stoneCode })), { isFramed: true });
 }

@@ -82,12 +82,10 @@ export default function StoneReportRoute({ loaderData, actionData, params }: Rou
         <div className="grid gap-5 lg:grid-cols-[minmax(0,1fr)_24rem]">
           <Card title="Draft" note="as it would be printed now">
             <CardBody>
-              <object data={`${base}/report/draft.pdf`} type="application/pdf" className="h-[70vh] w-full rounded-md border border-rule" aria-label="Draft of the report">
-                <p className="p-4">This browser does not show PDFs in a page.</p>
-              </object>
+              <iframe src={`${base}/report/draft.pdf`} className="h-[70vh] w-full rounded-md border border-rule" title="Draft of the report" />
               <p className="mt-3">
                 <a href={`${base}/report/draft.pdf`} className="text-tint">
-                  Open the draft
+                  Open the draft by itself
                 </a>
               </p>
             </CardBody>
