@@ -99,9 +99,11 @@ async function startAll({ isDemo, env, started, close }: Starting) {
 
 function run(args: string[], env: NodeJS.ProcessEnv): Promise<void> {
   return new Promise((resolve, reject) => {
-    const child = spawn(process.execPath, args, { stdio: ["ignore", "ignore", "inherit"], env });
+    const child = spawn(process.execPath, args, { stdio: ["ignore", "ignore", "pipe"], env });
+    let said = "";
+    child.stderr.setEncoding("utf8").on("data", (text: string) => (said += text));
     child.once("error", reject);
-    child.once("exit", (code, signal) => (code === 0 ? resolve() : reject(new Error(`${args.join(" ")} ended with ${code ?? signal}`))));
+    child.once("close", (code, signal) => (code === 0 ? resolve() : reject(new Error(`${args.join(" ")} ended with ${code ?? signal}:\n${said.slice(-4_000)}`))));
   });
 }
 
