@@ -42,7 +42,7 @@ async function startAll({ isDemo, env, started, close }: Starting) {
   };
   const port = await freePort();
   const url = `http://127.0.0.1:${port}`;
-  const db = keep(await startThrowAwayDb());
+  const db = keep(await startThrowAwayDb({ hasQueryLog: true }));
   const databaseUrl = db.urlOf("isogyre");
   await runMigrations(databaseUrl);
   const stripe = keep(await startFakeStripe({ webhookUrl: `${url}/webhooks/stripe` }));
@@ -87,6 +87,7 @@ async function startAll({ isDemo, env, started, close }: Starting) {
   return {
     url,
     databaseUrl,
+    queryLog: db.queryLog,
     stripe,
     uploads,
     mailbox,
