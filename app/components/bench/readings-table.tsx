@@ -17,7 +17,7 @@ type ReadingsTableProps = {
 export function ReadingsTable({ readings, strikeHref, canStrike }: ReadingsTableProps) {
   if (readings.length === 0) return <EmptyState title="No readings yet">Begin with what harms least: look, weigh, measure, then the polariscope and the refractometer.</EmptyState>;
   return (
-    <Table caption="Readings">
+    <Table caption="Readings, latest first">
       <thead>
         <tr>
           <HeaderCell>When</HeaderCell>
