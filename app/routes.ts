@@ -71,6 +71,7 @@ export default [
       // species
       route("species", "routes/lab/species/list.tsx"),
       route("species.csv", "routes/lab/species/list-csv.ts"),
+      route("species/:speciesId", "routes/lab/species/detail.tsx"),
 
       // bench
       route("stones/:stoneCode", "routes/lab/stones/bench.tsx"),

@@ -15,12 +15,12 @@ export function PropertyFilters({ typed, errors }: PropertyFiltersProps) {
       <RangeFilter name="density" label="Density" typed={typed} error={errors.density} />
       <Choice name="character" label="Between crossed polars" value={typed.character} options={characterFilters.map((value) => [value, characterFilterNames[value]])} className="w-48" />
       <Choice name="colour" label="Colour" value={typed.colour} options={colourFamilies.map((value) => [value, value])} />
-      <details open={isMoreUsed} className="group/more open:basis-full open:order-last">
+      <details open={isMoreUsed} className="mt-5.5 open:order-last open:mt-0 open:basis-full">
         <summary className="flex min-h-9 items-center px-1 text-tint underline decoration-1 underline-offset-3 pointer-coarse:min-h-11">More properties</summary>
         <div className="flex flex-wrap items-end gap-2.5 pt-1">
           <RangeFilter name="birefringence" label="Birefringence" typed={typed} error={errors.birefringence} />
           <Choice name="sign" label="Optic sign" value={typed.sign} options={signFilters.map((value) => [value, signFilterNames[value]])} />
-          <Choice name="kind" label="Made by" value={typed.kind} options={kindFilters.map((value) => [value, kindNames[value]])} />
+          <Choice name="kind" label="Nature" value={typed.kind} options={kindFilters.map((value) => [value, kindNames[value]])} />
           <Choice name="transparency" label="Transparency" value={typed.transparency} options={transparencyFilters.map((value) => [value, value])} />
           <Choice name="phenomenon" label="Phenomenon" value={typed.phenomenon} options={phenomenonFilters.map((value) => [value, value])} />
         </div>

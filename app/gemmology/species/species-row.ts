@@ -32,7 +32,7 @@ export type SpeciesRow = Readonly<{
   transparency: readonly string[];
   lustre: readonly string[];
   pleochroism: ReadonlyArray<Readonly<{ colour_variety: string; strength: "none" | "weak" | "distinct" | "strong"; colours: readonly string[] }>> | null;
-  absorption: ReadonlyArray<Readonly<{ nm: number; kind: "line" | "band" | "cutoff"; width_nm?: number | null; strength: number; colour_variety?: string | null; cause?: string | null }>>;
+  absorption: readonly Absorption[];
   fluorescence: Readonly<{ lw: readonly Fluorescence[]; sw: readonly Fluorescence[]; note?: string | null }>;
   colour_filter: Readonly<Record<string, string>> | null;
   thermal: string | null;
@@ -48,6 +48,8 @@ export type SpeciesRow = Readonly<{
   prevalence: number;
   sources: readonly string[];
 }>;
+/** Strength 1 weak or often missing, 2 clear, 3 strong; `nm` is the centre, of a cut-off the edge. */
+export type Absorption = Readonly<{ nm: number; kind: "line" | "band" | "cutoff"; width_nm?: number | null; strength: number; colour_variety?: string | null; cause?: string | null }>;
 export type Fluorescence = Readonly<{ colour: string | null; strength: number; strength_min?: number; colour_variety?: string | null }>;
 
 /** A species of the ranking and the forms that are told apart under it. */

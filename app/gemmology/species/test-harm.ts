@@ -38,7 +38,7 @@ export function testHarm(row: SpeciesRow): Readonly<Record<HarmfulTest, Harm>> {
 /** Kinds of material a form falls under, from what its row says of it; never empty. */
 export function harmClassesOf(row: SpeciesRow): HarmClass[] {
   const cautions = row.cautions.join("; ");
-  const treatments = row.treatments_common.join("; ");
+  const treatments = row.treatments_common.filter((treatment) => !/\brare\b/.test(treatment)).join("; ");
   const is = (pattern: RegExp, text: string | null = cautions) => text !== null && pattern.test(text);
   const isResin = row.group === "plastic" || is(/^(amber|copal|jet|vulcanite)/, row.id);
   const kinds: Record<HarmClass, boolean> = {

@@ -51,7 +51,7 @@ export default function SpeciesRoute({ loaderData, params }: Route.ComponentProp
           onChoose={({ speciesId, by }) => void navigate(`${base}/${speciesId}${by.formId ? `?form=${by.formId}` : ""}`)}
         />
         <PropertyFilters typed={typed} errors={errors} />
-        <div className="flex items-center gap-2.5 pt-5.5">
+        <div className="mt-5.5 flex items-center gap-2.5">
           <Button look="quiet">Show</Button>
           {isFiltered ? (
             <Link to={base} className="px-1 text-ink-2">
@@ -88,7 +88,7 @@ export default function SpeciesRoute({ loaderData, params }: Route.ComponentProp
                   </SortHeaderCell>
                   <HeaderCell>Character and sign</HeaderCell>
                   <HeaderCell hideBelow="xl">Colours</HeaderCell>
-                  <HeaderCell hideBelow="lg">Made by</HeaderCell>
+                  <HeaderCell hideBelow="lg">Nature</HeaderCell>
                 </tr>
               </thead>
               <tbody>
