@@ -71,6 +71,7 @@ export default [
       // species
       route("species", "routes/lab/species/list.tsx"),
       route("species.csv", "routes/lab/species/list-csv.ts"),
+      route("species/compare", "routes/lab/species/compare.tsx"),
       route("species/:speciesId", "routes/lab/species/detail.tsx"),
 
       // bench
