@@ -72,6 +72,7 @@ export default [
       route("species", "routes/lab/species/list.tsx"),
       route("species.csv", "routes/lab/species/list-csv.ts"),
       route("species/compare", "routes/lab/species/compare.tsx"),
+      route("species/map", "routes/lab/species/map.tsx"),
       route("species/:speciesId", "routes/lab/species/detail.tsx"),
 
       // bench

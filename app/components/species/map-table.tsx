@@ -1,0 +1,44 @@
+import type { MapReading, Standing } from "#app/components/charts/species-map/species-map.tsx";
+import { Card } from "#app/components/ui/card.tsx";
+import { Cell, HeaderCell, RowHeaderCell, Table } from "#app/components/ui/table.tsx";
+import { formatInterval } from "#app/domain/format-interval.ts";
+import type { SpeciesBox } from "#app/features/species/species-boxes.ts";
+import { offsetWords } from "./offset-words.ts";
+
+const standingWords: Readonly<Record<Standing, string>> = { chosen: "chosen", candidate: "candidate", open: "", contradicted: "ruled out by the readings" };
+
+type MapTableProps = { boxes: readonly SpeciesBox[]; unplaced: ReadonlyArray<{ id: string; name: string }>; standingOf: (id: string) => Standing; reading: MapReading; base: string };
+
+/** What the map shows, in words: from the reading outwards, or by index where there is none. */
+export function MapTable({ boxes, unplaced, standingOf, reading, base }: MapTableProps) {
+  const hasReading = reading.index !== null || reading.sg !== null;
+  const lines = boxes.map((box) => ({ ...box, ...offsetWords(box, reading) })).sort((a, b) => (hasReading ? a.distanceU - b.distanceU : a.index[0] - b.index[0]) || a.name.localeCompare(b.name, "en"));
+  const near = lines.filter(({ isNear }) => isNear).length;
+  return (
+    <Card id="table" title="The same as a table" note={hasReading ? `from the reading outwards; ${near} within 2u` : "by index"}>
+      <Table caption={hasReading ? "Species by their distance from the reading" : "Species by index and density"}>
+        <thead>
+          <tr>
+            <HeaderCell>Species</HeaderCell>
+            <HeaderCell isNumber>Index</HeaderCell>
+            <HeaderCell isNumber>Density</HeaderCell>
+            {hasReading ? <HeaderCell>To the reading</HeaderCell> : null}
+            <HeaderCell>Standing</HeaderCell>
+          </tr>
+        </thead>
+        <tbody>
+          {lines.map(({ id, name, index, sg, sentence, isNear }) => (
+            <tr key={id} className={hasReading && isNear ? "bg-green-bg" : ""}>
+              <RowHeaderCell to={`${base}/${id}`}>{name}</RowHeaderCell>
+              <Cell isNumber>{formatInterval(index, 3)}</Cell>
+              <Cell isNumber>{formatInterval(sg, 2)}</Cell>
+              {hasReading ? <Cell className={isNear ? "font-medium text-green" : "text-ink-2"}>{sentence}</Cell> : null}
+              <Cell className="text-ink-2">{standingWords[standingOf(id)]}</Cell>
+            </tr>
+          ))}
+        </tbody>
+      </Table>
+      {unplaced.length > 0 ? <p className="border-t border-rule px-4.5 py-3 text-sm text-ink-3">Without an index or a density: {unplaced.map(({ name }) => name).join(", ")}.</p> : null}
+    </Card>
+  );
+}
