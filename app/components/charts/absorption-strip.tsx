@@ -1,4 +1,3 @@
-import { scaleLinear } from "@visx/scale";
 import type { Absorption } from "#app/gemmology/species/species-row.ts";
 
 const shown = { from: 400, to: 700 } as const;
@@ -6,7 +5,7 @@ const opacity = { 1: 0.3, 2: 0.6, 3: 0.95 } as const;
 
 /** The visible spectrum as a hand spectroscope shows it, red on the left: lines and bands dark, as strong as they are. The list beside it says the same. */
 export function AbsorptionStrip({ absorption }: { absorption: readonly Absorption[] }) {
-  const x = scaleLinear<number>({ domain: [shown.to, shown.from], range: [0, 100] });
+  const x = (nm: number) => (100 * (shown.to - nm)) / (shown.to - shown.from);
   const percent = (nm: number) => `${Math.min(100, Math.max(0, x(nm))).toFixed(2)}%`;
   return (
     <svg width="100%" height="48" className="block [print-color-adjust:exact]" aria-hidden="true">

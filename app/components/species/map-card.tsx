@@ -1,7 +1,7 @@
 import { useEffect, useId, useState, type MouseEvent } from "react";
 import { Link, useNavigate } from "react-router";
 import { useIsHydrated } from "#app/components/accounts/use-is-hydrated.ts";
-import { viewAround, wholeView, writeMapView, zoomView, type MapView } from "#app/components/charts/species-map/map-view.ts";
+import { refractometerView, viewAround, wholeView, writeMapView, zoomView, type MapView } from "#app/components/charts/species-map/map-view.ts";
 import { SpeciesMap, type MapReading, type Standing } from "#app/components/charts/species-map/species-map.tsx";
 import { buttonLook } from "#app/components/ui/button.tsx";
 import { Card } from "#app/components/ui/card.tsx";
@@ -58,6 +58,7 @@ export function MapCard({ boxes, standingOf, reading, startView, base, kept }: M
           <Link {...move(zoomView(view, 1 / 1.6))}>Nearer</Link>
           <Link {...move(zoomView(view, 1.6))}>Farther</Link>
           {hasReading ? <Link {...move(viewAround({ index: reading.index?.value ?? null, sg: reading.sg?.value ?? null }))}>Around the reading</Link> : null}
+          <Link {...move(refractometerView)}>Refractometer’s range</Link>
           <Link {...move(wholeView)}>Whole</Link>
         </div>
       }

@@ -37,7 +37,7 @@ export function MapReadingForm({ typed, errors, placeholders, clearTo }: MapRead
       ))}
       <Button look="quiet">Place</Button>
       {clearTo ? (
-        <Link to={clearTo} className="self-center px-1 text-ink-2">
+        <Link to={clearTo} className="self-end px-1 pb-2 text-ink-2">
           Clear
         </Link>
       ) : null}

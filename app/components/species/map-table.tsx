@@ -1,11 +1,12 @@
+import { Link } from "react-router";
 import type { MapReading, Standing } from "#app/components/charts/species-map/species-map.tsx";
 import { Card } from "#app/components/ui/card.tsx";
-import { Cell, HeaderCell, RowHeaderCell, Table } from "#app/components/ui/table.tsx";
+import { Cell, HeaderCell, Table } from "#app/components/ui/table.tsx";
 import { formatInterval } from "#app/domain/format-interval.ts";
 import type { SpeciesBox } from "#app/features/species/species-boxes.ts";
 import { offsetWords } from "./offset-words.ts";
 
-const standingWords: Readonly<Record<Standing, string>> = { chosen: "chosen", candidate: "candidate", open: "", contradicted: "ruled out by the readings" };
+const standingWords: Readonly<Record<Standing, string>> = { chosen: "chosen", candidate: "candidate", near: "", open: "", contradicted: "ruled out by the readings" };
 
 type MapTableProps = { boxes: readonly SpeciesBox[]; unplaced: ReadonlyArray<{ id: string; name: string }>; standingOf: (id: string) => Standing; reading: MapReading; base: string };
 
@@ -22,18 +23,21 @@ export function MapTable({ boxes, unplaced, standingOf, reading, base }: MapTabl
             <HeaderCell>Species</HeaderCell>
             <HeaderCell isNumber>Index</HeaderCell>
             <HeaderCell isNumber>Density</HeaderCell>
-            {hasReading ? <HeaderCell>To the reading</HeaderCell> : null}
-            <HeaderCell>Standing</HeaderCell>
           </tr>
         </thead>
         <tbody>
           {lines.map(({ id, name, index, sg, sentence, isNear }) => (
             <tr key={id} className={hasReading && isNear ? "bg-green-bg" : ""}>
-              <RowHeaderCell to={`${base}/${id}`}>{name}</RowHeaderCell>
+              <th scope="row" className="border-t border-rule px-3 py-2 pl-4.5 text-left align-top font-normal">
+                <Link to={`${base}/${id}`} className="text-ink underline decoration-rule-2 hover:text-tint hover:decoration-tint">
+                  {name}
+                </Link>
+                {[hasReading ? sentence : "", standingWords[standingOf(id)]].some(Boolean) ? (
+                  <span className={`block text-xs ${hasReading && isNear ? "font-medium text-green" : "text-ink-3"}`}>{[hasReading ? sentence : "", standingWords[standingOf(id)]].filter(Boolean).join("; ")}</span>
+                ) : null}
+              </th>
               <Cell isNumber>{formatInterval(index, 3)}</Cell>
               <Cell isNumber>{formatInterval(sg, 2)}</Cell>
-              {hasReading ? <Cell className={isNear ? "font-medium text-green" : "text-ink-2"}>{sentence}</Cell> : null}
-              <Cell className="text-ink-2">{standingWords[standingOf(id)]}</Cell>
             </tr>
           ))}
         </tbody>

@@ -6,7 +6,7 @@ import { centreOf, panView, viewShowing, wholeView, zoomView, type MapView } fro
 import { nextBox, type Direction } from "./next-box.ts";
 import { placeNames } from "./place-names.ts";
 
-export type Standing = "chosen" | "candidate" | "open" | "contradicted";
+export type Standing = "chosen" | "candidate" | "near" | "open" | "contradicted";
 export type MapReading = Readonly<{ index: Measured | null; sg: Measured | null }>;
 
 type SpeciesMapProps = {
@@ -25,15 +25,17 @@ type SpeciesMapProps = {
 };
 
 const width = 960;
-const height = 600;
-const plot = { left: 46, right: 950, top: 14, bottom: 556 } as const;
+const height = 560;
+const plot = { left: 46, right: 950, top: 14, bottom: 516 } as const;
 const looks: Readonly<Record<Standing, string>> = {
-  chosen: "fill-blue/30 stroke-blue",
-  candidate: "fill-tint/35 stroke-tint",
-  open: "fill-ink-3/25 stroke-ink-3/40",
-  contradicted: "fill-ink-3/10 stroke-ink-3/25",
+  chosen: "fill-blue stroke-blue",
+  candidate: "fill-tint stroke-tint",
+  near: "fill-green stroke-green",
+  open: "fill-ink-3 stroke-ink-3/60",
+  contradicted: "fill-ink-3 stroke-ink-3/30",
 };
-const rank: Readonly<Record<Standing, number>> = { contradicted: 0, open: 1, candidate: 2, chosen: 3 };
+const rank: Readonly<Record<Standing, number>> = { contradicted: 0, open: 1, near: 2, candidate: 3, chosen: 4 };
+const isStrong = (standing: Standing) => rank[standing] > 1;
 const mostNames = 26;
 const directions: Readonly<Record<string, Direction>> = { ArrowLeft: "left", ArrowRight: "right", ArrowUp: "up", ArrowDown: "down" };
 const pans: Readonly<Record<Direction, { right: number; up: number }>> = { left: { right: -0.2, up: 0 }, right: { right: 0.2, up: 0 }, up: { right: 0, up: 0.2 }, down: { right: 0, up: -0.2 } };
@@ -170,7 +172,7 @@ export function SpeciesMap({ boxes, standingOf, reading, view, onView, activeId,
           <g key={tick}>
             <line x1={plot.left} x2={plot.right} y1={y(tick)} y2={y(tick)} className="stroke-rule" strokeDasharray="2 3" />
             <text x={plot.left - 7} y={y(tick) + 4} textAnchor="end" className="fill-ink-3 font-mono text-[12px]">
-              {tick.toFixed(decimalsFor(view.sgMax - view.sgMin))}
+              {tick.toFixed(sgDecimals(view.sgMax - view.sgMin))}
             </text>
           </g>
         ))}
@@ -178,7 +180,7 @@ export function SpeciesMap({ boxes, standingOf, reading, view, onView, activeId,
           <g key={tick}>
             <line x1={x(tick)} x2={x(tick)} y1={plot.top} y2={plot.bottom} className="stroke-rule" strokeDasharray="2 3" />
             <text x={x(tick)} y={plot.bottom + 17} textAnchor="middle" className="fill-ink-3 font-mono text-[12px]">
-              {tick.toFixed(decimalsFor(view.indexMax - view.indexMin) + 1)}
+              {tick.toFixed(indexDecimals(view.indexMax - view.indexMin))}
             </text>
           </g>
         ))}
@@ -193,7 +195,7 @@ export function SpeciesMap({ boxes, standingOf, reading, view, onView, activeId,
           {index ? <rect x={x(index.value - 2 * index.u)} width={Math.max(1, x(index.value + 2 * index.u) - x(index.value - 2 * index.u))} y={plot.top} height={plot.bottom - plot.top} className="fill-tint/15" /> : null}
           {sg ? <rect x={plot.left} width={plot.right - plot.left} y={y(sg.value + 2 * sg.u)} height={Math.max(1, y(sg.value - 2 * sg.u) - y(sg.value + 2 * sg.u))} className="fill-tint/15" /> : null}
           {drawn.map(({ id, standing, left, right, top, bottom }) => (
-            <rect key={id} data-species={id} x={left} y={top} width={right - left} height={bottom - top} rx="1.5" strokeWidth={standing === "open" || standing === "contradicted" ? 0.7 : 1.4} className={looks[standing]} />
+            <rect key={id} data-species={id} x={left} y={top} width={right - left} height={bottom - top} rx="1.5" strokeWidth={isStrong(standing) ? 1.4 : 0.7} fillOpacity={fillShare((right - left) * (bottom - top)) * (standing === "contradicted" ? 0.4 : 1)} className={looks[standing]} />
           ))}
           {active ? <rect x={active.left - 2} y={active.top - 2} width={active.right - active.left + 4} height={active.bottom - active.top + 4} rx="3" strokeWidth="2" className="fill-none stroke-ink" /> : null}
           {index && sg ? (
@@ -214,7 +216,12 @@ function nearest<T extends { x: number; y: number }>(points: readonly T[], to: {
   return points.reduce<T | undefined>((best, point) => (!best || Math.hypot(point.x - to.x, point.y - to.y) < Math.hypot(best.x - to.x, best.y - to.y) ? point : best), undefined);
 }
 
-const decimalsFor = (span: number) => (span > 0.9 ? 1 : span > 0.25 ? 2 : 3);
+const plotArea = (plot.right - plot.left) * (plot.bottom - plot.top);
+/** A large box is all but empty, so that many can lie on one another and small ones still be seen. */
+const fillShare = (area: number) => Math.min(0.4, Math.max(0.02, 0.02 * Math.sqrt(plotArea / Math.max(1, area))));
+
+const sgDecimals = (span: number) => (span > 0.7 ? 1 : span > 0.1 ? 2 : 3);
+const indexDecimals = (span: number) => (span > 0.3 ? 2 : span > 0.02 ? 3 : 4);
 
 function description(count: number, { index, sg }: MapReading): string {
   const where = [index ? `index ${index.value.toFixed(3)}` : "", sg ? `density ${sg.value.toFixed(2)}` : ""].filter(Boolean).join(" and ");

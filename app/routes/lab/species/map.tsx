@@ -1,4 +1,4 @@
-import { useCallback } from "react";
+import { useMemo } from "react";
 import { Link } from "react-router";
 import { readMapView, viewAround, wholeView, type MapView } from "#app/components/charts/species-map/map-view.ts";
 import type { Standing } from "#app/components/charts/species-map/species-map.tsx";
@@ -6,6 +6,7 @@ import { PageHeader } from "#app/components/layout/page-header.tsx";
 import { MapCard } from "#app/components/species/map-card.tsx";
 import { MapReadingForm } from "#app/components/species/map-reading-form.tsx";
 import { MapTable } from "#app/components/species/map-table.tsx";
+import { offsetWords } from "#app/components/species/offset-words.ts";
 import { LinkButton } from "#app/components/ui/button.tsx";
 import { Caution } from "#app/components/ui/caution.tsx";
 import { formatWithUncertainty } from "#app/domain/format-uncertainty.ts";
@@ -64,10 +65,14 @@ export default function SpeciesMapRoute({ loaderData, params }: Route.ComponentP
   const base = `${lab}/species`;
   const isTyped = Object.values(typed).some(Boolean);
   const seen = isTyped ? null : stone?.seen;
-  const standingOf = useCallback(
-    (id: string): Standing => (chosenIds.includes(id) ? "chosen" : seen?.candidateIds.includes(id) ? "candidate" : seen?.contradictedIds.includes(id) ? "contradicted" : "open"),
-    [chosenIds, seen],
-  );
+  const standingOf = useMemo(() => {
+    const standings = new Map<string, Standing>();
+    if (reading.index || reading.sg) for (const box of boxes) if (offsetWords(box, reading).isNear) standings.set(box.id, "near");
+    for (const id of seen?.contradictedIds ?? []) standings.set(id, "contradicted");
+    for (const id of seen?.candidateIds ?? []) standings.set(id, "candidate");
+    for (const id of chosenIds) standings.set(id, "chosen");
+    return (id: string): Standing => standings.get(id) ?? "open";
+  }, [boxes, reading, chosenIds, seen]);
   return (
     <>
       <PageHeader
@@ -95,7 +100,7 @@ export default function SpeciesMapRoute({ loaderData, params }: Route.ComponentP
       {stone && !stone.seen ? <Caution className="mb-3">You are, or may be, the one who checks this stone: what was read before stays hidden here, as it does on its page.</Caution> : null}
       {stone?.seen && !stone.seen.index && !stone.seen.density ? <Caution className="mb-3">No index and no density have been read from this stone yet.</Caution> : null}
       <MapReadingForm typed={typed} errors={errors} placeholders={{ nU: String(placedUncertainty.index), dU: String(placedUncertainty.sg) }} clearTo={isTyped ? (stone ? `?stone=${stone.code}` : base + "/map") : null} />
-      <div className="grid gap-5">
+      <div className="grid items-start gap-5 xl:grid-cols-[minmax(0,1fr)_28rem]">
         {/* A new question draws a new map; moving in it does not ask again. */}
         <MapCard key={JSON.stringify([reading, chosenIds, view])} boxes={boxes} standingOf={standingOf} reading={reading} startView={view} base={base} kept={kept} />
         <MapTable boxes={boxes} unplaced={unplaced} standingOf={standingOf} reading={reading} base={base} />
