@@ -27,13 +27,13 @@ export function MapTable({ boxes, unplaced, standingOf, reading, base }: MapTabl
         </thead>
         <tbody>
           {lines.map(({ id, name, index, sg, sentence, isNear }) => (
-            <tr key={id} className={hasReading && isNear ? "bg-green-bg" : ""}>
+            <tr key={id} className={hasReading && isNear && standingOf(id) !== "contradicted" ? "bg-green-bg" : ""}>
               <th scope="row" className="border-t border-rule px-3 py-2 pl-4.5 text-left align-top font-normal">
                 <Link to={`${base}/${id}`} className="text-ink underline decoration-rule-2 hover:text-tint hover:decoration-tint">
                   {name}
                 </Link>
                 {[hasReading ? sentence : "", standingWords[standingOf(id)]].some(Boolean) ? (
-                  <span className={`block text-xs ${hasReading && isNear ? "font-medium text-green" : "text-ink-3"}`}>{[hasReading ? sentence : "", standingWords[standingOf(id)]].filter(Boolean).join("; ")}</span>
+                  <span className={`block text-xs ${hasReading && isNear && standingOf(id) !== "contradicted" ? "font-medium text-green" : "text-ink-3"}`}>{[hasReading ? sentence : "", standingWords[standingOf(id)]].filter(Boolean).join("; ")}</span>
                 ) : null}
               </th>
               <Cell isNumber>{formatInterval(index, 3)}</Cell>

@@ -16,11 +16,11 @@ export function createSpeciesSearch({ species, names }: SpeciesNames): SpeciesSe
   return (words, limit = Infinity) => {
     const wanted = foldName(words).slice(0, 32); // the longest a search of letters can be
     if (wanted === "") return [];
-    const hits = fuse.search(wanted).map(({ refIndex, score = 1 }) => ({ by: names[refIndex]!, nearness: nearness(folded[refIndex]!, wanted), score }));
-    // A name that holds the words as they were typed makes guesses superfluous.
-    const isHeld = hits.some(({ nearness }) => nearness < 4);
+    const held = folded.flatMap((name, at) => (name.includes(wanted) ? [{ by: names[at]!, nearness: nearness(name, wanted), score: name.length }] : []));
+    // Only where no name holds the words as they were typed is it guessed what was meant.
+    const hits = held.length > 0 ? held : fuse.search(wanted).map(({ refIndex, score = 1 }) => ({ by: names[refIndex]!, nearness: 4, score }));
     const best = new Map<string, FoundSpecies>();
-    for (const { by } of hits.filter(({ nearness }) => !isHeld || nearness < 4).sort(compareHits)) {
+    for (const { by } of hits.sort(compareHits)) {
       if (!best.has(by.speciesId)) best.set(by.speciesId, { speciesId: by.speciesId, speciesName: species[by.speciesId] ?? by.speciesId, by });
       if (best.size >= limit) break;
     }
@@ -28,12 +28,11 @@ export function createSpeciesSearch({ species, names }: SpeciesNames): SpeciesSe
   };
 }
 
-/** 0 the name itself, 1 its beginning, 2 the beginning of a word, 3 within, 4 only alike. */
+/** Of a name that holds the words: 0 is them, 1 begins with them, 2 has a word that does, 3 holds them within. */
 function nearness(name: string, wanted: string): number {
   if (name === wanted) return 0;
   if (name.startsWith(wanted)) return 1;
-  const at = name.indexOf(wanted);
-  return at < 0 ? 4 : name[at - 1] === " " ? 2 : 3;
+  return name.includes(` ${wanted}`) ? 2 : 3;
 }
 
 type Hit = { by: SpeciesName; nearness: number; score: number };

@@ -2,7 +2,7 @@
 export type MapView = Readonly<{ indexMin: number; indexMax: number; sgMin: number; sgMax: number }>;
 
 /** All that gem materials span. */
-export const wholeView: MapView = { indexMin: 1.32, indexMax: 3.26, sgMin: 0.8, sgMax: 7.8 };
+export const wholeView: MapView = { indexMin: 1.32, indexMax: 3.36, sgMin: 0.8, sgMax: 7.8 };
 /** What most contact refractometers read, and the densities of what is met there. */
 export const refractometerView: MapView = { indexMin: 1.42, indexMax: 1.82, sgMin: 1.8, sgMax: 4.6 };
 const leastSpan = { index: 0.01, sg: 0.05 } as const;
