@@ -52,7 +52,8 @@ function fit([min, max]: readonly [number, number], [least, most]: readonly [num
   const width = Math.min(most - least, Math.max(leastWidth, max - min));
   const middle = (min + max) / 2;
   const start = Math.min(most - width, Math.max(least, middle - width / 2));
-  return [start, start + width];
+  // The last bits of a double are no view of anybody's: the same place gives the same numbers.
+  return [Number(start.toFixed(9)), Number((start + width).toFixed(9))];
 }
 
 export const centreOf = ({ indexMin, indexMax, sgMin, sgMax }: MapView) => ({ index: (indexMin + indexMax) / 2, sg: (sgMin + sgMax) / 2 });

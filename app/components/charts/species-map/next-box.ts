@@ -14,7 +14,7 @@ export function nextBox(boxes: readonly Middle[], from: Readonly<{ x: number; y:
     const [ahead, aside] = { left: [-right, down], right: [right, down], up: [-down, right], down: [down, right] }[direction] as [number, number];
     // Beyond 60° to the side it belongs to another direction.
     if (ahead <= 0 || Math.abs(aside) > ahead * 1.74) continue;
-    const cost = ahead + 1.5 * Math.abs(aside);
+    const cost = ahead + 2.5 * Math.abs(aside);
     if (!best || cost < best.cost || (cost === best.cost && box.id < best.box.id)) best = { box, cost };
   }
   return best?.box;
