@@ -28,7 +28,7 @@ export function ComparisonTable({ columns, rows, base, hrefWithout }: Comparison
           </th>
           {columns.map(({ ref, speciesId, formId, name, speciesName }) => (
             <th key={ref} scope="col" className="px-3 py-2.5 text-left align-bottom font-normal">
-              <Link to={`${base}/${speciesId}${formId ? `?form=${formId}` : ""}`} className="font-serif text-lg leading-tight text-ink decoration-rule-2 hover:text-tint">
+              <Link to={`${base}/${speciesId}${formId ? `?form=${formId}` : ""}`} className="inline-flex min-h-7 items-end font-serif text-lg leading-tight text-ink decoration-rule-2 hover:text-tint">
                 {name}
               </Link>
               {speciesName ? <span className="block text-xs text-ink-3">{speciesName}</span> : null}

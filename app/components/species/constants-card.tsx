@@ -6,7 +6,7 @@ import type { SpeciesConstants } from "#app/features/species/species-constants.t
 export function ConstantsCard({ constants: { lines, sources }, title }: { constants: SpeciesConstants; title: string }) {
   return (
     <Card title={title} note="sodium light, 589.3 nm; density relative to water at 4 °C">
-      <Table caption={title}>
+      <Table caption={`${title}, each with its sources`}>
         <thead>
           <tr>
             <HeaderCell>Constant</HeaderCell>

@@ -1,6 +1,7 @@
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import { CardSection } from "#app/components/ui/card-section.tsx";
 import type { SpeciesSheet } from "#app/features/species/get-species.server.ts";
+import { AlikeGroups } from "./alike-groups.tsx";
 import { FormAnchor } from "./form-link.tsx";
 
 /** What it is taken for, and what separates them at the bench or only in a laboratory. */
@@ -18,22 +19,7 @@ export function LookAlikesCard({ theyShow, itShows, alike, base }: Pick<SpeciesS
     <Card title="Look-alikes" note="and what separates them">
       <Separations title="What they show" separations={theyShow} base={base} />
       <Separations title="What it shows against others" separations={itShows} base={base} />
-      {alike.map(({ shared, others, bench, laboratory }) => (
-        <CardSection key={shared} title="Constants do not separate" headingLevel={3} intro={shared}>
-          <p>
-            {others.map((link, at) => (
-              <span key={link.formId}>
-                {at > 0 ? ", " : ""}
-                <FormAnchor base={base} link={link} />
-              </span>
-            ))}
-          </p>
-          <dl className="mt-2 grid gap-y-1.5">
-            <Ways label="At the bench" ways={bench} />
-            <Ways label="In a laboratory" ways={laboratory} />
-          </dl>
-        </CardSection>
-      ))}
+      <AlikeGroups groups={alike} base={base} />
     </Card>
   );
 }
@@ -53,21 +39,5 @@ function Separations({ title, separations, base }: { title: string; separations:
         ))}
       </dl>
     </CardSection>
-  );
-}
-
-function Ways({ label, ways }: { label: string; ways: readonly string[] }) {
-  if (ways.length === 0) return null;
-  return (
-    <div className="grid grid-cols-[7.5rem_minmax(0,1fr)] gap-x-4">
-      <dt className="text-ink-3">{label}</dt>
-      <dd>
-        <ul className="grid gap-0.5">
-          {ways.map((way) => (
-            <li key={way}>{way}</li>
-          ))}
-        </ul>
-      </dd>
-    </div>
   );
 }

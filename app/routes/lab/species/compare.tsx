@@ -1,5 +1,6 @@
 import { Form, Link, redirect, useNavigate } from "react-router";
 import { PageHeader } from "#app/components/layout/page-header.tsx";
+import { AlikeGroups } from "#app/components/species/alike-groups.tsx";
 import { ComparisonTable } from "#app/components/species/comparison-table.tsx";
 import { FormAnchor } from "#app/components/species/form-link.tsx";
 import { SpeciesSearchBox } from "#app/components/species/species-search.tsx";
@@ -97,12 +98,7 @@ export default function CompareRoute({ loaderData, params }: Route.ComponentProp
                   </ul>
                 </CardSection>
               ) : null}
-              {alike.map(({ shared, bench, laboratory }) => (
-                <CardSection key={shared} title="Constants do not separate" headingLevel={3} intro={shared}>
-                  {bench.length > 0 ? <p>At the bench: {bench.join("; ")}.</p> : null}
-                  {laboratory.length > 0 ? <p className="mt-1">In a laboratory: {laboratory.join("; ")}.</p> : null}
-                </CardSection>
-              ))}
+              <AlikeGroups groups={alike} base={base} />
               <CardBody className="border-t border-rule">
                 <p className="text-sm text-ink-2">Constants never tell natural from synthetic, nor treated from untreated.</p>
               </CardBody>
