@@ -5,7 +5,6 @@ import { refractometerView, viewAround, wholeView, writeMapView, zoomView, type 
 import { SpeciesMap, type MapReading, type Standing } from "#app/components/charts/species-map/species-map.tsx";
 import { buttonLook } from "#app/components/ui/button.tsx";
 import { Card } from "#app/components/ui/card.tsx";
-import { Key } from "#app/components/ui/key.tsx";
 import { formatInterval } from "#app/domain/format-interval.ts";
 import type { SpeciesBox } from "#app/features/species/species-boxes.ts";
 import { offsetWords } from "./offset-words.ts";
@@ -82,20 +81,8 @@ export function MapCard({ boxes, standingOf, reading, startView, base, kept }: M
           <span className="text-ink-3">{isLive ? "Point at a box, or go from box to box with the arrow keys." : "The table below says the same in words."}</span>
         )}
       </p>
-      <p id={helpId} className={`no-print flex-wrap items-center gap-x-3 gap-y-1 border-t border-rule px-4.5 py-2 text-xs text-ink-3 ${isLive ? "flex" : "hidden"}`}>
-        <span>
-          <Key>←</Key> <Key>→</Key> <Key>↑</Key> <Key>↓</Key> next species
-        </span>
-        <span>
-          <Key>Shift</Key> with an arrow moves the map
-        </span>
-        <span>
-          <Key>+</Key> <Key>-</Key> <Key>0</Key> nearer, farther, whole
-        </span>
-        <span>
-          <Key>Enter</Key> opens
-        </span>
-        <span>Drag to move, Ctrl with the wheel to zoom</span>
+      <p id={helpId} hidden={!isLive} className="no-print border-t border-rule px-4.5 py-2 text-xs text-ink-2">
+        Arrow keys go to the next species, with Shift they move the map. Plus, minus and zero: nearer, farther, whole. Enter opens the species, Escape lets it go. Dragging moves the map; the wheel with Ctrl zooms.
       </p>
     </Card>
   );
