@@ -4,7 +4,7 @@ import { defineConfig } from "vitest/config";
 export default defineConfig({
   test: {
     environment: "node",
-    include: ["tests/journeys/**/*.test.ts"],
+    include: ["tests/journeys/**/*.test.ts", "tests/bars/**/*.test.ts"],
     globalSetup: ["tests/setup/journeys-setup.ts"],
     fileParallelism: false,
     testTimeout: 180_000,

@@ -13,5 +13,6 @@ export declare function startDb(options: {
   database?: string;
   user?: string;
   isThrowAway?: boolean;
+  queryLog?: string;
   log?: (line: string) => void;
 }): Promise<RunningDb>;

@@ -63,9 +63,10 @@ export function isPortFree(port) {
 /**
  * Starts the server, or takes over one that an earlier start left running on the same folder.
  *
+ * @param queryLog for tests: a file that gets every statement
  * @param isThrowAway for tests: nothing is flushed to disk, and the server ends with the process that started it
  */
-export async function startDb({ dir, port, password, database = "isogyre", user = "isogyre", isThrowAway = false, log = () => {} }) {
+export async function startDb({ dir, port, password, database = "isogyre", user = "isogyre", isThrowAway = false, queryLog, log = () => {} }) {
   const binaries = findMariadb();
   if (!binaries.isComplete) throw new Error(missingMessage());
   const folder = path.resolve(dir);
@@ -104,6 +105,7 @@ export async function startDb({ dir, port, password, database = "isogyre", user 
     "--default-time-zone=+00:00",
     "--max-connections=100",
     "--performance-schema=OFF",
+    ...(queryLog ? ["--general-log=1", `--general-log-file=${queryLog}`] : []),
     ...(isThrowAway
       ? ["--innodb-log-file-size=16M", "--innodb-buffer-pool-size=64M", "--innodb-flush-log-at-trx-commit=0", "--innodb-doublewrite=0"]
       : ["--innodb-log-file-size=48M", "--innodb-buffer-pool-size=128M"]),

@@ -31,7 +31,7 @@ export type WithdrawalReason = (typeof withdrawalReasons)[number];
 export const withdrawalReasonNames: Readonly<Record<WithdrawalReason, string>> = {
   identityError: "an error in the identification",
   fraud: "suspected misuse",
-  duplicate: "issued twice for one stone",
+  duplicate: "a second report on the same stone",
   courtOrder: "an order of a court or authority",
   other: "another reason held by the laboratory",
 };

@@ -6,7 +6,6 @@ export function pdfResponse({ pdf, fileName }: { pdf: Buffer; fileName: string }
       "Content-Length": String(pdf.byteLength),
       "Content-Disposition": `inline; filename="${fileName.replace(/[^\w.-]/g, "_")}"`,
       "Cache-Control": "private, no-store",
-      "X-Content-Type-Options": "nosniff",
       ...(isFramed ? { "X-Frame-Options": "SAMEORIGIN", "Content-Security-Policy": "default-src 'none'; object-src 'self'; style-src 'unsafe-inline'; frame-ancestors 'self'" } : {}),
     },
   });

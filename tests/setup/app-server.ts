@@ -42,7 +42,7 @@ async function startAll({ isDemo, env, started, close }: Starting) {
   };
   const port = await freePort();
   const url = `http://127.0.0.1:${port}`;
-  const db = keep(await startThrowAwayDb());
+  const db = keep(await startThrowAwayDb({ hasQueryLog: true }));
   const databaseUrl = db.urlOf("isogyre");
   await runMigrations(databaseUrl);
   const stripe = keep(await startFakeStripe({ webhookUrl: `${url}/webhooks/stripe` }));
@@ -87,6 +87,7 @@ async function startAll({ isDemo, env, started, close }: Starting) {
   return {
     url,
     databaseUrl,
+    queryLog: db.queryLog,
     stripe,
     uploads,
     mailbox,
@@ -99,9 +100,11 @@ async function startAll({ isDemo, env, started, close }: Starting) {
 
 function run(args: string[], env: NodeJS.ProcessEnv): Promise<void> {
   return new Promise((resolve, reject) => {
-    const child = spawn(process.execPath, args, { stdio: ["ignore", "ignore", "inherit"], env });
+    const child = spawn(process.execPath, args, { stdio: ["ignore", "ignore", "pipe"], env });
+    let said = "";
+    child.stderr.setEncoding("utf8").on("data", (text: string) => (said += text));
     child.once("error", reject);
-    child.once("exit", (code, signal) => (code === 0 ? resolve() : reject(new Error(`${args.join(" ")} ended with ${code ?? signal}`))));
+    child.once("close", (code, signal) => (code === 0 ? resolve() : reject(new Error(`${args.join(" ")} ended with ${code ?? signal}:\n${said.slice(-4_000)}`))));
   });
 }
 

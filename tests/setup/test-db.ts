@@ -4,6 +4,7 @@ import { openDb, type Db, type OpenDb } from "#app/db/client.server.ts";
 import { runMigrations } from "../../scripts/migrate.mjs";
 
 let opening: Promise<OpenDb> | undefined;
+let address: Promise<string> | undefined;
 
 /** The database of this worker, migrated. Tests share it: each makes a laboratory of its own and never counts rows globally. */
 export async function getTestDb(): Promise<Db> {
@@ -12,8 +13,14 @@ export async function getTestDb(): Promise<Db> {
 
 /** As `getTestDb`, with the pool, for what needs a connection of its own. */
 export function openTestDb(): Promise<OpenDb> {
-  opening ??= createTestDb().then(openDb);
+  opening ??= testDbUrl().then(openDb);
   return opening;
+}
+
+/** Where it is, for what stands for another process. */
+export function testDbUrl(): Promise<string> {
+  address ??= createTestDb();
+  return address;
 }
 
 async function createTestDb(): Promise<string> {

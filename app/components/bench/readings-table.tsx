@@ -17,7 +17,7 @@ type ReadingsTableProps = {
 export function ReadingsTable({ readings, strikeHref, canStrike }: ReadingsTableProps) {
   if (readings.length === 0) return <EmptyState title="No readings yet">Begin with what harms least: look, weigh, measure, then the polariscope and the refractometer.</EmptyState>;
   return (
-    <Table caption="Readings">
+    <Table caption="Readings, latest first">
       <thead>
         <tr>
           <HeaderCell>When</HeaderCell>
@@ -41,6 +41,7 @@ export function ReadingsTable({ readings, strikeHref, canStrike }: ReadingsTable
 function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: string | null }) {
   const { strike, quality, values } = reading;
   const isStruck = strike !== null;
+  const valueText = readingValueText(reading);
   const gap = values.find(({ name }) => name === "birefringence");
   const small = `block text-xs text-ink-3 ${isStruck ? "line-through decoration-red" : ""}`;
   return (
@@ -55,8 +56,8 @@ function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: st
         {observationKindNames[reading.detail.kind]}
         <span className={small}>{[readingConditions(reading), reading.instrument?.name].filter(Boolean).join(" · ")}</span>
       </Cell>
-      <Cell isStruck={isStruck} className="font-mono">
-        {quality === "noResult" ? <span className="font-sans">no reading: {reading.noResultReason}</span> : readingValueText(reading)}
+      <Cell isStruck={isStruck} className={quality !== "noResult" && /^\D?\d/.test(valueText) ? "font-mono whitespace-nowrap" : ""}>
+        {quality === "noResult" ? `no reading: ${reading.noResultReason}` : valueText}
       </Cell>
       <Cell>
         {strike ? (

@@ -1,4 +1,5 @@
 import { Link, useNavigate } from "react-router";
+import { useEscapeLeavesField } from "#app/components/layout/use-escape-leaves-field.ts";
 import { useShortcut } from "#app/components/layout/use-shortcut.ts";
 import { Key } from "#app/components/ui/key.tsx";
 import { observationKindNames, observationKinds, type ObservationKind } from "#app/domain/reading.ts";
@@ -7,6 +8,7 @@ type TestChoiceProps = { current: ObservationKind; hrefOf: (kind: ObservationKin
 
 /** Which test was made: a link each, and a number key each. */
 export function TestChoice({ current, hrefOf }: TestChoiceProps) {
+  useEscapeLeavesField();
   return (
     <nav aria-label="Test" className="no-print border-b border-rule px-4.5 pb-3.5">
       <ul className="flex flex-wrap gap-1.5">

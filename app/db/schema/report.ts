@@ -47,6 +47,7 @@ export const reports = mysqlTable(
     index("reports_created").on(t.laboratoryId, t.createdAt, t.id),
     index("reports_state").on(t.laboratoryId, t.state, t.createdAt, t.id),
     index("reports_client").on(t.laboratoryId, t.clientId, t.createdAt, t.id),
+    index("reports_supersedes").on(t.laboratoryId, t.supersedesId),
     index("reports_pdf_queue").on(t.pdfState, t.pdfLeaseUntil),
     foreignKey({ name: "reports_stone_fk", columns: [t.laboratoryId, t.stoneId], foreignColumns: [stones.laboratoryId, stones.id] }),
     foreignKey({ name: "reports_client_fk", columns: [t.laboratoryId, t.clientId], foreignColumns: [clients.laboratoryId, clients.id] }),

@@ -1,4 +1,5 @@
 import { and, asc, eq, isNull, lte, or } from "drizzle-orm";
+import { inTransaction } from "#app/db/in-transaction.server.ts";
 import type { Db } from "#app/db/client.server.ts";
 import { outgoingMail } from "#app/db/schema/index.ts";
 import type { Services } from "#app/features/services.ts";
@@ -21,10 +22,13 @@ export async function deliverDueMail(app: { db: Db; services: Pick<Services, "ma
     .limit(limit);
   let sent = 0;
   for (const mail of due) {
-    const [claim] = await app.db
-      .update(outgoingMail)
-      .set({ leaseUntil: new Date(app.now.getTime() + leaseMs), attempts: mail.attempts + 1 })
-      .where(and(eq(outgoingMail.id, mail.id), eq(outgoingMail.state, "queued"), eq(outgoingMail.attempts, mail.attempts), isFree));
+    // In a transaction for its retries: claims of several processes may deadlock on the queue's index.
+    const [claim] = await inTransaction(app.db, (tx) =>
+      tx
+        .update(outgoingMail)
+        .set({ leaseUntil: new Date(app.now.getTime() + leaseMs), attempts: mail.attempts + 1 })
+        .where(and(eq(outgoingMail.id, mail.id), eq(outgoingMail.state, "queued"), eq(outgoingMail.attempts, mail.attempts), isFree)),
+    );
     if (claim.affectedRows !== 1) continue;
     try {
       await app.services.mailer.send({

@@ -28,10 +28,13 @@ export async function renderQueuedReports(app: { db: Db; services: Services; now
     .limit(limit);
   let rendered = 0;
   for (const job of queue) {
-    const [claim] = await app.db
-      .update(reports)
-      .set({ pdfLeaseUntil: new Date(app.now.getTime() + leaseMs), pdfAttempts: job.attempts + 1 })
-      .where(and(eq(reports.laboratoryId, job.laboratoryId), eq(reports.id, job.id), eq(reports.pdfState, "queued"), eq(reports.pdfAttempts, job.attempts), isFree));
+    // In a transaction for its retries: claims of several processes may deadlock on the queue's index.
+    const [claim] = await inTransaction(app.db, (tx) =>
+      tx
+        .update(reports)
+        .set({ pdfLeaseUntil: new Date(app.now.getTime() + leaseMs), pdfAttempts: job.attempts + 1 })
+        .where(and(eq(reports.laboratoryId, job.laboratoryId), eq(reports.id, job.id), eq(reports.pdfState, "queued"), eq(reports.pdfAttempts, job.attempts), isFree)),
+    );
     if (claim.affectedRows === 1 && (await renderOne(app, job))) rendered++;
   }
   return rendered;

@@ -5,12 +5,13 @@ import { consentCodes } from "#app/domain/consent-code.ts";
 import type { ClientId, InstrumentId } from "#app/domain/ids.ts";
 import { parseAmount } from "#app/domain/money/parse-amount.ts";
 import type { CurrencyCode } from "#app/domain/money/money.ts";
+import { parseDecimal } from "#app/domain/decimal.ts";
 import { idFromShortRef } from "#app/domain/short-ref.ts";
 import { capacities, mountStates, returnMethods } from "#app/domain/take-in.ts";
 import { typedDecimal } from "#app/domain/typed-decimal.ts";
 import { addressLinesField, emailField } from "#app/features/clients/client-forms.server.ts";
 import { isTicked, optionalLines, optionalText, requestIdField, requiredText } from "#app/features/form-fields.server.ts";
-import { largestDeclared, massProblem, mostItems, stoneCountProblem } from "./take-in-limits.ts";
+import { largestDeclared, massProblem, notAMass, mostItems, stoneCountProblem } from "./take-in-limits.ts";
 import { neutralWordsMessage } from "./neutral-words.ts";
 
 function neutral(text: string, issues: z.core.$RefinementCtx<string>): string {
@@ -37,7 +38,8 @@ const item = (currency: CurrencyCode) =>
           }
           return count;
         }),
-      massText,
+      // Said here too, because what spans several fields is judged only when each of them is in order.
+      massText: massText.refine((text) => parseDecimal(text) !== undefined, notAMass),
       massUnit,
       balanceId: z.string({ error: "Choose the balance." }).transform((ref, issues) => {
         const id = idFromShortRef<"instrument">(ref);

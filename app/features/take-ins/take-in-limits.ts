@@ -17,10 +17,12 @@ export function stoneCountProblem({ stoneCount, mount }: { stoneCount: number; m
   return undefined;
 }
 
+export const notAMass = "Write the weight as the balance shows it, for example 4.182.";
+
 /** What is wrong with a weight as typed, as a sentence; undefined where nothing is. */
 export function massProblem({ massText, massUnit }: { massText: string; massUnit: "ct" | "g" }): string | undefined {
   const value = parseDecimal(massText);
-  if (value === undefined) return "Write the weight as the balance shows it, for example 4.182.";
+  if (value === undefined) return notAMass;
   if (value <= 0) return "The weight is more than zero.";
   if (decimalPlaces(massText) > 4) return "At most four decimals.";
   if (value > largestMass[massUnit]) return `At most ${largestMass[massUnit]} ${massUnit}: is the unit right?`;

@@ -39,7 +39,7 @@ export async function action({ context, params }: Route.ActionArgs) {
 export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: `Invoice ${loaderData?.invoice.number ?? ""} · Isogyre` }, { name: "robots", content: "noindex" }];
 
 export function headers() {
-  return { "Cache-Control": "private, no-store", "Referrer-Policy": "same-origin" };
+  return { "Cache-Control": "private, no-store" };
 }
 
 export default function PayRoute({ loaderData, actionData }: Route.ComponentProps) {

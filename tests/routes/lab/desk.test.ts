@@ -84,7 +84,7 @@ test("photographs posted without script are kept, a wrong one is named, and they
   expect(answerOf(await send(new File([], "a.jpg")))).toMatchObject({ status: 400, problems: ["Choose a photograph first."] });
   const [photoRef] = (await getTakeIn(ctx, takeInNumber)).items[0]!.photos;
   const response = (await photoLoader(routeArgs(ctx, { path: `/photos/${photoRef}`, params: { photoRef: photoRef! } }))) as Response;
-  expect(Object.fromEntries(response.headers)).toMatchObject({ "content-type": "image/jpeg", "x-content-type-options": "nosniff", "content-disposition": "inline", "content-security-policy": "default-src 'none'; sandbox", "cache-control": "private, max-age=31536000, immutable" });
+  expect(Object.fromEntries(response.headers)).toMatchObject({ "content-type": "image/jpeg", "content-disposition": "inline", "content-security-policy": "default-src 'none'; frame-ancestors 'none'; sandbox", "cache-control": "private, max-age=31536000, immutable" });
   await expect(photoLoader(routeArgs(await aLab(), { path: `/photos/${photoRef}`, params: { photoRef: photoRef! } }))).rejects.toMatchObject({ init: { status: 404 } });
   await expect(photoLoader(routeArgs(ctx, { path: "/photos/x", params: { photoRef: "../../etc/passwd" } }))).rejects.toMatchObject({ init: { status: 404 } });
 });

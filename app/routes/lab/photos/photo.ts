@@ -16,8 +16,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
       "Content-Length": String(bytes.length),
       "Content-Disposition": "inline",
       "Cache-Control": "private, max-age=31536000, immutable",
-      "Content-Security-Policy": "default-src 'none'; sandbox",
-      "X-Content-Type-Options": "nosniff",
+      "Content-Security-Policy": "default-src 'none'; frame-ancestors 'none'; sandbox",
       "Cross-Origin-Resource-Policy": "same-origin",
     },
   });

@@ -87,9 +87,7 @@ export default function ReportRoute({ loaderData, actionData, params }: Route.Co
           <CardBody>
             {report.pdfState === "ready" ? (
               <>
-                <object data={`${base}/${report.number}/file.pdf`} type="application/pdf" className="h-[60vh] w-full rounded-md border border-rule" aria-label={`PDF of report ${report.number}`}>
-                  <p className="p-4">This browser does not show PDFs in a page.</p>
-                </object>
+                <iframe src={`${base}/${report.number}/file.pdf`} className="h-[60vh] w-full rounded-md border border-rule" title={`PDF of report ${report.number}`} />
                 <p className="mt-3">
                   <a href={`${base}/${report.number}/file.pdf`} className="text-tint">
                     Open the PDF

@@ -5,5 +5,5 @@ import { pdfResponse } from "#app/web/pdf-response.server.ts";
 import type { Route } from "./+types/pdf";
 
 export async function loader({ context, params }: Route.LoaderArgs) {
-  return pdfResponse(await orResponse(readReportPdf(context.get(labContext), { number: params.number })));
+  return pdfResponse(await orResponse(readReportPdf(context.get(labContext), { number: params.number })), { isFramed: true });
 }

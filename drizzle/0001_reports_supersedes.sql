@@ -1,0 +1,1 @@
+CREATE INDEX `reports_supersedes` ON `reports` (`laboratory_id`,`supersedes_id`);
