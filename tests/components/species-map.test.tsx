@@ -94,10 +94,11 @@ test("by arrows alone every species can be reached from any", () => {
 
 test("names lie neither on one another nor outside the frame, and the first ones are served first", () => {
   const frame = { left: 0, right: 300, top: 0, bottom: 200 };
-  const placed = placeNames(Array.from({ length: 40 }, (_, at) => ({ id: `s${at}`, name: `Species ${at}`, left: 100 + at, right: 104 + at, top: 90, bottom: 95 })), frame, 26);
+  const placed = placeNames(Array.from({ length: 40 }, (_, at) => ({ id: `s${at}`, name: `Species ${at}`, left: 100 + at, right: 104 + at, top: 90, bottom: 95 })), frame, { most: 26, kept: [{ left: 150, right: 180, top: 60, bottom: 80 }] });
   expect(placed[0]!.id).toBe("s0");
   expect(placed.length).toBeLessThan(26);
   const areas = placed.map(({ name, x, y, anchor }) => ({ left: anchor === "start" ? x : x - name.length * 6.4, right: anchor === "start" ? x + name.length * 6.4 : x, y }));
+  expect(areas.filter(({ left, right, y }) => left < 180 && right > 150 && y - 11 < 80 && y + 3 > 60)).toEqual([]);
   for (const [at, one] of areas.entries()) {
     expect(one.left >= 0 && one.right <= 300).toBe(true);
     for (const other of areas.slice(at + 1)) expect(Math.abs(one.y - other.y) >= 14 || one.right <= other.left || other.right <= one.left).toBe(true);

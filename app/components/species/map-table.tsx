@@ -8,12 +8,16 @@ import { offsetWords } from "./offset-words.ts";
 
 const standingWords: Readonly<Record<Standing, string>> = { chosen: "chosen", candidate: "candidate", near: "", open: "", contradicted: "ruled out by the readings" };
 
+const standingRank: Readonly<Record<Standing, number>> = { chosen: 0, candidate: 0, near: 1, open: 1, contradicted: 2 };
+
 type MapTableProps = { boxes: readonly SpeciesBox[]; unplaced: ReadonlyArray<{ id: string; name: string }>; standingOf: (id: string) => Standing; reading: MapReading; base: string };
 
 /** What the map shows, in words: from the reading outwards, or by index where there is none. */
 export function MapTable({ boxes, unplaced, standingOf, reading, base }: MapTableProps) {
   const hasReading = reading.index !== null || reading.sg !== null;
-  const lines = boxes.map((box) => ({ ...box, ...offsetWords(box, reading) })).sort((a, b) => (hasReading ? a.distanceU - b.distanceU : a.index[0] - b.index[0]) || a.name.localeCompare(b.name, "en"));
+  // Of what holds the reading alike, what the other readings favour and what is common comes first.
+  const rank = (id: string) => standingRank[standingOf(id)];
+  const lines = boxes.map((box) => ({ ...box, ...offsetWords(box, reading) })).sort((a, b) => (hasReading ? a.distanceU - b.distanceU || rank(a.id) - rank(b.id) || b.weight - a.weight : a.index[0] - b.index[0]) || a.name.localeCompare(b.name, "en"));
   const near = lines.filter(({ isNear }) => isNear).length;
   return (
     <Card id="table" title="The same as a table" note={hasReading ? `from the reading outwards; ${near} within 2u` : "by index"}>

@@ -27,7 +27,8 @@ export function compareSpecies(columns: readonly ComparedSpecies[]): ComparedRow
     ranges("birefringence", "Birefringence", 3, ({ forms }) => speciesSpan(forms).birefringence),
     wordRow({ property: "optics", label: "Character and sign" }, columns.map(({ forms }) => [opticWords(forms)])),
     ranges("sg", "Density", 2, ({ forms }) => speciesSpan(forms).sg),
-    ranges("dispersion", "Dispersion, B–G", 3, ({ rows }) => around(rows.flatMap(({ dispersion_BG: dispersion }) => dispersion ?? []))),
+    // One conventional value a form, not a range: it differs, and proves nothing.
+    phrases("dispersion", "Dispersion, B–G", (rows) => [...new Set(rows.flatMap(({ dispersion_BG: dispersion }) => (dispersion === null ? [] : dispersion.toFixed(3))))]),
     ranges("hardness", "Hardness, Mohs (never tested)", 1, ({ rows }) => around(rows.flatMap(({ hardness }) => (hardness ? [hardness.min, hardness.max] : [])))),
     phrases("colours", "Colours", words.colourWords),
     phrases("transparency", "Transparency", words.transparencyWords),

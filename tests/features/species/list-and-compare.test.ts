@@ -95,6 +95,10 @@ test("a column without a value leaves the property open and is never called apar
   expect(likenessOf([column("pyrite"), column("peridot")])).toMatchObject({ lowIndex: "open" });
 });
 
+test("a conventional value without a range is never called apart", () => {
+  expect(likenessOf([column("corundum", "ruby"), column("taaffeite")]).dispersion).toBe("differs");
+});
+
 test("the order of columns changes no verdict", () => {
   const [one, two, three] = [column("spinel"), column("taaffeite"), column("garnet-pyrope")];
   expect(likenessOf([one, two, three])).toEqual(likenessOf([three, one, two]));

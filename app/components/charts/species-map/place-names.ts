@@ -10,9 +10,10 @@ const lineHeight = 14;
  *
  * @param boxes in the order of their claim to a name, in the picture's own units
  * @param most names in all
+ * @param kept free of names: where the reading stands
  */
-export function placeNames(boxes: readonly Box[], frame: Frame, most: number): Placed[] {
-  const taken: Frame[] = [];
+export function placeNames(boxes: readonly Box[], frame: Frame, { most, kept = [] }: { most: number; kept?: readonly Frame[] }): Placed[] {
+  const taken: Frame[] = [...kept];
   const placed: Placed[] = [];
   for (const { id, name, left, right, top, bottom } of boxes) {
     if (placed.length >= most) break;

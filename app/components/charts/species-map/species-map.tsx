@@ -65,10 +65,15 @@ export function SpeciesMap({ boxes, standingOf, reading, view, onView, activeId,
     [boxes, standingOf, view, x, y],
   );
   const active = drawn.find(({ id }) => id === activeId);
+  const { index, sg } = reading;
+  const ellipse = useMemo(
+    () => (index && sg ? { cx: x(index.value), cy: y(sg.value), rx: Math.max(5, x(index.value + 2 * index.u) - x(index.value)), ry: Math.max(5, y(sg.value - 2 * sg.u) - y(sg.value)) } : null),
+    [index, sg, x, y],
+  );
   const names = useMemo(() => {
     const claim = drawn.toSorted((a, b) => Number(b.id === activeId) - Number(a.id === activeId) || rank[b.standing] - rank[a.standing] || b.weight - a.weight || (a.id < b.id ? -1 : 1));
-    return placeNames(claim, plot, mostNames);
-  }, [drawn, activeId]);
+    return placeNames(claim, plot, { most: mostNames, kept: ellipse ? [{ left: ellipse.cx - ellipse.rx, right: ellipse.cx + ellipse.rx, top: ellipse.cy - ellipse.ry, bottom: ellipse.cy + ellipse.ry }] : [] });
+  }, [drawn, activeId, ellipse]);
 
   const pointOf = ({ clientX, clientY }: { clientX: number; clientY: number }) => {
     const box = svg.current!.getBoundingClientRect();
@@ -155,7 +160,6 @@ export function SpeciesMap({ boxes, standingOf, reading, view, onView, activeId,
     onView(viewShowing(view, middleOf(box)));
   };
 
-  const { index, sg } = reading;
   return (
     <svg
       ref={svg}
@@ -198,9 +202,7 @@ export function SpeciesMap({ boxes, standingOf, reading, view, onView, activeId,
             <rect key={id} data-species={id} x={left} y={top} width={right - left} height={bottom - top} rx="1.5" strokeWidth={isStrong(standing) ? 1.4 : 0.7} fillOpacity={fillShare((right - left) * (bottom - top)) * (standing === "contradicted" ? 0.4 : 1)} className={looks[standing]} />
           ))}
           {active ? <rect x={active.left - 2} y={active.top - 2} width={active.right - active.left + 4} height={active.bottom - active.top + 4} rx="3" strokeWidth="2" className="fill-none stroke-ink" /> : null}
-          {index && sg ? (
-            <ellipse data-reading="" cx={x(index.value)} cy={y(sg.value)} rx={Math.max(5, x(index.value + 2 * index.u) - x(index.value))} ry={Math.max(5, y(sg.value - 2 * sg.u) - y(sg.value))} strokeWidth="2.5" className="fill-none stroke-tint" />
-          ) : null}
+          {ellipse ? <ellipse data-reading="" {...ellipse} strokeWidth="2.5" className="fill-none stroke-tint" /> : null}
         </g>
         {names.map(({ id, name, x: nameX, y: nameY, anchor }) => (
           <text key={id} x={nameX} y={nameY} textAnchor={anchor} strokeWidth="4" className={`stroke-sheet font-serif text-[12.5px] [paint-order:stroke] ${id === activeId ? "fill-ink font-semibold" : standingOf(id) === "contradicted" ? "fill-ink-3" : "fill-ink"}`}>
