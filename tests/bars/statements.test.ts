@@ -26,6 +26,8 @@ test("no page counts rows or skips them (P10)", () => {
 const across: ReadonlyArray<{ by: RegExp; why: string }> = [
   { by: /from `?outgoing_mail`?|update `?outgoing_mail`?/, why: "one queue of letters, delivered for all" },
   { by: /^select `client_id` from `client_users` where `client_users`.`user_id` = \?/, why: "whether somebody is a client anywhere" },
+  { by: /`email_tokens`.`token_hash` = \?|^delete from `email_tokens` where `email_tokens`.`expires_at` < \?/, why: "links in letters, by what only their reader has; those run out are cleared for all" },
+  { by: /`provider_events`.`event_id` = \?/, why: "the payment service's events, by its own ids, before it is known whose they are" },
   { by: /`register_entries`.`code` = \?/, why: "the public register, by its code" },
 ];
 

@@ -38,6 +38,7 @@ test("by keyboard alone: sign in, find the stone, record readings of three kinds
   await page.keyboard.type(demonstration.password);
   await page.keyboard.press("Enter");
   await page.waitForURL("**/lab/marram-quay/stones");
+  await page.waitForLoadState("networkidle"); // keys alone are the script's, and act once it is there
 
   await page.keyboard.press("/");
   await page.keyboard.type("yellow oval");
