@@ -6,6 +6,7 @@ export default [
   route("room", "routes/room.ts"),
 
   route("species-table/:fileName", "routes/species-table.ts"),
+  route("species-names/:fileName", "routes/species-names.ts"),
 
   // accounts
   layout("routes/account/layout.tsx", [
@@ -66,6 +67,13 @@ export default [
       route("instruments", "routes/lab/instruments/list.tsx"),
       route("instruments/new", "routes/lab/instruments/new.tsx"),
       route("instruments/:instrumentRef", "routes/lab/instruments/detail.tsx"),
+
+      // species
+      route("species", "routes/lab/species/list.tsx"),
+      route("species.csv", "routes/lab/species/list-csv.ts"),
+      route("species/compare", "routes/lab/species/compare.tsx"),
+      route("species/map", "routes/lab/species/map.tsx"),
+      route("species/:speciesId", "routes/lab/species/detail.tsx"),
 
       // bench
       route("stones/:stoneCode", "routes/lab/stones/bench.tsx"),

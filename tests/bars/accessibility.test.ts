@@ -18,7 +18,7 @@ const pages: ReadonlyArray<{ as: PersonKey | null; widthsPx: readonly number[]; 
   { as: null, widthsPx: [1280, 360], paths: ["/", "/sign-in", "/sign-up", "/forgot-password", "/check", "/v", "/v/0000000000000000", "/no-such-page"] },
   { as: "client", widthsPx: [360], paths: ["/my", "/account"] },
   { as: "owner", widthsPx: [1280, 768], paths: [`${lab}/stones`, `${lab}/stones?q=nothing-like-it`, `${lab}/clients`, `${lab}/instruments`, `${lab}/instruments/new`, `${lab}/invoices`, `${lab}/invoices/MQ-I-26-00008`, `${lab}/reports`, `${lab}/reports/MQ-R-26-00005`, `${lab}/take-ins/new`, `${lab}/take-ins/MQ-T-26-0008`, `${lab}/take-ins/MQ-T-26-0008/receipt`, `${lab}/take-ins/MQ-T-26-0008/labels`, `${lab}/settings`, `${lab}/settings/team`, `${lab}/settings/prices`] },
-  { as: "gemmologist", widthsPx: [1280, 1024], paths: [`${lab}/stones/MQ-26-0015-1`, `${lab}/stones/MQ-26-0015-1?test=density`, `${lab}/stones/MQ-26-0015-1/readings/1/strike`, `${lab}/stones/MQ-26-0012-1/conclusion`, `${lab}/stones/MQ-26-0016-1/conclusion`, `${lab}/stones/MQ-26-0008-1/second-check`, `${lab}/stones/MQ-26-0009-1/report`] },
+  { as: "gemmologist", widthsPx: [1280, 1024], paths: [`${lab}/stones/MQ-26-0015-1`, `${lab}/stones/MQ-26-0015-1?test=density`, `${lab}/stones/MQ-26-0015-1/readings/1/strike`, `${lab}/stones/MQ-26-0012-1/conclusion`, `${lab}/stones/MQ-26-0016-1/conclusion`, `${lab}/stones/MQ-26-0008-1/second-check`, `${lab}/stones/MQ-26-0009-1/report`, `${lab}/species`, `${lab}/species/corundum`, `${lab}/species/compare?species=corundum,spinel`, `${lab}/species/map?stone=MQ-26-0015-1`] },
   { as: "appraiser", widthsPx: [1280], paths: [`${lab}/stones/MQ-26-0008-1/valuation`] },
 ];
 

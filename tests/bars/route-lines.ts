@@ -12,6 +12,8 @@ export type RouteLine = {
   post?: Access;
   /** What a person who may gets, when it isn't 200 (a redirect, a form's 4xx when there is nothing in it). */
   getStatus?: number;
+  /** The parameters name no row of a laboratory but what all of them share: there for every laboratory's people at their own address. */
+  isShared?: true;
   /** A secret in the address lets people in, or a signature does. */
   bySecret?: true;
 };
@@ -39,6 +41,7 @@ export async function routeLines(): Promise<RouteLine[]> {
     { path: "healthz", get: "anyone" },
     { path: "room", post: "anyone" },
     { path: "species-table/:fileName", params: { fileName: "none.json" }, get: "anyone", getStatus: 404 },
+    { path: "species-names/:fileName", params: { fileName: "none.json" }, get: "anyone", getStatus: 404 },
     { path: "sign-in", get: "anyone", post: "anyone" },
     { path: "sign-up", get: "anyone", post: "anyone" },
     { path: "sign-up/sent", get: "anyone" },
@@ -78,6 +81,11 @@ export async function routeLines(): Promise<RouteLine[]> {
     lab("instruments", { get: all }),
     lab("instruments/new", { get: ["owner", "gemmologist"], post: ["owner", "gemmologist"] }),
     lab("instruments/:instrumentRef", { params: { instrumentRef: await asRef("instruments") }, get: all, post: ["owner", "gemmologist"] }),
+    lab("species", { get: all }),
+    lab("species.csv", { get: all }),
+    lab("species/compare", { get: all }),
+    lab("species/map", { get: all }),
+    lab("species/:speciesId", { params: { speciesId: "corundum" }, get: all, isShared: true }),
     lab("stones/:stoneCode", { params: examined, get: all, post: ["gemmologist"] }),
     lab("stones/:stoneCode/readings/:sequence/strike", { params: { ...examined, sequence: "1" }, get: examine, post: ["gemmologist"] }),
     lab("stones/:stoneCode/conclusion", { params: examined, get: examine, post: ["gemmologist"] }),

@@ -54,6 +54,7 @@ import { retryPdf } from "#app/features/reports/retry-pdf.server.ts";
 import { withdrawReport } from "#app/features/reports/withdraw-report.server.ts";
 import { getConclusion } from "#app/features/identification/get-conclusion.server.ts";
 import { proposeConclusion } from "#app/features/identification/propose-conclusion.server.ts";
+import { getStonePlace } from "#app/features/identification/get-stone-place.server.ts";
 import { rankStone } from "#app/features/identification/rank-stone.server.ts";
 import { listReadings } from "#app/features/readings/list-readings.server.ts";
 import { recordReading } from "#app/features/readings/record-reading.server.ts";
@@ -204,6 +205,7 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
   // bench
   entry({ name: "getBench", operation: "stones.read", rows: aStoneCode, call: (ctx, stoneCode) => getBench(ctx, { stoneCode }) }),
   entry({ name: "listReadings", operation: "readings.read", rows: aStoneCode, call: (ctx, stoneCode) => listReadings(ctx, { stoneCode }), isEmptyElsewhere: "list" }),
+  entry({ name: "getStonePlace", operation: "readings.read", rows: (lab) => aBench(lab), call: (ctx, bench) => getStonePlace(ctx, bench) }),
   entry({ name: "rankStone", operation: "readings.read", rows: nothing, call: (ctx) => rankStone(ctx, { readings: [] }), hasNoIds: true }),
   entry({ name: "recordReading", operation: "readings.record", rows: (lab) => aBench(lab), call: (ctx, bench) => recordReading(ctx, aReading(bench, corundum.free)) }),
   entry({

@@ -24,7 +24,7 @@ const rowSchema = z.looseObject({
   sources: z.array(z.string()).min(1),
 });
 
-export type LoadedSpecies = Readonly<{ table: SpeciesTable; rows: readonly SpeciesRow[]; sha256: Buffer }>;
+export type LoadedSpecies = Readonly<{ table: SpeciesTable; rows: readonly SpeciesRow[]; lookalikes: readonly LookalikeRow[]; sha256: Buffer }>;
 let loaded: LoadedSpecies | undefined;
 
 /** The species table of this program, checked once a process by schema and by physics. @throws Error that lists what is wrong */
@@ -38,6 +38,6 @@ export function loadSpeciesTable(): LoadedSpecies {
   // The version is the content's own: two tables with the same one are the same.
   const sha256 = createHash("sha256").update(JSON.stringify([rows, nodes, lookalikes])).digest();
   const table = buildSpeciesTable({ version: sha256.toString("hex").slice(0, 12), rows: typed, nodes: nodes as NodeRow[], lookalikes: lookalikes as LookalikeRow[] });
-  loaded = { table, rows: typed, sha256 };
+  loaded = { table, rows: typed, lookalikes: lookalikes as LookalikeRow[], sha256 };
   return loaded;
 }

@@ -24,6 +24,7 @@ export function checkSpeciesRows(rows: readonly SpeciesRow[]): string[] {
     if (row.birefringence && !isOrdered(row.birefringence, { low: 0, high: 0.5 })) fault("birefringence is out of order or of bounds");
     checkOptics(row, fault);
   }
+  for (const row of rows) for (const { id } of row.separated_from) if (!ids.has(id)) faults.push(`${row.id}: is separated from ${id}, which is not there`);
   return faults;
 }
 

@@ -17,6 +17,7 @@ const places: ReadonlyArray<{ label: string; path: string; operation: Operation 
   { label: "Invoices", path: "invoices", operation: "invoices.read" },
   { label: "Clients", path: "clients", operation: "clients.read" },
   { label: "Instruments", path: "instruments", operation: "instruments.read" },
+  { label: "Species", path: "species", operation: "laboratory.read" },
   { label: "Laboratory", path: "settings", operation: "laboratory.manage" },
 ];
 

@@ -110,7 +110,14 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
       {loaderData.isOffered ? (
         <CheckOffer base={base} />
       ) : loaderData.readings && loaderData.ranking ? (
-        <Examination {...loaderData} readings={loaderData.readings} ranking={loaderData.ranking} base={base} lastResult={actionData?.result} />
+        <Examination
+          {...loaderData}
+          readings={loaderData.readings}
+          ranking={loaderData.ranking}
+          base={base}
+          mapHref={`/lab/${params.labSlug}/species/map?stone=${stone.code}${mayCheck ? "&show=examination" : ""}`}
+          lastResult={actionData?.result}
+        />
       ) : (
         <Card title="Readings and conclusions" className="max-w-3xl">
           <CardBody>
@@ -126,9 +133,9 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
 }
 
 type LoaderData = Route.ComponentProps["loaderData"];
-type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; lastResult: SubmissionResult<string[]> | undefined };
+type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
-function Examination({ readings, ranking, instruments, test, requestId, areCandidatesHidden, can, condition, stone, base, lastResult }: ExaminationProps) {
+function Examination({ readings, ranking, instruments, test, requestId, areCandidatesHidden, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
   const [typed, setTyped] = useState<ComposedReading | null>(null);
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const struckCount = readings.filter(({ strike }) => strike).length;
@@ -176,13 +183,16 @@ function Examination({ readings, ranking, instruments, test, requestId, areCandi
         ) : (
           <>
             <LiveCandidates saved={ranking} readings={examined} typed={can.record ? typed : null} />
-            {can.record ? (
-              <p className="no-print px-1 text-sm">
+            <p className="no-print flex flex-wrap gap-x-5 gap-y-1 px-1 text-sm">
+              <Link to={mapHref} className="text-link">
+                On the index and density map
+              </Link>
+              {can.record ? (
                 <Link to={`?test=${test}&candidates=hidden`} preventScrollReset className="text-link">
                   Hide the candidates while reading
                 </Link>
-              </p>
-            ) : null}
+              ) : null}
+            </p>
           </>
         )}
       </div>
