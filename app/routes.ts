@@ -38,6 +38,7 @@ export default [
 
   // the same functions over HTTP
   route("api/v1/rank", "routes/api/rank.ts"),
+  route("api/v1/rotation-fit", "routes/api/rotation-fit.ts"),
   route("api/v1/density", "routes/api/density.ts"),
 
   // a client's own pages

@@ -114,7 +114,7 @@ describe("outside a laboratory", () => {
 });
 
 test("another site's page can send nothing", async () => {
-  const unguarded = new Set(["webhooks/stripe", "api/uploadthing", "api/v1/rank", "api/v1/density"]);
+  const unguarded = new Set(["webhooks/stripe", "api/uploadthing", "api/v1/rank", "api/v1/rotation-fit", "api/v1/density"]);
   for (const line of lines.filter(({ post, path }) => post && !unguarded.has(path)))
     for (const headers of [{ origin: "https://elsewhere.example" }, { "sec-fetch-site": "cross-site", origin: url }, { "sec-fetch-site": "same-site" }, { origin: "null" }] as Array<Record<string, string>>) {
       const answer = await fetch(url + addressOf(line), { method: "POST", redirect: "manual", headers: { cookie: cookies.owner, "content-type": "application/x-www-form-urlencoded", ...headers }, body: "" });

@@ -61,6 +61,7 @@ export async function routeLines(): Promise<RouteLine[]> {
     { path: "webhooks/stripe", post: "anyone", bySecret: true },
     { path: "api/uploadthing", get: "anyone", post: "anyone", bySecret: true },
     { path: "api/v1/rank", post: "anyone", bySecret: true },
+    { path: "api/v1/rotation-fit", post: "anyone", bySecret: true },
     { path: "api/v1/density", post: "anyone", bySecret: true },
     { path: "my", get: "signedIn" },
     { path: "my/reports/:code/:fileName", params: { ...code, fileName: "report.pdf" }, get: "signedIn", getStatus: 404 },

@@ -1,0 +1,124 @@
+import { expect, test } from "vitest";
+import worked from "#fixtures/worked/rotation-examples.json" with { type: "json" };
+import { fitRotation } from "#app/gemmology/rotation/fit-rotation.ts";
+import type { RotationFit, RotationSolution } from "#app/gemmology/rotation/rotation-fit.ts";
+import type { RotationReading } from "#app/gemmology/rotation/rotation-run.ts";
+import type { PrincipalIndices } from "#app/gemmology/rotation/edge-indices.ts";
+import { sized } from "../../setup/torture.ts";
+import { aFacet, onFacet, randomFrom } from "./a-rotation-run.ts";
+
+const sorted = ({ indices }: RotationSolution) =>
+  ("omega" in indices ? [indices.omega, indices.omega, indices.epsilon] : "n" in indices ? [indices.n, indices.n, indices.n] : "beta" in indices ? [indices.alpha, indices.beta, indices.gamma] : []).sort((a, b) => a - b);
+const isLike = (solution: RotationSolution, expected: readonly number[], within = 0.0003) => expected.every((value, at) => Math.abs(sorted(solution)[at]! - value) < within);
+const topaz: PrincipalIndices = [1.61, 1.613, 1.62];
+const general = onFacet([0.5, 0.62, Math.sqrt(1 - 0.25 - 0.62 ** 2)]);
+
+// Source: fixtures/worked/rotation-examples.json: an independent closed-form inversion.
+test.each(worked.examples)("$name: the crystals are those of the closed form", ({ readings, solutions }) => {
+  const fit = fitRotation({ facets: [{ label: "table", readings: readings.map(({ angleDeg, upper, lower }) => ({ angleDeg, upper, lower, u: 0.0001, polariserDeg: null })) }] });
+  expect(fit.solutions).toHaveLength(solutions.length);
+  for (const expected of solutions) expect(fit.solutions.some((solution) => isLike(solution, [...expected].sort((a, b) => a - b))), JSON.stringify({ expected, found: fit.solutions.map(sorted) })).toBe(true);
+  expect(fit.decided).toBe(solutions.length === 1);
+});
+
+test("one facet leaves both β, and says at which rotation the polariser decides, which it then does", () => {
+  const open = fitRotation({ facets: [aFacet(topaz, general)] });
+  expect(open.decided).toBe(false);
+  expect(open.solutions.map((solution) => sorted(solution)[1]!.toFixed(4)).sort()).toEqual(["1.6130", "1.6148"]);
+  const angleDeg = Number(/to (\d+)°/.exec(open.decideBy)![1]);
+  const decided = fitRotation({ facets: [aFacet(topaz, general, { stepDeg: 5, polariserAtDeg: [angleDeg, angleDeg + 5] })] });
+  expect(decided.decided).toBe(true);
+  expect(isLike(decided.solutions[0]!, topaz)).toBe(true);
+});
+
+test("a second facet decides, with shared indices", () => {
+  const fit = fitRotation({ facets: [aFacet(topaz, general, { u: 0.0003 }), aFacet(topaz, onFacet([0.9, -0.2, 0.4]), { u: 0.0003, label: "crown" })] });
+  expect(fit.decided).toBe(true);
+  expect(isLike(fit.solutions[0]!, topaz)).toBe(true);
+  expect(fit.solutions[0]!.orientation.map(({ facet }) => facet)).toEqual(["table", "crown"]);
+});
+
+test("a uniaxial stone on a leaning facet is uniaxial or else biaxial with a facet across an axis, until the polariser was read", () => {
+  const quartz: PrincipalIndices = [1.5443, 1.5443, 1.5534];
+  const axes = onFacet([Math.sin(0.6), 0, Math.cos(0.6)]);
+  const open = fitRotation({ facets: [aFacet(quartz, axes)] });
+  expect(open.decided).toBe(false);
+  expect(open.solutions.map(({ character }) => character)).toEqual(["uniaxial", "biaxial"]);
+  const decided = fitRotation({ facets: [aFacet(quartz, axes, { polariserAtDeg: [0, 30, 60, 90] })] });
+  expect(decided).toMatchObject({ decided: true });
+  expect(decided.solutions[0]).toMatchObject({ character: "uniaxial", sign: "+" });
+});
+
+test("a singly refractive stone has one index, however the readings scatter", () => {
+  const { normal } = randomFrom(21);
+  for (let turn = 0; turn < 40; turn++) {
+    // One edge is seen, and read once at each rotation.
+    const readings = Array.from({ length: 12 }, () => 1.718 + 0.0005 * normal()).map((edge, at): RotationReading => ({ angleDeg: at * 15, upper: edge, lower: edge, u: 0.0005, polariserDeg: null }));
+    expect(fitRotation({ facets: [{ label: "table", readings }] }).solutions.map(({ character }) => character)).toEqual(["isotropic"]);
+  }
+});
+
+test("few positions suffice where they must, and many that agree by mistake decide nothing", () => {
+  const fit = fitRotation({ facets: [aFacet(topaz, general, { stepDeg: 45 })] });
+  expect(fit.solutions.some((solution) => isLike(solution, topaz, 0.0005))).toBe(true);
+  expect(() => fitRotation({ facets: [{ label: "table", readings: aFacet(topaz, general).readings.slice(0, 2) }] })).toThrow(RangeError);
+});
+
+test("a misreading is named with its angle and by how much, and does not carry the indices off", () => {
+  const facet = aFacet([1.654, 1.671, 1.69], onFacet([0.7, 0.55, 0.455]), { u: 0.0005 });
+  const readings = facet.readings.map((reading) => (reading.angleDeg === 75 ? { ...reading, upper: reading.upper! + 0.004 } : reading));
+  const fit = fitRotation({ facets: [{ ...facet, readings }] });
+  expect(fit.outliers[0]).toMatchObject({ angleDeg: 75, edge: "upper", facet: "table" });
+  expect(fit.outliers[0]!.message).toMatch(/^the reading at 75° doesn't fit: \d\.\d u$/);
+  expect(fit.solutions.some((solution) => isLike(solution, [1.654, 1.671, 1.69], 0.0012))).toBe(true);
+});
+
+test("a seat that moved shows a half turn later", () => {
+  const facet = aFacet(topaz, general, { throughDeg: 360, stepDeg: 30 });
+  const readings = facet.readings.map((reading) => (reading.angleDeg >= 180 ? { ...reading, upper: reading.upper! + 0.003, lower: reading.lower! + 0.003 } : reading));
+  expect(fitRotation({ facets: [facet] }).closure).toEqual([]);
+  expect(fitRotation({ facets: [{ ...facet, readings }] }).closure.length).toBeGreaterThan(5);
+});
+
+test("upper edges over the limit leave α and bounds", () => {
+  const facet = aFacet([1.757, 1.757, 1.804], onFacet([0.6, 0.3, 0.74]), { u: 0.0005 }); // benitoite
+  const fit = fitRotation({ facets: [{ ...facet, readings: facet.readings.map((reading): RotationReading => ({ ...reading, upper: null })) }] });
+  expect(fit).toMatchObject({ decided: false, solutions: [{ character: "undetermined", sign: null }] });
+  expect(fit.solutions[0]!.indices).toEqual({ alpha: expect.closeTo(1.757, 3) });
+  expect(fit.decideBy).toMatch(/singly refractive|over the limit/);
+});
+
+test("the order of the readings changes nothing", () => {
+  const facet = aFacet(topaz, general, { noise: randomFrom(3).normal });
+  const [straight, reversed] = [fitRotation({ facets: [facet] }), fitRotation({ facets: [{ ...facet, readings: [...facet.readings].reverse() }] })];
+  expect(sorted(reversed.solutions[0]!).map((value) => value.toFixed(6))).toEqual(sorted(straight.solutions[0]!).map((value) => value.toFixed(6)));
+});
+
+test("stated 95 % intervals hold the truth in 93 to 97 % of random crystals, facets and noise", () => {
+  const { even, normal } = randomFrom(2_026);
+  const runs = sized({ always: 700, whole: 5_000 });
+  const held = { alpha: 0, beta: 0, gamma: 0 };
+  let [found, slowestMs] = [0, 0];
+  for (let at = 0; at < runs; at++) {
+    const alpha = 1.5 + 0.2 * even();
+    const truth: PrincipalIndices = [alpha, alpha + 0.004 + 0.02 * even(), 0];
+    const indices: PrincipalIndices = [truth[0], truth[1], truth[1] + 0.004 + 0.02 * even()];
+    const facet = aFacet(indices, onFacet([normal(), normal(), normal()]), { u: 0.0003 + 0.0007 * even(), noise: normal });
+    const startedAt = performance.now();
+    const fit: RotationFit = fitRotation({ facets: [facet] });
+    if (at > 20) slowestMs = Math.max(slowestMs, performance.now() - startedAt);
+    const best = fit.solutions.filter(({ character }) => character === "biaxial").sort((a, b) => Math.abs(sorted(a)[1]! - indices[1]) - Math.abs(sorted(b)[1]! - indices[1]))[0];
+    if (!best) continue;
+    found++;
+    (["alpha", "beta", "gamma"] as const).forEach((name, i) => {
+      if (Math.abs(sorted(best)[i]! - indices[i]!) < 1.96 * best.u[name]!) held[name]++;
+    });
+  }
+  expect(found / runs).toBeGreaterThan(0.98);
+  // Three binomial standard deviations of so many runs are allowed for.
+  const chance = 3 * Math.sqrt((0.95 * 0.05) / runs);
+  for (const [name, count] of Object.entries(held)) {
+    expect(count / found, name).toBeGreaterThan(0.95 - Math.max(0.02, chance));
+    expect(count / found, name).toBeLessThan(0.95 + Math.max(0.02, chance));
+  }
+}, 120_000);
