@@ -18,17 +18,24 @@ export function rankReadings(readings: readonly NumberedReading[], table: Specie
   const ranking = rankSpecies(evidence, table);
   const names = new Map(table.nodes.map(({ id, name }) => [id, name]));
   const against = contradictingReadings(readings, table);
-  const shown = ranking.candidates.filter(({ probability }, at) => at < mostCandidates && (at === 0 || probability >= negligible));
+  // One contradiction does not take a species from the ranking, but what it leaves unlikely is told with its reason.
+  const isLeft = ({ probability, evidence: lines }: Ranking["candidates"][number]) => probability >= negligible || !lines.some(({ verdict }) => verdict === "contradicts");
+  const left = ranking.candidates.filter(isLeft);
+  const shown = left.filter(({ probability }, at) => at < mostCandidates && (at === 0 || probability >= negligible));
+  const ruledOut = [
+    ...ranking.candidates.filter((candidate) => !isLeft(candidate)).map(({ speciesId, evidence: lines }) => ({ speciesId, because: lines.find(({ verdict }) => verdict === "contradicts")!.because })),
+    ...ranking.contradicted,
+  ];
   return {
     tableVersion: table.version,
     modelVersion: ranking.modelVersion,
     speciesCount: table.nodes.length,
     hasEvidence: Object.keys(evidence).length > 0,
     candidates: shown.map(({ speciesId, name, probability, evidence: lines }) => ({ speciesId, name, probability, lanes: lines.map((line) => laneOf(line, evidence)) })),
-    otherCount: ranking.candidates.length - shown.length,
+    otherCount: left.length - shown.length,
     unlisted: ranking.unlisted,
-    ruledOut: ranking.contradicted.slice(0, mostReasons).map(({ speciesId, because }) => ({ speciesId, name: names.get(speciesId) ?? speciesId, because, readings: against.get(speciesId) ?? [] })),
-    ruledOutCount: ranking.contradicted.length,
+    ruledOut: ruledOut.slice(0, mostReasons).map(({ speciesId, because }) => ({ speciesId, name: names.get(speciesId) ?? speciesId, because, readings: against.get(speciesId) ?? [] })),
+    ruledOutCount: ruledOut.length,
     inseparable: ranking.inseparable.map(({ speciesIds, settledBy }) => ({ names: speciesIds.map((id) => names.get(id) ?? id), settledBy })),
     index: measuredIndex(evidence),
     density: evidence.sg ? { value: evidence.sg.value, u: evidence.sg.u ?? 0 } : null,
@@ -43,7 +50,9 @@ export function contradictingReadings(readings: readonly NumberedReading[], tabl
   for (const reading of readings) {
     const alone = evidenceFromReadings([reading]);
     if (Object.keys(alone).length === 0) continue;
-    for (const { speciesId, because } of rankSpecies(alone, table).contradicted) {
+    const { candidates, contradicted } = rankSpecies(alone, table);
+    const byItself = [...contradicted, ...candidates.flatMap(({ speciesId, evidence }) => evidence.filter(({ verdict }) => verdict === "contradicts").slice(0, 1).map(({ because }) => ({ speciesId, because })))];
+    for (const { speciesId, because } of byItself) {
       against.set(speciesId, [...(against.get(speciesId) ?? []), { sequence: reading.sequence, because }]);
     }
   }

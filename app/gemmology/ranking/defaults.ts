@@ -1,5 +1,5 @@
 /** Moves with every change of the model; kept beside each ranking. */
-export const modelVersion = "2026.12-1";
+export const modelVersion = "2026.12-2";
 
 /** Standard uncertainties of a trained operator with an instrument in check (default u summary of the instruments' notes; common practice). */
 export const defaultU = { edge: 0.0015, spot: 0.008, criticalAngleDeg: 0.03, prismN: 0.0005, sg: 0.03, birefringence: 0.0012 } as const;

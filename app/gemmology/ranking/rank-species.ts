@@ -17,12 +17,13 @@ const offsetLogWeights = [0.9453087204829419, 0.3936193231522412, 0.393619323152
 
 /**
  * Ranks every species of the table by what was seen and measured. The order of the readings changes nothing; a species that
- * a good reading contradicts is listed apart with the reading; equal scores stand in the order of their ids.
+ * two independent observations contradict is listed apart with both, since a single slip must not take the truth away;
+ * equal scores stand in the order of their ids.
  *
  * It never concludes: natural, synthetic and treated forms share their constants and stand under one species.
  *
  * @param evidence as parseEvidence lets it through
- * @returns probabilities among the species that nothing contradicts and an unlisted one; they sum to 1
+ * @returns probabilities among the species that are not contradicted and an unlisted one; they sum to 1
  *
  * Source: Bayes' rule with the likelihoods described beside each term; model version in the result.
  */
@@ -91,16 +92,18 @@ function judge(node: SpeciesNode, terms: readonly Term[]): Judged {
     const scores = terms.map((term) => term.score(form, 0));
     let log = 0;
     for (const score of scores) log += score.logLikelihood;
-    if (isShared) log += sharedOffsetGain(form, terms, scores);
+    if (form.isSeries) log += compositionGain(form, terms, scores);
+    else if (isShared) log += sharedOffsetGain(form, terms, scores);
     logs.push(Math.log(form.share) + log);
-    const against = terms.findIndex((term, index) => contradicts(term, scores[index]!));
-    const isBetter = against < 0 ? !isOpen || log > bestLog : !isOpen && log > bestLog;
+    const against = terms.flatMap((term, index) => (contradicts(term, scores[index]!) ? [index] : []));
+    const isAgainst = new Set(against.map((index) => independentKind(terms[index]!.property))).size > 1;
+    const isBetter = isAgainst ? !isOpen && log > bestLog : !isOpen || log > bestLog;
     if (!isBetter) continue;
     best = form;
     bestScores = scores;
     bestLog = log;
-    isOpen = against < 0;
-    contradiction = against < 0 ? null : terms[worst(terms, scores)]!.contradiction(form, scores[worst(terms, scores)]!);
+    isOpen = !isAgainst;
+    contradiction = isAgainst ? twoWorst(against, terms, scores).map((index) => terms[index]!.contradiction(form, scores[index]!)).join("; ") : null;
   }
   return { logLikelihood: logSumExp(logs), best, bestScores, contradiction };
 }
@@ -115,17 +118,52 @@ function sharedOffsetGain(form: SpeciesForm, terms: readonly Term[], scores: rea
   return joint - separate;
 }
 
+/** Compositions at which index and density of a mixed crystal are taken together, and the share of their ranges that they scatter by there. */
+const compositions = [0, 0.1, 0.2, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 1];
+const scatterShare = 0.15;
+
+/**
+ * What is gained when index and density of a mixed crystal belong to one composition, over each varying by itself: a
+ * garnet of low index and high density fits each of its ranges and still is none of that series.
+ */
+function compositionGain(form: SpeciesForm, terms: readonly Term[], scores: readonly Score[]): number {
+  const moves = terms.map(({ isIndex, property }) => isIndex || property === "sg");
+  if (!terms.some(({ isIndex }) => isIndex) || !terms.some(({ property }) => property === "sg")) return 0;
+  let separate = 0;
+  terms.forEach((_, index) => {
+    if (moves[index]) separate += scores[index]!.logLikelihood;
+  });
+  const joint = compositions.map((share) => {
+    const there = atComposition(form, share);
+    return terms.reduce((sum, term, index) => (moves[index] ? sum + term.score(there, 0).logLikelihood : sum), -Math.log(compositions.length));
+  });
+  return logSumExp(joint) - separate;
+}
+
+function atComposition(form: SpeciesForm, share: number): SpeciesForm {
+  const narrow = (range: readonly [number, number] | null) => {
+    if (!range) return null;
+    const [width, middle] = [(range[1] - range[0]) * scatterShare, range[0] + share * (range[1] - range[0])];
+    return [middle - width, middle + width] as const;
+  };
+  return { ...form, lowIndex: narrow(form.lowIndex), highIndex: narrow(form.highIndex), spotIndex: narrow(form.spotIndex), sg: narrow(form.sg) };
+}
+
 function contradicts(term: Term, score: Score): boolean {
   return score.tail < (term.measure ? verdictAt.contradicts : seenContradictsBelow);
 }
 
-function worst(terms: readonly Term[], scores: readonly Score[]): number {
-  let at = -1;
-  for (let index = 0; index < terms.length; index++) {
-    if (!contradicts(terms[index]!, scores[index]!)) continue;
-    if (at < 0 || scores[index]!.logLikelihood - terms[index]!.unlistedLogLikelihood < scores[at]!.logLikelihood - terms[at]!.unlistedLogLikelihood) at = index;
-  }
-  return at;
+/** Observations of one kind may share one mistake: a facet, a liquid's edge, a balance. */
+function independentKind(property: string): string {
+  return property === "birefringence" ? "ri" : property === "opticSign" ? "opticCharacter" : property;
+}
+
+/** The strongest contradiction, and the strongest of another kind. */
+function twoWorst(against: readonly number[], terms: readonly Term[], scores: readonly Score[]): number[] {
+  const strength = (index: number) => scores[index]!.logLikelihood - terms[index]!.unlistedLogLikelihood;
+  const [first, ...others] = [...against].sort((a, b) => strength(a) - strength(b)) as [number, ...number[]];
+  const second = others.find((index) => independentKind(terms[index]!.property) !== independentKind(terms[first]!.property));
+  return second === undefined ? [first] : [first, second];
 }
 
 function lineOf(term: Term, node: SpeciesNode, best: SpeciesForm, score: Score): EvidenceLine {

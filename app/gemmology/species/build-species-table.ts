@@ -32,6 +32,10 @@ function nodeOf(node: NodeRow, rows: readonly SpeciesRow[]): SpeciesNode {
   return { id: node.id, name: node.name, weight: Math.max(...weights), forms: rows.map((row, index) => formOf(row, weights[index]! / sum)) };
 }
 
+/** Mixed crystals of a light and a heavy end member (Deer, Howie and Zussman, An Introduction to the Rock-Forming Minerals). */
+const seriesGroups = new Set(["garnet", "tourmaline", "olivine", "pyroxene", "scapolite", "epidote"]);
+const seriesRows = new Set(["spinel-gahnospinel", "spinel-black", "spinel-blue", "feldspar-albite", "feldspar-oligoclase-sunstone", "feldspar-andesine", "feldspar-labradorite", "feldspar-bytownite"]);
+
 const interval = (range: Range | null | undefined): Interval | null => (range ? [range.min, range.max] : null);
 
 function formOf(row: SpeciesRow, share: number): SpeciesForm {
@@ -61,6 +65,7 @@ function formOf(row: SpeciesRow, share: number): SpeciesForm {
     filterRed: row.colour_filter ? Object.values(row.colour_filter).some((look) => /red|pink/.test(look) && !/no red|not red/.test(look)) : null,
     thermal: row.thermal,
     phenomena: row.phenomena.map((phenomenon) => phenomenon.toLowerCase()),
+    isSeries: row.kind === "natural" && (seriesGroups.has(row.group) || seriesRows.has(row.id)),
   };
 }
 

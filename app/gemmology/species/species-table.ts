@@ -36,6 +36,8 @@ export type SpeciesForm = Readonly<{
   filterRed: boolean | null;
   thermal: string | null;
   phenomena: readonly string[];
+  /** A member of a solid solution, whose index and density rise together with composition. */
+  isSeries: boolean;
 }>;
 
 export type SpeciesNode = Readonly<{ id: string; name: string; /** Prior weight by prevalence, before normalising. */ weight: number; forms: readonly SpeciesForm[] }>;
