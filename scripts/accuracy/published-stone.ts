@@ -59,8 +59,8 @@ const otherNames: Readonly<Record<string, readonly string[]>> = {
   "garnet: pyrope-almandine": ["garnet-pyrope-almandine"],
   "garnet: pyrope-spessartine": ["garnet-pyrope-spessartine"],
   "yag (yttrium aluminium garnet)": ["yag"],
-  "plastic (opal imitation)": ["opal-plastic", "plastic-acrylic", "plastic-polystyrene", "plastic-polyester"],
-  "plastic (acrylic)": ["plastic-acrylic"],
+  "plastic (opal imitation)": ["plastic"],
+  "plastic (acrylic)": ["plastic"],
 };
 
 /** The nodes that count as the truth; none where the table has no such species. */

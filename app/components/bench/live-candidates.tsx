@@ -5,6 +5,7 @@ import { Card, CardBody } from "#app/components/ui/card.tsx";
 import type { BenchRanking } from "#app/features/identification/bench-ranking.ts";
 import { rankReadings, type NumberedReading } from "#app/features/identification/rank-readings.ts";
 import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
+import { speciesBoxes } from "#app/features/species/species-boxes.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
 import { CandidatesCard } from "./candidates-card.tsx";
 
@@ -62,13 +63,8 @@ function StandingMap({ table, ranking }: { table: SpeciesTable; ranking: BenchRa
   );
 }
 
-function mapSpecies({ nodes }: SpeciesTable, { candidates, ruledOut }: BenchRanking): MapSpecies[] {
+function mapSpecies(table: SpeciesTable, { candidates, ruledOut }: BenchRanking): MapSpecies[] {
   const shown = new Set(candidates.map(({ speciesId }) => speciesId));
   const out = new Set(ruledOut.map(({ speciesId }) => speciesId));
-  return nodes.flatMap(({ id, name, forms }) => {
-    const indices = forms.flatMap(({ lowIndex, highIndex, spotIndex }) => [...(lowIndex ?? spotIndex ?? []), ...(highIndex ?? [])]);
-    const densities = forms.flatMap(({ sg }) => sg ?? []);
-    if (indices.length === 0 || densities.length === 0) return [];
-    return [{ id, name, riLow: Math.min(...indices), riHigh: Math.max(...indices), sgLow: Math.min(...densities), sgHigh: Math.max(...densities), standing: shown.has(id) ? "candidate" : out.has(id) ? "contradicted" : "open" }];
-  });
+  return speciesBoxes(table).boxes.map(({ id, name, index, sg }) => ({ id, name, riLow: index[0], riHigh: index[1], sgLow: sg[0], sgHigh: sg[1], standing: shown.has(id) ? "candidate" : out.has(id) ? "contradicted" : "open" }));
 }

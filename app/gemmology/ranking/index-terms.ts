@@ -39,9 +39,9 @@ function rotatedEdges(reading: Extract<RefractiveEvidence, { kind: "edges" }>, h
   const low: Term = {
     ...indexTerm("ri", `${reading.low.toFixed(3)}–${reading.high.toFixed(3)}`),
     score: (form, offset) => {
-      if (form.lowIndex) return numericScore({ value: reading.low - offset, u, range: form.lowIndex, softness: softness.index, span: span.index });
+      if (form.lowIndex) return numericScore({ value: reading.low - offset, u, range: form.lowIndex, usual: form.usual.lowIndex, softness: softness.index, span: span.index });
       if (!form.spotIndex) return opaque;
-      const score = numericScore({ value: mean - offset, u, range: form.spotIndex, softness: softness.index, span: span.index });
+      const score = numericScore({ value: mean - offset, u, range: form.spotIndex, usual: form.usual.spotIndex, softness: softness.index, span: span.index });
       return { ...score, logLikelihood: score.logLikelihood + Math.log(twoEdgesOnAggregateShare) };
     },
   };
@@ -76,7 +76,7 @@ function singleEdge(n: number, u: number, observed: string): Term {
     score: (form, offset) => {
       const range = hull(form);
       if (!range) return opaque;
-      const score = numericScore({ value: n - offset, u, range, softness: softness.index, span: span.index });
+      const score = numericScore({ value: n - offset, u, range, usual: usualOf(form), softness: softness.index, span: span.index });
       const doubled = form.birefringence ? (form.birefringence[0] + form.birefringence[1]) / 2 : 0;
       // A second edge that should have been seen was not: hidden, or the stone lay along its axis.
       return doubled > 2 * u && form.lowIndex ? { ...score, logLikelihood: score.logLikelihood + Math.log(hiddenEdgeShare) } : score;
@@ -89,7 +89,7 @@ function spot(reading: Extract<RefractiveEvidence, { kind: "spot" }>): Term {
     ...indexTerm("ri", `${reading.n.toFixed(2)} spot`),
     score: (form, offset) => {
       const range = form.spotIndex ? outer(form.spotIndex, hull(form)) : hull(form);
-      return range ? numericScore({ value: reading.n - offset, u: reading.u ?? defaultU.spot, range, softness: softness.index, span: span.index }) : opaque;
+      return range ? numericScore({ value: reading.n - offset, u: reading.u ?? defaultU.spot, range, usual: usualOf(form), softness: softness.index, span: span.index }) : opaque;
     },
   };
 }
@@ -118,7 +118,7 @@ export function birefringenceTerm({ value, u = defaultU.birefringence }: { value
     unlistedLogLikelihood: Math.log(1 / span.birefringence),
     score: (form) =>
       form.birefringence
-        ? numericScore({ value, u, range: form.birefringence, softness: softness.birefringence, span: span.birefringence })
+        ? numericScore({ value, u, range: form.birefringence, usual: form.usual.birefringence, softness: softness.birefringence, span: span.birefringence })
         : // An aggregate shows no birefringence of its own; what was read says little about it.
           { logLikelihood: Math.log(0.2 / span.birefringence), tail: 1, distance: 0 },
     reference: (forms) => written(forms.flatMap(({ birefringence }) => (birefringence ? [birefringence] : [])), 3) || "not observed on aggregates",
@@ -147,6 +147,11 @@ export function outOfRange(noun: string, distance: number): string {
 export function hull(form: SpeciesForm): Interval | null {
   if (form.lowIndex && form.highIndex) return [form.lowIndex[0], form.highIndex[1]];
   return form.spotIndex;
+}
+
+/** What one edge or a spot shows of a form most: the middle of its usual indices. */
+function usualOf({ usual: { lowIndex, highIndex, spotIndex } }: SpeciesForm): number | undefined {
+  return spotIndex ?? (lowIndex !== undefined && highIndex !== undefined ? (lowIndex + highIndex) / 2 : undefined);
 }
 
 function outer(a: Interval, b: Interval | null): Interval {

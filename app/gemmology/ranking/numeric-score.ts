@@ -1,18 +1,29 @@
 import { blunderShare } from "./defaults.ts";
+import { normalPdf } from "../statistics/normal-pdf.ts";
 import { softUniformDensity, softUniformTwoSided } from "./soft-uniform.ts";
 import type { Interval } from "../species/species-table.ts";
 import type { Score } from "./term.ts";
+
+/** Half of what is met lies near the usual value, half anywhere in the range (house value, common practice of tables that give both). */
+const usualShare = 0.5;
+
+/** Near the usual value with a sixth of the range as its spread. */
+function usualDensity({ value, usual, width, sigma }: { value: number; usual: number; width: number; sigma: number }): number {
+  const spread = Math.hypot(sigma, width / 6);
+  return normalPdf((value - usual) / spread) / spread;
+}
 
 /**
  * A reading against a range: soft uniform ⊗ Gaussian, with a share of blunders spread over the property's span, so that a
  * single slip can never count more than ln(p·span/share).
  */
-export function numericScore({ value, u, range, softness, span }: { value: number; u: number; range: Interval; softness: number; span: number }): Score {
+export function numericScore({ value, u, range, usual, softness, span }: { value: number; u: number; range: Interval; /** What is met most, where that is known. */ usual?: number | undefined; softness: number; span: number }): Score {
   const sigma = Math.sqrt(u * u + softness * softness);
   const soft = { low: range[0], high: range[1], sigma };
   const distance = value < range[0] ? (value - range[0]) / sigma : value > range[1] ? (value - range[1]) / sigma : 0;
   // Far outside, only the blunder is left: no need to ask the tails.
-  const density = Math.abs(distance) > 9 ? 0 : softUniformDensity(soft, value);
+  const even = Math.abs(distance) > 9 ? 0 : softUniformDensity(soft, value);
+  const density = usual === undefined || even === 0 ? even : (1 - usualShare) * even + usualShare * usualDensity({ value, usual, width: range[1] - range[0], sigma });
   const tail = distance === 0 ? 1 : Math.abs(distance) > 9 ? 0 : softUniformTwoSided(soft, value);
   return { logLikelihood: Math.log((1 - blunderShare) * density + blunderShare / span), tail, distance };
 }

@@ -146,7 +146,7 @@ function atComposition(form: SpeciesForm, share: number): SpeciesForm {
     const [width, middle] = [(range[1] - range[0]) * scatterShare, range[0] + share * (range[1] - range[0])];
     return [middle - width, middle + width] as const;
   };
-  return { ...form, lowIndex: narrow(form.lowIndex), highIndex: narrow(form.highIndex), spotIndex: narrow(form.spotIndex), sg: narrow(form.sg) };
+  return { ...form, lowIndex: narrow(form.lowIndex), highIndex: narrow(form.highIndex), spotIndex: narrow(form.spotIndex), sg: narrow(form.sg), usual: {} };
 }
 
 function contradicts(term: Term, score: Score): boolean {

@@ -36,7 +36,7 @@ export function sgTerm({ value, u = defaultU.sg }: { value: number; u?: number }
     isIndex: false,
     measure: { noun: "density", decimals: 2 },
     unlistedLogLikelihood: Math.log(1 / span.sg),
-    score: (form) => (form.sg ? numericScore({ value, u, range: form.sg, softness: softness.sg, span: span.sg }) : { logLikelihood: Math.log(1 / span.sg), tail: 1, distance: 0 }),
+    score: (form) => (form.sg ? numericScore({ value, u, range: form.sg, usual: form.usual.sg, softness: softness.sg, span: span.sg }) : { logLikelihood: Math.log(1 / span.sg), tail: 1, distance: 0 }),
     reference: (forms) => written(forms.flatMap(({ sg }) => (sg ? [sg] : [])), 2) || "not known",
     contradiction: (_form, { distance }) => outOfRange("density", distance),
   };

@@ -55,6 +55,13 @@ function formOf(row: SpeciesRow, share: number): SpeciesForm {
     spotIndex: interval(ri?.spot),
     birefringence: interval(row.birefringence),
     sg: interval(row.sg),
+    usual: {
+      ...(low && { lowIndex: low.typ }),
+      ...(high && { highIndex: high.typ }),
+      ...(ri?.spot && { spotIndex: ri.spot.typ }),
+      ...(row.birefringence && { birefringence: row.birefringence.typ }),
+      ...(row.sg && { sg: row.sg.typ }),
+    },
     colours: row.colours.map((colour) => colour.toLowerCase()),
     transparency: row.transparency,
     lustre: row.lustre,

@@ -22,6 +22,8 @@ export type SpeciesForm = Readonly<{
   spotIndex: Interval | null;
   birefringence: Interval | null;
   sg: Interval | null;
+  /** What is usual within those ranges. */
+  usual: Readonly<Partial<Record<"lowIndex" | "highIndex" | "spotIndex" | "birefringence" | "sg", number>>>;
   colours: readonly string[];
   transparency: readonly string[];
   lustre: readonly string[];
