@@ -9,6 +9,8 @@ import type { Score, Term } from "./term.ts";
 
 export type RankOptions = Readonly<{ /** By how common a species is, or all alike. */ prior?: "prevalence" | "even" }>;
 
+/** Standard uncertainties beyond which nothing but a blunder explains a reading. */
+const farOut = 8;
 /** What is seen counts as a contradiction only when it is as good as impossible: eyes err. */
 const seenContradictsBelow = 0.004;
 /** Gauss–Hermite nodes and weights, 5 points, for a standard normal offset. */
@@ -92,8 +94,8 @@ function judge(node: SpeciesNode, terms: readonly Term[]): Judged {
     const scores = terms.map((term) => term.score(form, 0));
     let log = 0;
     for (const score of scores) log += score.logLikelihood;
-    if (form.isSeries) log += compositionGain(form, terms, scores);
-    else if (isShared) log += sharedOffsetGain(form, terms, scores);
+    // Far out, neither a shared error nor a composition brings a form back.
+    if ((form.isSeries || isShared) && scores.every(({ distance }) => Math.abs(distance) < farOut)) log += form.isSeries ? compositionGain(form, terms, scores) : sharedOffsetGain(form, terms, scores);
     logs.push(Math.log(form.share) + log);
     const against = terms.flatMap((term, index) => (contradicts(term, scores[index]!) ? [index] : []));
     const isAgainst = new Set(against.map((index) => independentKind(terms[index]!.property))).size > 1;
@@ -133,11 +135,22 @@ function compositionGain(form: SpeciesForm, terms: readonly Term[], scores: read
   terms.forEach((_, index) => {
     if (moves[index]) separate += scores[index]!.logLikelihood;
   });
-  const joint = compositions.map((share) => {
-    const there = atComposition(form, share);
+  const joint = alongComposition(form).map((there) => {
     return terms.reduce((sum, term, index) => (moves[index] ? sum + term.score(there, 0).logLikelihood : sum), -Math.log(compositions.length));
   });
   return logSumExp(joint) - separate;
+}
+
+/** A form's compositions are the same for every stone. */
+const formsAlong = new WeakMap<SpeciesForm, readonly SpeciesForm[]>();
+
+function alongComposition(form: SpeciesForm): readonly SpeciesForm[] {
+  let along = formsAlong.get(form);
+  if (!along) {
+    along = compositions.map((share) => atComposition(form, share));
+    formsAlong.set(form, along);
+  }
+  return along;
 }
 
 function atComposition(form: SpeciesForm, share: number): SpeciesForm {
@@ -168,7 +181,18 @@ function twoWorst(against: readonly number[], terms: readonly Term[], scores: re
 
 function lineOf(term: Term, node: SpeciesNode, best: SpeciesForm, score: Score): EvidenceLine {
   const verdict = verdictOf(term, score);
-  return { property: term.property, observed: term.observed, reference: term.reference(node.forms), logLikelihood: score.logLikelihood, verdict, because: because(term, best, score, verdict) };
+  return { property: term.property, observed: term.observed, reference: referenceOf(term, node), logLikelihood: score.logLikelihood, verdict, because: because(term, best, score, verdict) };
+}
+
+/** What the table says of a species in words does not depend on the stone. */
+const references = new WeakMap<SpeciesNode, Map<string, string>>();
+
+function referenceOf({ property, reference }: Term, node: SpeciesNode): string {
+  let known = references.get(node);
+  if (!known) references.set(node, (known = new Map()));
+  let words = known.get(property);
+  if (words === undefined) known.set(property, (words = reference(node.forms)));
+  return words;
 }
 
 function verdictOf(term: Term, score: Score): Verdict {
