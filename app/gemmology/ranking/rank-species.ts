@@ -2,10 +2,10 @@ import { logSumExp } from "../statistics/log-sum-exp.ts";
 import type { Lookalike, SpeciesForm, SpeciesNode, SpeciesTable } from "../species/species-table.ts";
 import { modelVersion, priorFloor, sharedOffset, unlistedPrior, verdictAt } from "./defaults.ts";
 import type { Evidence } from "./evidence.ts";
-import { birefringenceTerm, indexTerms } from "./index-terms.ts";
 import type { EvidenceLine, Ranking, Verdict } from "./ranking.ts";
-import { lookedAtTerms, opticCharacterTerm, opticSignTerm, sgTerm } from "./seen-terms.ts";
+import { compareIds } from "./compare-ids.ts";
 import type { Score, Term } from "./term.ts";
+import { termsOf } from "./terms-of.ts";
 
 export type RankOptions = Readonly<{ /** By how common a species is, or all alike. */ prior?: "prevalence" | "even" }>;
 
@@ -61,22 +61,6 @@ export function rankSpecies(evidence: Evidence, table: SpeciesTable, { prior = "
     contradicted,
     inseparable: inseparable(table.lookalikes, candidates),
   };
-}
-
-/** The observations of a piece of evidence in a fixed order, so that the order they came in cannot matter. */
-function termsOf(evidence: Evidence): Term[] {
-  return [
-    ...indexTerms(sorted(evidence.ri ?? []), { hasBirefringence: evidence.birefringence !== undefined }),
-    ...(evidence.birefringence ? [birefringenceTerm(evidence.birefringence)] : []),
-    ...(evidence.opticCharacter ? [opticCharacterTerm(evidence.opticCharacter)] : []),
-    ...(evidence.opticSign ? [opticSignTerm(evidence.opticSign)] : []),
-    ...(evidence.sg ? [sgTerm(evidence.sg)] : []),
-    ...lookedAtTerms(evidence),
-  ];
-}
-
-function sorted<T>(readings: readonly T[]): T[] {
-  return [...readings].sort((a, b) => compareIds(JSON.stringify(a), JSON.stringify(b)));
 }
 
 type Judged = { logLikelihood: number; best: SpeciesForm; bestScores: Score[]; contradiction: string | null };
@@ -216,8 +200,4 @@ function inseparable(lookalikes: readonly Lookalike[], candidates: ReadonlyArray
     const left = speciesIds.filter((id) => (open.get(id) ?? 0) >= 0.005);
     return left.length >= 2 && left.some((id) => open.get(id)! >= 0.05) ? [{ speciesIds: left, settledBy }] : [];
   });
-}
-
-function compareIds(a: string, b: string): number {
-  return a < b ? -1 : a > b ? 1 : 0;
 }
