@@ -21,6 +21,8 @@ export type NextTest = Readonly<{
 export type Vetoed = Readonly<{ testId: BenchTestId; name: string; because: string }>;
 export type Setting = StoneAtBench &
   Readonly<{
+    /** Tests that can be made and recorded here. */
+    offered: ReadonlySet<BenchTestId>;
     /** Tests that were made well; one that was made poorly may be repeated. */
     done: ReadonlySet<BenchTestId>;
     poor: ReadonlySet<BenchTestId>;
@@ -58,7 +60,7 @@ export function nextTests(candidates: ReadonlyArray<{ speciesId: string; probabi
   const recommended: NextTest[] = [];
   const vetoed: Vetoed[] = [];
   for (const test of benchTests) {
-    if (setting.done.has(test.id)) continue;
+    if (setting.done.has(test.id) || !setting.offered.has(test.id)) continue;
     const pieces = test.outcomes(setting, spans);
     if (pieces.length === 0) continue;
     const { bits, settles } = judge(pieces, hypotheses);

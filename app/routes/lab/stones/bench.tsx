@@ -2,6 +2,7 @@ import type { SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { useMemo, useState } from "react";
 import { Link, redirect } from "react-router";
+import { NextTestsCard } from "#app/components/bench/next-tests-card.tsx";
 import { CheckOffer } from "#app/components/bench/check-offer.tsx";
 import { NewReading } from "#app/components/bench/new-reading.tsx";
 import { ReadingsTable } from "#app/components/bench/readings-table.tsx";
@@ -13,6 +14,8 @@ import { Card, CardBody } from "#app/components/ui/card.tsx";
 import { Caution } from "#app/components/ui/caution.tsx";
 import { isAllowed } from "#app/domain/permissions.ts";
 import { observationKinds, type ObservationKind } from "#app/domain/reading.ts";
+import { nextTestsForStone } from "#app/features/identification/next-tests-for-stone.ts";
+import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
 import { rankStone } from "#app/features/identification/rank-stone.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
@@ -39,6 +42,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const mayCheck = isAllowed(ctx.roles, "secondChecks.do") && state === "concluded" && !check && (!bench.isInvolved || ctx.laboratory.isSolePractice);
   const isOffered = mayCheck && !bench.isInvolved && url.searchParams.get("show") !== "examination";
   const shown = isOffered ? null : readings;
+  const examined = shown?.filter(({ isOfSecondCheck }) => !isOfSecondCheck) ?? null;
   return {
     stone: bench.stone,
     condition: bench.stone.condition,
@@ -50,7 +54,8 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
     check: isOffered ? null : check && { kind: check.kind, checker: check.checker, isCompared: check.comparedAt !== null, outcome: check.outcome, reason: check.reason },
     conclusion: isOffered ? null : conclusion && { version: conclusion.version, by: conclusion.by },
     instruments: isOffered ? [] : instruments,
-    ranking: shown && (await rankStone(ctx, { readings: shown.filter(({ isOfSecondCheck }) => !isOfSecondCheck) })).bench,
+    ranking: examined && (await rankStone(ctx, { readings: examined })).bench,
+    next: examined && nextTestsForStone(examined, loadSpeciesTable().table, { ...bench.stone, consents: bench.consents, instruments }),
     test: testOf(url),
     areCandidatesHidden: url.searchParams.get("candidates") === "hidden",
     requestId: newRequestId(),
@@ -135,7 +140,7 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
 type LoaderData = Route.ComponentProps["loaderData"];
 type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
-function Examination({ readings, ranking, instruments, test, requestId, areCandidatesHidden, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
+function Examination({ readings, ranking, next, instruments, test, requestId, areCandidatesHidden, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
   const [typed, setTyped] = useState<ComposedReading | null>(null);
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const struckCount = readings.filter(({ strike }) => strike).length;
@@ -183,6 +188,7 @@ function Examination({ readings, ranking, instruments, test, requestId, areCandi
         ) : (
           <>
             <LiveCandidates saved={ranking} readings={examined} typed={can.record ? typed : null} />
+            {next && can.record ? <NextTestsCard next={next} hrefOf={(kind) => `?test=${kind}`} /> : null}
             <p className="no-print flex flex-wrap gap-x-5 gap-y-1 px-1 text-sm">
               <Link to={mapHref} className="text-link">
                 On the index and density map
