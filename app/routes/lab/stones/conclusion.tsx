@@ -6,6 +6,7 @@ import { StoneHeader } from "#app/components/bench/stone-header.tsx";
 import { ConclusionCard } from "#app/components/conclusion/conclusion-card.tsx";
 import { ConclusionFields, type ConclusionShape } from "#app/components/conclusion/conclusion-fields.tsx";
 import { Button, LinkButton } from "#app/components/ui/button.tsx";
+import { NatureCard } from "#app/components/conclusion/nature-card.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import { CardSection } from "#app/components/ui/card-section.tsx";
 import { EmptyState } from "#app/components/ui/empty-state.tsx";
@@ -17,6 +18,7 @@ import { observationKindNames } from "#app/domain/reading.ts";
 import { conclusionForm } from "#app/features/identification/conclusion-forms.server.ts";
 import { getConclusion, type ConclusionView } from "#app/features/identification/get-conclusion.server.ts";
 import { proposeConclusion } from "#app/features/identification/propose-conclusion.server.ts";
+import { natureOfStone } from "#app/features/identification/nature-of-stone.ts";
 import { listSpeciesNames, rankStone } from "#app/features/identification/rank-stone.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import { latestSize } from "#app/features/readings/latest-size.ts";
@@ -44,12 +46,17 @@ export async function loader({ context, params }: Route.LoaderArgs) {
       ? {
           requestId: newRequestId(),
           speciesNames: listSpeciesNames(),
-          ranking: (await rankStone(ctx, { readings })).bench,
+          ...(await rankedWithNature(ctx, readings)),
           readings: presentReadings(readings.filter(({ strike }) => !strike), timeZone),
           startFrom: startFrom(conclusion, { isMounted: bench.stone.isMounted }),
         }
       : null,
   };
+}
+
+async function rankedWithNature(ctx: Parameters<typeof rankStone>[0], readings: NonNullable<Awaited<ReturnType<typeof getBench>>["readings"]>) {
+  const ranking = (await rankStone(ctx, { readings })).bench;
+  return { ranking, nature: natureOfStone(readings, ranking) };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
@@ -94,7 +101,7 @@ export default function ConclusionRoute({ loaderData, actionData, params }: Rout
 type LoaderData = Route.ComponentProps["loaderData"];
 type ProposeProps = { form: NonNullable<LoaderData["form"]>; stone: LoaderData["stone"]; lastResult: NonNullable<Route.ComponentProps["actionData"]>["result"] | undefined };
 
-function Propose({ form: { requestId, speciesNames, ranking, readings, startFrom }, stone, lastResult }: ProposeProps) {
+function Propose({ form: { requestId, speciesNames, ranking, nature, readings, startFrom }, stone, lastResult }: ProposeProps) {
   const [form, fields] = useForm<ConclusionShape>({ id: "conclusion", lastResult, defaultValue: { ...startFrom.values, requestId } });
   const navigation = useNavigation();
   return (
@@ -133,6 +140,7 @@ function Propose({ form: { requestId, speciesNames, ranking, readings, startFrom
             )}
           </CardBody>
         </Card>
+        <NatureCard nature={nature} />
         <CandidatesCard ranking={ranking} />
       </div>
     </div>

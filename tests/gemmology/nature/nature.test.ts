@@ -1,0 +1,59 @@
+import { expect, test } from "vitest";
+import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
+import { features } from "#app/gemmology/nature/feature.ts";
+import { natureEvidence } from "#app/gemmology/nature/nature-evidence.ts";
+import { beyondBench, referralReasons } from "#app/gemmology/nature/referral.ts";
+
+const of = (speciesId: string | null, ...texts: string[]) => natureEvidence({ speciesId, texts });
+const said = (speciesId: string | null, text: string) => of(speciesId, text).findings.map(({ question, answer, strength }) => `${question}: ${answer}, ${strength}`);
+
+// Source: common practice, workflow §1.7: what a bench may report as a positive finding.
+test.each([
+  ["corundum", "Curved striae under 40×", "nature: synthetic, positive"],
+  ["corundum", "gas bubbles in a row", "nature: synthetic, indication"],
+  ["glass", "Bubbles, swirls", "nature: artificial, positive"],
+  ["beryl", "chevron growth near the girdle", "nature: synthetic, positive"],
+  ["beryl", "a seed plate parallel to the table", "nature: synthetic, positive"],
+  ["corundum", "blue flashes in two fissures", "treatment: fissures filled with glass or resin, positive"],
+  ["corundum", "partly dissolved silk", "treatment: heating at high temperature, indication"],
+  ["chalcedony", "dye in fissures", "treatment: dyeing, positive"],
+  ["corundum", "colour along the facet edges in immersion", "treatment: surface diffusion, positive"],
+  [null, "a red ring under the girdle, a join at mid-height", "nature: composite, positive"],
+  ["garnet-andradite", "horsetail fibres", "nature: natural, indication"],
+] as const)("%s with “%s” is %s", (speciesId, text, expected) => {
+  expect(said(speciesId, text)).toContain(expected);
+});
+
+test("a denial is no finding, and a feature says nothing of a species that it does not occur in", () => {
+  expect(said("corundum", "no curved striae, no gas bubbles; not a flash effect")).toEqual([]);
+  expect(said("quartz", "Curved striae")).toEqual([]);
+  expect(said(null, "Curved striae")).toEqual([]);
+});
+
+test("what proves nothing is told so", () => {
+  expect(of("corundum", "straight zoning", "inclusion-free").silent.map(({ feature }) => feature)).toEqual(["straight zoning", "no inclusions"]);
+  expect(of("corundum", "intact silk").silent[0]!.saysNothingOf).toContain("low temperature");
+});
+
+test("proof of a synthetic beside a natural stone's feature is a conflict, and a reason to refer", () => {
+  const { conflicts } = of("corundum", "curved striae", "zircon crystals with halos");
+  expect(conflicts).toHaveLength(1);
+  expect(referralReasons({ speciesId: "corundum", variety: "", hasConflict: true })).toEqual(["the findings contradict each other"]);
+  expect(referralReasons({ speciesId: "corundum", variety: "ruby", hasConflict: false })).toHaveLength(1);
+  expect(referralReasons({ speciesId: "quartz", variety: "citrine", hasConflict: false })).toEqual([]);
+});
+
+test("no constant is among the features, and every species named is in the table", () => {
+  const ids = new Set(loadSpeciesTable().table.nodes.map(({ id }) => id));
+  for (const { meanings, name } of features) {
+    expect(name).not.toMatch(/index|density|birefringence/i);
+    for (const { species } of meanings) if (species !== "any") for (const id of species) expect(ids, `${name}: ${id}`).toContain(id);
+  }
+});
+
+test("what no bench can decide is listed for those species that it matters for", () => {
+  expect(beyondBench("corundum")).toContain("heating at low temperature");
+  expect(beyondBench("topaz")).toEqual(["irradiation"]);
+  expect(beyondBench("zircon-high")).toEqual(["heating"]);
+  expect(beyondBench(null)).toEqual([]);
+});
