@@ -1,6 +1,6 @@
 import { QueryClient, QueryClientProvider, useQuery } from "@tanstack/react-query";
-import { useDeferredValue, useMemo, useState } from "react";
-import { IndexDensityMap, type MapSpecies } from "#app/components/charts/index-density-map.tsx";
+import { lazy, Suspense, useDeferredValue, useMemo, useState } from "react";
+import type { MapSpecies } from "#app/components/charts/index-density-map.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import type { BenchRanking } from "#app/features/identification/bench-ranking.ts";
 import { rankReadings, type NumberedReading } from "#app/features/identification/rank-readings.ts";
@@ -8,6 +8,9 @@ import type { ComposedReading } from "#app/features/readings/compose-reading.ts"
 import { speciesBoxes } from "#app/features/species/species-boxes.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
 import { CandidatesCard } from "./candidates-card.tsx";
+
+/** Charts come after the page works, as the species table does. */
+const IndexDensityMap = lazy(async () => ({ default: (await import("#app/components/charts/index-density-map.tsx")).IndexDensityMap }));
 
 type LiveCandidatesProps = {
   /** As the server ranked what was saved; shown until the table is here, and without script. */
@@ -57,7 +60,9 @@ function StandingMap({ table, ranking }: { table: SpeciesTable; ranking: BenchRa
   return (
     <Card title="Index and density" note="every species in the table">
       <CardBody>
-        <IndexDensityMap species={species} reading={{ ri: index?.value, riU: index?.u, sg: density?.value, sgU: density?.u }} mostNames={3} />
+        <Suspense fallback={<div className="aspect-[16/11] max-w-2xl" />}>
+          <IndexDensityMap species={species} reading={{ ri: index?.value, riU: index?.u, sg: density?.value, sgU: density?.u }} mostNames={3} />
+        </Suspense>
       </CardBody>
     </Card>
   );
