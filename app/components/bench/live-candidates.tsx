@@ -3,7 +3,7 @@ import { lazy, Suspense, useDeferredValue, useMemo, useState } from "react";
 import type { MapSpecies } from "#app/components/charts/index-density-map.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import type { BenchRanking } from "#app/features/identification/bench-ranking.ts";
-import { rankReadings, type NumberedReading } from "#app/features/identification/rank-readings.ts";
+import type { NumberedReading } from "#app/features/identification/rank-readings.ts";
 import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { speciesBoxes } from "#app/features/species/species-boxes.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
@@ -31,25 +31,26 @@ export function LiveCandidates(props: LiveCandidatesProps) {
 }
 
 function Live({ saved, readings, typed }: LiveCandidatesProps) {
-  const { data: table } = useQuery({
+  const { data: live } = useQuery({
     queryKey: ["species-table", saved.tableVersion],
-    queryFn: async ({ signal }): Promise<SpeciesTable> => {
-      const response = await fetch(`/species-table/${saved.tableVersion}.json`, { signal });
+    // The matcher comes with the table: without it there is nothing to match, and the page works before either is here.
+    queryFn: async ({ signal }) => {
+      const [response, { rankReadings }] = await Promise.all([fetch(`/species-table/${saved.tableVersion}.json`, { signal }), import("#app/features/identification/rank-readings.ts")]);
       if (!response.ok) throw new Error(`species table: ${response.status}`);
-      return (await response.json()) as SpeciesTable;
+      return { table: (await response.json()) as SpeciesTable, rankReadings };
     },
     staleTime: Infinity,
     gcTime: Infinity,
   });
   const latest = useDeferredValue(typed);
   const ranking = useMemo(() => {
-    if (!table) return saved;
-    return rankReadings(latest ? [...readings, { ...latest, sequence: null }] : readings, table);
-  }, [table, saved, readings, latest]);
+    if (!live) return saved;
+    return live.rankReadings(latest ? [...readings, { ...latest, sequence: null }] : readings, live.table);
+  }, [live, saved, readings, latest]);
   return (
     <>
-      <CandidatesCard ranking={ranking} isWithTyped={Boolean(table && latest && latest.values.length + (latest.detail.kind === "polariscope" ? 1 : 0) > 0)} />
-      {table && (ranking.index || ranking.density) ? <StandingMap table={table} ranking={ranking} /> : null}
+      <CandidatesCard ranking={ranking} isWithTyped={Boolean(live && latest && latest.values.length + (latest.detail.kind === "polariscope" ? 1 : 0) > 0)} />
+      {live && (ranking.index || ranking.density) ? <StandingMap table={live.table} ranking={ranking} /> : null}
     </>
   );
 }
