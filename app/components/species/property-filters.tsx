@@ -1,4 +1,5 @@
 import { inputLook } from "#app/components/ui/field-frame.tsx";
+import { FilterSelect } from "#app/components/ui/filter-select.tsx";
 import { characterFilterNames, characterFilters, kindFilters, kindNames, phenomenonFilters, signFilterNames, signFilters, transparencyFilters } from "#app/features/species/species-filter.ts";
 import { colourFamilies } from "#app/gemmology/species/colour-families.ts";
 
@@ -13,16 +14,16 @@ export function PropertyFilters({ typed, errors }: PropertyFiltersProps) {
     <>
       <RangeFilter name="index" label="Index" typed={typed} error={errors.index} />
       <RangeFilter name="density" label="Density" typed={typed} error={errors.density} />
-      <Choice name="character" label="Between crossed polars" value={typed.character} options={characterFilters.map((value) => [value, characterFilterNames[value]])} className="w-48" />
-      <Choice name="colour" label="Colour" value={typed.colour} options={colourFamilies.map((value) => [value, value])} />
+      <FilterSelect name="character" label="Between crossed polars" value={typed.character} options={characterFilters.map((value) => [value, characterFilterNames[value]])} className="w-48" />
+      <FilterSelect name="colour" label="Colour" value={typed.colour} options={colourFamilies.map((value) => [value, value])} />
       <details open={isMoreUsed} className="mt-5.5 open:order-last open:mt-0 open:basis-full">
         <summary className="flex min-h-9 items-center px-1 text-tint underline decoration-1 underline-offset-3 pointer-coarse:min-h-11">More properties</summary>
         <div className="flex flex-wrap items-end gap-2.5 pt-1">
           <RangeFilter name="birefringence" label="Birefringence" typed={typed} error={errors.birefringence} />
-          <Choice name="sign" label="Optic sign" value={typed.sign} options={signFilters.map((value) => [value, signFilterNames[value]])} />
-          <Choice name="kind" label="Nature" value={typed.kind} options={kindFilters.map((value) => [value, kindNames[value]])} />
-          <Choice name="transparency" label="Transparency" value={typed.transparency} options={transparencyFilters.map((value) => [value, value])} />
-          <Choice name="phenomenon" label="Phenomenon" value={typed.phenomenon} options={phenomenonFilters.map((value) => [value, value])} />
+          <FilterSelect name="sign" label="Optic sign" value={typed.sign} options={signFilters.map((value) => [value, signFilterNames[value]])} />
+          <FilterSelect name="kind" label="Nature" value={typed.kind} options={kindFilters.map((value) => [value, kindNames[value]])} />
+          <FilterSelect name="transparency" label="Transparency" value={typed.transparency} options={transparencyFilters.map((value) => [value, value])} />
+          <FilterSelect name="phenomenon" label="Phenomenon" value={typed.phenomenon} options={phenomenonFilters.map((value) => [value, value])} />
         </div>
       </details>
     </>
@@ -56,23 +57,5 @@ function RangeFilter({ name, label, typed, error }: { name: string; label: strin
         </p>
       ) : null}
     </fieldset>
-  );
-}
-
-function Choice({ name, label, value, options, className = "w-36" }: { name: string; label: string; value: string | undefined; options: ReadonlyArray<readonly [string, string]>; className?: string }) {
-  return (
-    <div className={className}>
-      <label htmlFor={`species-${name}`} className={labelLook}>
-        {label}
-      </label>
-      <select id={`species-${name}`} name={name} defaultValue={value} className={inputLook}>
-        <option value="">any</option>
-        {options.map(([key, text]) => (
-          <option key={key} value={key}>
-            {text}
-          </option>
-        ))}
-      </select>
-    </div>
   );
 }

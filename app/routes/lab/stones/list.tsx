@@ -5,6 +5,7 @@ import { Card } from "#app/components/ui/card.tsx";
 import { StateWord, type Tone } from "#app/components/ui/chip.tsx";
 import { EmptyState } from "#app/components/ui/empty-state.tsx";
 import { inputLook } from "#app/components/ui/field-frame.tsx";
+import { FilterSelect } from "#app/components/ui/filter-select.tsx";
 import { Pager } from "#app/components/ui/pager.tsx";
 import { Cell, HeaderCell, RowHeaderCell, SortHeaderCell, Table } from "#app/components/ui/table.tsx";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
@@ -167,22 +168,4 @@ function whereIs({ goodsState, place, holder }: { goodsState: keyof typeof goods
   if (goodsState === "released") return "Released";
   if (goodsState === "away") return `Away: ${place}`;
   return [holder, place].filter(Boolean).join(", ");
-}
-
-function FilterSelect({ name, label, value, options }: { name: string; label: string; value: string; options: ReadonlyArray<readonly [string, string]> }) {
-  return (
-    <div className="w-36">
-      <label htmlFor={`filter-${name}`} className="mb-1 block text-[12.5px] font-semibold text-ink-2">
-        {label}
-      </label>
-      <select id={`filter-${name}`} name={name} defaultValue={value} className={inputLook}>
-        <option value="">any</option>
-        {options.map(([key, text]) => (
-          <option key={key} value={key}>
-            {text}
-          </option>
-        ))}
-      </select>
-    </div>
-  );
 }
