@@ -4,7 +4,7 @@ import { EmptyState } from "#app/components/ui/empty-state.tsx";
 import { Cell, HeaderCell, Table } from "#app/components/ui/table.tsx";
 import { observationKindNames, readingQualityNames } from "#app/domain/reading.ts";
 import type { TimedReading } from "#app/features/readings/present-readings.ts";
-import { readingConditions, readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
+import { isFigures, readingConditions, readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
 
 type ReadingsTableProps = {
   readings: readonly TimedReading[];
@@ -56,7 +56,7 @@ function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: st
         {observationKindNames[reading.detail.kind]}
         <span className={small}>{[readingConditions(reading), reading.instrument?.name].filter(Boolean).join(" · ")}</span>
       </Cell>
-      <Cell isStruck={isStruck} className={quality !== "noResult" && /^\D?\d/.test(valueText) ? "font-mono whitespace-nowrap" : ""}>
+      <Cell isStruck={isStruck} className={quality !== "noResult" && isFigures(valueText) ? "font-mono whitespace-nowrap" : ""}>
         {quality === "noResult" ? `no reading: ${reading.noResultReason}` : valueText}
       </Cell>
       <Cell>

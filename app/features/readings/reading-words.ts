@@ -32,6 +32,9 @@ export function readingValueText({ detail, values }: Told): string {
   }
 }
 
+/** Whether a value is digits, to be set in figures, or words. */
+export const isFigures = (valueText: string): boolean => /^\D?\d/.test(valueText);
+
 /** What was seen beside the value, in words. */
 export function readingSeenText({ detail, values }: Told): string {
   const typed = (name: ReadingValueName) => typedDecimal(values.find((value) => value.name === name)?.typedText ?? "");

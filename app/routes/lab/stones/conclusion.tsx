@@ -23,7 +23,7 @@ import { listSpeciesNames, rankStone } from "#app/features/identification/rank-s
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import { latestSize } from "#app/features/readings/latest-size.ts";
 import { presentReadings } from "#app/features/readings/present-readings.ts";
-import { readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
+import { isFigures, readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
 import { getBench } from "#app/features/stones/get-bench.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
@@ -131,7 +131,7 @@ function Propose({ form: { requestId, speciesNames, ranking, nature, readings, s
                   <li key={reading.sequence}>
                     <span className="text-ink-3">no. {reading.sequence} </span>
                     {observationKindNames[reading.detail.kind]}{" "}
-                    <span className="font-mono">{reading.quality === "noResult" ? `no reading: ${reading.noResultReason}` : readingValueText(reading)}</span> <span className="text-ink-2">{readingSeenText(reading)}</span>
+                    <span className={reading.quality !== "noResult" && isFigures(readingValueText(reading)) ? "font-mono" : ""}>{reading.quality === "noResult" ? `no reading: ${reading.noResultReason}` : readingValueText(reading)}</span> <span className="text-ink-2">{readingSeenText(reading)}</span>
                   </li>
                 ))}
               </ul>
