@@ -63,6 +63,7 @@ import { compareSecondCheck } from "#app/features/second-checks/compare-second-c
 import { decideSecondCheck } from "#app/features/second-checks/decide-second-check.server.ts";
 import { startSecondCheck } from "#app/features/second-checks/start-second-check.server.ts";
 import { getBench } from "#app/features/stones/get-bench.server.ts";
+import { getStoneMark } from "#app/features/stones/get-stone-mark.server.ts";
 import { listOfferedServices } from "#app/features/take-ins/list-offered-services.server.ts";
 import { listStones } from "#app/features/stones/list-stones.server.ts";
 import { getLetterhead } from "#app/features/take-ins/get-letterhead.server.ts";
@@ -204,6 +205,7 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
 
   // bench
   entry({ name: "getBench", operation: "stones.read", rows: aStoneCode, call: (ctx, stoneCode) => getBench(ctx, { stoneCode }) }),
+  entry({ name: "getStoneMark", operation: "stones.read", rows: aStoneCode, call: (ctx, stoneCode) => getStoneMark(ctx, { stoneCode }) }),
   entry({ name: "listReadings", operation: "readings.read", rows: aStoneCode, call: (ctx, stoneCode) => listReadings(ctx, { stoneCode }), isEmptyElsewhere: "list" }),
   entry({ name: "getStonePlace", operation: "readings.read", rows: (lab) => aBench(lab), call: (ctx, bench) => getStonePlace(ctx, bench) }),
   entry({ name: "rankStone", operation: "readings.read", rows: nothing, call: (ctx) => rankStone(ctx, { readings: [] }), hasNoIds: true }),

@@ -48,6 +48,7 @@ function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: st
     <tr id={`reading-${reading.sequence}`}>
       <Cell isStruck={isStruck} className="whitespace-nowrap">
         <span title={reading.day}>{reading.when}</span>
+        <span className="hidden text-xs text-ink-3 print:block">{reading.day}</span>
         <span className={small}>
           {initials(reading.observer)} · no. {reading.sequence}
         </span>

@@ -3,6 +3,7 @@ import { parseWithZod } from "@conform-to/zod/v4";
 import { useMemo, useState } from "react";
 import { Link, redirect } from "react-router";
 import { NextTestsCard } from "#app/components/bench/next-tests-card.tsx";
+import { FollowStone } from "#app/components/bench/follow-stone.tsx";
 import { CheckOffer } from "#app/components/bench/check-offer.tsx";
 import { NewReading } from "#app/components/bench/new-reading.tsx";
 import { ReadingsTable } from "#app/components/bench/readings-table.tsx";
@@ -147,19 +148,30 @@ function Examination({ readings, ranking, next, instruments, test, requestId, ar
   const hidden = areCandidatesHidden ? "&candidates=hidden" : "";
   return (
     <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_24rem] xl:grid-cols-[minmax(0,1fr)_30.75rem]">
+      <FollowStone base={base} mark={stone.version} />
       <div className="grid min-w-0 gap-5">
         {can.record ? (
           <Card title="New reading" note="kept as you type it, never overwritten">
             <TestChoice current={test} hrefOf={(kind) => `?test=${kind}${hidden}`} />
             <NewReading
-              // A saved reading clears the form; a refused one keeps what was typed.
-              key={`${test}-${readings.length}`}
+              // One's own saved reading clears the form; a refused one keeps what was typed, and a colleague's leaves it alone.
+              key={`${test}-${readings.filter(({ isOwn }) => isOwn).length}`}
               {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden }}
               onDraft={setTyped}
             />
           </Card>
         ) : null}
-        <Card title="Readings" note={`${readings.length - struckCount} kept, ${struckCount} struck`}>
+        <Card
+          title="Readings"
+          note={`${readings.length - struckCount} kept, ${struckCount} struck`}
+          aside={
+            readings.length > 0 ? (
+              <Link to={`${base}/sheet`} className="no-print text-sm text-ink-2">
+                Bench sheet
+              </Link>
+            ) : null
+          }
+        >
           <ReadingsTable
             readings={readings}
             strikeHref={(sequence) => `${base}/readings/${sequence}/strike`}
