@@ -21,6 +21,7 @@ import { grantTerms } from "#app/features/clients/grant-terms.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import { updateClient } from "#app/features/clients/update-client.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -39,7 +40,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "clients.manage");
   const clientId = clientIdOf(params.clientRef);
   const formData = await request.formData();
   const here = `/lab/${params.labSlug}/clients/${params.clientRef}`;

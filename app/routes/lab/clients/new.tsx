@@ -12,6 +12,7 @@ import { createClient } from "#app/features/clients/create-client.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import { requireRole } from "#app/features/require-role.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -23,10 +24,11 @@ export async function loader({ context }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
+  const ctx = labContextFor(context, "clients.manage");
   const submission = parseWithZod(await request.formData(), { schema: createClientForm });
   if (submission.status !== "success") return formInvalid(submission);
   try {
-    const id = await createClient(context.get(labContext), submission.value);
+    const id = await createClient(ctx, submission.value);
     return redirect(`/lab/${params.labSlug}/clients/${shortRef(id)}`, { headers: { "Set-Cookie": await noticeHeader(`${submission.value.name} is entered.`) } });
   } catch (error) {
     return formRefused(submission, error);

@@ -23,6 +23,7 @@ import { instrumentKindNames, instrumentStatusNames } from "#app/features/instru
 import { recordInstrumentCheck } from "#app/features/instruments/record-instrument-check.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -42,7 +43,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "instruments.manage");
   const id = instrumentIdOf(params.instrumentRef);
   const formData = await request.formData();
   const intent = formData.get("intent") === "check" ? ("check" as const) : ("edit" as const);

@@ -21,6 +21,7 @@ import { refundInvoice } from "#app/features/invoices/refund-invoice.server.ts";
 import { sendInvoice } from "#app/features/invoices/send-invoice.server.ts";
 import { voidInvoice } from "#app/features/invoices/void-invoice.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -35,7 +36,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "invoices.manage");
   const submission = parseWithZod(await request.formData(), { schema: invoiceAction });
   if (submission.status !== "success") return formInvalid(submission);
   const { number } = params;

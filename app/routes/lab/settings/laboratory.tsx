@@ -16,6 +16,7 @@ import { getLaboratorySettings } from "#app/features/laboratories/get-laboratory
 import { laboratorySettingsForm } from "#app/features/laboratories/laboratory-forms.server.ts";
 import { updateLaboratory } from "#app/features/laboratories/update-laboratory.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { laboratoryChoices } from "#app/web/laboratory-choices.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
@@ -42,7 +43,7 @@ export async function loader({ context }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "laboratory.manage");
   const submission = parseWithZod(await request.formData(), { schema: laboratorySettingsForm(ctx.laboratory.currency) });
   if (submission.status !== "success") return formInvalid(submission);
   try {

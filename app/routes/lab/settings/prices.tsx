@@ -17,6 +17,7 @@ import { listPrices } from "#app/features/laboratories/list-prices.server.ts";
 import { priceListMark } from "#app/features/laboratories/price-list-mark.ts";
 import { updatePrices } from "#app/features/laboratories/update-prices.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -41,7 +42,7 @@ export async function loader({ context }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "prices.manage");
   const submission = parseWithZod(await request.formData(), { schema: pricesForm(ctx.laboratory.currency) });
   if (submission.status !== "success") return formInvalid(submission);
   try {

@@ -22,6 +22,7 @@ import { listTeam } from "#app/features/laboratories/list-team.server.ts";
 import { setMemberRoles } from "#app/features/laboratories/set-member-roles.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -34,7 +35,7 @@ export async function loader({ context }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "team.manage");
   const submission = parseWithZod(await request.formData(), { schema: teamForm });
   if (submission.status !== "success") return formInvalid(submission);
   const input = submission.value;

@@ -26,6 +26,7 @@ import { readingForm } from "#app/features/readings/reading-forms.server.ts";
 import { recordReading } from "#app/features/readings/record-reading.server.ts";
 import { getBench } from "#app/features/stones/get-bench.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -71,7 +72,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params, url }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "readings.record");
   const submission = parseWithZod(await request.formData(), { schema: readingForm });
   if (submission.status !== "success") return formInvalid(submission);
   try {

@@ -26,6 +26,7 @@ import { presentReadings } from "#app/features/readings/present-readings.ts";
 import { isFigures, readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
 import { getBench } from "#app/features/stones/get-bench.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -60,7 +61,7 @@ async function rankedWithNature(ctx: Parameters<typeof rankStone>[0], readings: 
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "conclusions.propose");
   const submission = parseWithZod(await request.formData(), { schema: conclusionForm });
   if (submission.status !== "success") return formInvalid(submission);
   try {

@@ -30,6 +30,7 @@ import { compareCheckForm, decideCheckForm, startCheckForm } from "#app/features
 import { startSecondCheck } from "#app/features/second-checks/start-second-check.server.ts";
 import { getBench } from "#app/features/stones/get-bench.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -88,7 +89,7 @@ async function readable(ctx: Parameters<typeof getBench>[0], stoneCode: string) 
 
 
 export async function action({ request, context, params, url }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "secondChecks.do");
   const formData = await request.formData();
   const { stoneCode } = params;
   const page = `/lab/${params.labSlug}/stones/${stoneCode}/second-check`;

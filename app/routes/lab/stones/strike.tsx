@@ -15,6 +15,7 @@ import { readingConditions, readingSeenText, readingValueText } from "#app/featu
 import { strikeReading } from "#app/features/readings/strike-reading.server.ts";
 import { getBench } from "#app/features/stones/get-bench.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -29,7 +30,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "readings.record");
   const submission = parseWithZod(await request.formData(), { schema: strikeForm });
   if (submission.status !== "success") return formInvalid(submission);
   try {

@@ -25,6 +25,7 @@ import { saveValuation } from "#app/features/valuations/save-valuation.server.ts
 import { valuationDefaults } from "#app/features/valuations/valuation-defaults.ts";
 import { valuationForm } from "#app/features/valuations/valuation-forms.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -46,7 +47,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "valuations.write");
   const formData = await request.formData();
   const submission = parseWithZod(formData, { schema: valuationForm });
   if (submission.status !== "success") return formInvalid(submission);

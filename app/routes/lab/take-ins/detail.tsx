@@ -33,6 +33,7 @@ import { findItemForPhoto } from "#app/features/photos/find-item-for-photo.serve
 import { removePhoto } from "#app/features/photos/remove-photo.server.ts";
 import { getTakeIn } from "#app/features/take-ins/get-take-in.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -54,7 +55,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
 type Answer = { itemNumber: string; intent: string; result?: SubmissionResult<string[]>; problems?: string[] };
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "photos.add");
   const formData = await request.formData();
   const intent = String(formData.get("intent") ?? "");
   const itemNumber = String(formData.get("itemNumber") ?? "");

@@ -32,6 +32,7 @@ import { takeInForm } from "#app/features/take-ins/take-in-forms.server.ts";
 import { takeInItems } from "#app/features/take-ins/take-in-items.server.ts";
 import { mostItems } from "#app/features/take-ins/take-in-limits.ts";
 import { labContext } from "#app/web/contexts.server.ts";
+import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
@@ -62,7 +63,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const ctx = context.get(labContext);
+  const ctx = labContextFor(context, "takeIn.create");
   const formData = await request.formData();
   const typedName = String(formData.get("clientName") ?? "");
   const submission = parseWithZod(formData, { schema: takeInForm({ currency: ctx.laboratory.currency }) });
