@@ -2,13 +2,15 @@ import { logSumExp } from "../statistics/log-sum-exp.ts";
 import type { Lookalike, SpeciesForm, SpeciesNode, SpeciesTable } from "../species/species-table.ts";
 import { modelVersion, priorFloor, sharedOffset, unlistedPrior, verdictAt } from "./defaults.ts";
 import type { Evidence } from "./evidence.ts";
-import { birefringenceTerm, indexTerms } from "./index-terms.ts";
 import type { EvidenceLine, Ranking, Verdict } from "./ranking.ts";
-import { lookedAtTerms, opticCharacterTerm, opticSignTerm, sgTerm } from "./seen-terms.ts";
+import { compareIds } from "./compare-ids.ts";
 import type { Score, Term } from "./term.ts";
+import { termsOf } from "./terms-of.ts";
 
 export type RankOptions = Readonly<{ /** By how common a species is, or all alike. */ prior?: "prevalence" | "even" }>;
 
+/** Standard uncertainties beyond which nothing but a blunder explains a reading. */
+const farOut = 8;
 /** What is seen counts as a contradiction only when it is as good as impossible: eyes err. */
 const seenContradictsBelow = 0.004;
 /** Gauss–Hermite nodes and weights, 5 points, for a standard normal offset. */
@@ -61,22 +63,6 @@ export function rankSpecies(evidence: Evidence, table: SpeciesTable, { prior = "
   };
 }
 
-/** The observations of a piece of evidence in a fixed order, so that the order they came in cannot matter. */
-function termsOf(evidence: Evidence): Term[] {
-  return [
-    ...indexTerms(sorted(evidence.ri ?? []), { hasBirefringence: evidence.birefringence !== undefined }),
-    ...(evidence.birefringence ? [birefringenceTerm(evidence.birefringence)] : []),
-    ...(evidence.opticCharacter ? [opticCharacterTerm(evidence.opticCharacter)] : []),
-    ...(evidence.opticSign ? [opticSignTerm(evidence.opticSign)] : []),
-    ...(evidence.sg ? [sgTerm(evidence.sg)] : []),
-    ...lookedAtTerms(evidence),
-  ];
-}
-
-function sorted<T>(readings: readonly T[]): T[] {
-  return [...readings].sort((a, b) => compareIds(JSON.stringify(a), JSON.stringify(b)));
-}
-
 type Judged = { logLikelihood: number; best: SpeciesForm; bestScores: Score[]; contradiction: string | null };
 
 /** A species is the mixture of its forms; it is contradicted when every one of them is. */
@@ -92,8 +78,8 @@ function judge(node: SpeciesNode, terms: readonly Term[]): Judged {
     const scores = terms.map((term) => term.score(form, 0));
     let log = 0;
     for (const score of scores) log += score.logLikelihood;
-    if (form.isSeries) log += compositionGain(form, terms, scores);
-    else if (isShared) log += sharedOffsetGain(form, terms, scores);
+    // Far out, neither a shared error nor a composition brings a form back.
+    if ((form.isSeries || isShared) && scores.every(({ distance }) => Math.abs(distance) < farOut)) log += form.isSeries ? compositionGain(form, terms, scores) : sharedOffsetGain(form, terms, scores);
     logs.push(Math.log(form.share) + log);
     const against = terms.flatMap((term, index) => (contradicts(term, scores[index]!) ? [index] : []));
     const isAgainst = new Set(against.map((index) => independentKind(terms[index]!.property))).size > 1;
@@ -133,11 +119,22 @@ function compositionGain(form: SpeciesForm, terms: readonly Term[], scores: read
   terms.forEach((_, index) => {
     if (moves[index]) separate += scores[index]!.logLikelihood;
   });
-  const joint = compositions.map((share) => {
-    const there = atComposition(form, share);
+  const joint = alongComposition(form).map((there) => {
     return terms.reduce((sum, term, index) => (moves[index] ? sum + term.score(there, 0).logLikelihood : sum), -Math.log(compositions.length));
   });
   return logSumExp(joint) - separate;
+}
+
+/** A form's compositions are the same for every stone. */
+const formsAlong = new WeakMap<SpeciesForm, readonly SpeciesForm[]>();
+
+function alongComposition(form: SpeciesForm): readonly SpeciesForm[] {
+  let along = formsAlong.get(form);
+  if (!along) {
+    along = compositions.map((share) => atComposition(form, share));
+    formsAlong.set(form, along);
+  }
+  return along;
 }
 
 function atComposition(form: SpeciesForm, share: number): SpeciesForm {
@@ -168,7 +165,18 @@ function twoWorst(against: readonly number[], terms: readonly Term[], scores: re
 
 function lineOf(term: Term, node: SpeciesNode, best: SpeciesForm, score: Score): EvidenceLine {
   const verdict = verdictOf(term, score);
-  return { property: term.property, observed: term.observed, reference: term.reference(node.forms), logLikelihood: score.logLikelihood, verdict, because: because(term, best, score, verdict) };
+  return { property: term.property, observed: term.observed, reference: referenceOf(term, node), logLikelihood: score.logLikelihood, verdict, because: because(term, best, score, verdict) };
+}
+
+/** What the table says of a species in words does not depend on the stone. */
+const references = new WeakMap<SpeciesNode, Map<string, string>>();
+
+function referenceOf({ property, reference }: Term, node: SpeciesNode): string {
+  let known = references.get(node);
+  if (!known) references.set(node, (known = new Map()));
+  let words = known.get(property);
+  if (words === undefined) known.set(property, (words = reference(node.forms)));
+  return words;
 }
 
 function verdictOf(term: Term, score: Score): Verdict {
@@ -192,8 +200,4 @@ function inseparable(lookalikes: readonly Lookalike[], candidates: ReadonlyArray
     const left = speciesIds.filter((id) => (open.get(id) ?? 0) >= 0.005);
     return left.length >= 2 && left.some((id) => open.get(id)! >= 0.05) ? [{ speciesIds: left, settledBy }] : [];
   });
-}
-
-function compareIds(a: string, b: string): number {
-  return a < b ? -1 : a > b ? 1 : 0;
 }

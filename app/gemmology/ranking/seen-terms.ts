@@ -26,7 +26,7 @@ const characterNames: Readonly<Record<OpticCharacter, string>> = {
   aggregate: "aggregate",
 };
 const tabulatedNames: Readonly<Record<TabulatedCharacter, string>> = { isotropic: "singly refractive", amorphous: "singly refractive", uniaxial: "uniaxial", biaxial: "biaxial", aggregate: "aggregate" };
-/** What is seen rather than measured is dependent and subjective: it counts with half its weight. */
+/** Colour, pleochroism and fluorescence are subjective and hang together: they count with half their weight. */
 const half = 0.5;
 
 export function sgTerm({ value, u = defaultU.sg }: { value: number; u?: number }): Term {
@@ -64,19 +64,19 @@ export function opticSignTerm(observed: "+" | "-"): Term {
 /** Everything that is looked at rather than read from a scale. */
 export function lookedAtTerms(evidence: Evidence): Term[] {
   const terms: Term[] = [];
-  const inList = (property: string, observed: readonly string[], listOf: (form: SpeciesForm) => readonly string[], hit: number, miss: number) => {
+  const inList = (property: string, observed: readonly string[], listOf: (form: SpeciesForm) => readonly string[], { hit, miss, exponent = 1 }: { hit: number; miss: number; exponent?: number }) => {
     if (observed.length === 0) return;
     const words = observed.map((word) => word.toLowerCase());
     terms.push({
       ...seenTerm(property, observed.join(", "), Math.sqrt(hit * miss)),
-      score: (form) => probable(words.some((word) => listOf(form).some((known) => sameWord(word, known))) ? hit : miss, half),
+      score: (form) => probable(words.some((word) => listOf(form).some((known) => sameWord(word, known))) ? hit : miss, exponent),
       reference: (forms) => summary(forms.flatMap((form) => listOf(form))),
     });
   };
-  inList("colour", evidence.colour ?? [], ({ colours }) => colours, 0.85, 0.15);
-  inList("transparency", evidence.transparency ? [evidence.transparency] : [], ({ transparency }) => transparency, 0.9, 0.1);
-  inList("lustre", evidence.lustre ? [evidence.lustre] : [], ({ lustre }) => lustre, 0.8, 0.2);
-  inList("phenomena", (evidence.phenomena ?? []).filter((each) => each !== "none"), ({ phenomena }) => phenomena, 0.8, 0.03);
+  inList("colour", evidence.colour ?? [], ({ colours }) => colours, { hit: 0.85, miss: 0.15, exponent: half });
+  inList("transparency", evidence.transparency ? [evidence.transparency] : [], ({ transparency }) => transparency, { hit: 0.9, miss: 0.05 });
+  inList("lustre", evidence.lustre ? [evidence.lustre] : [], ({ lustre }) => lustre, { hit: 0.8, miss: 0.2 });
+  inList("phenomena", (evidence.phenomena ?? []).filter((each) => each !== "none"), ({ phenomena }) => phenomena, { hit: 0.8, miss: 0.03 });
   if (evidence.pleochroism) {
     const observed = { none: 0, weak: 1, moderate: 2, strong: 3 }[evidence.pleochroism.strength];
     terms.push({

@@ -1,3 +1,4 @@
+import { testHarm } from "./test-harm.ts";
 import type { LookalikeRow, NodeRow, Range, SpeciesRow, TabulatedCharacter } from "./species-row.ts";
 import type { Interval, Lookalike, SpeciesForm, SpeciesNode, SpeciesTable } from "./species-table.ts";
 
@@ -32,6 +33,9 @@ function nodeOf(node: NodeRow, rows: readonly SpeciesRow[]): SpeciesNode {
   return { id: node.id, name: node.name, weight: Math.max(...weights), forms: rows.map((row, index) => formOf(row, weights[index]! / sum)) };
 }
 
+/** Of the tests that can do harm, those that a bench offers at all. */
+const benchTests = ["contactLiquid", "immersion", "water", "heavyLiquid", "ultraviolet", "thermalProbe"] as const;
+
 /** Mixed crystals of a light and a heavy end member (Deer, Howie and Zussman, An Introduction to the Rock-Forming Minerals). */
 const seriesGroups = new Set(["garnet", "tourmaline", "olivine", "pyroxene", "scapolite", "epidote"]);
 const seriesRows = new Set(["spinel-gahnospinel", "spinel-black", "spinel-blue", "feldspar-albite", "feldspar-oligoclase-sunstone", "feldspar-andesine", "feldspar-labradorite", "feldspar-bytownite"]);
@@ -42,6 +46,7 @@ function formOf(row: SpeciesRow, share: number): SpeciesForm {
   const { ri } = row;
   const single = ri?.n;
   const [low, high] = ri?.alpha && ri.gamma ? ([ri.alpha, ri.gamma] as const) : ri?.omega && ri.epsilon ? byIndex(ri.omega, ri.epsilon) : ([single, single] as const);
+  const harm = testHarm(row);
   const strengths = { none: 0, weak: 1, distinct: 2, strong: 3 } as const;
   return {
     id: row.id,
@@ -72,6 +77,7 @@ function formOf(row: SpeciesRow, share: number): SpeciesForm {
     filterRed: row.colour_filter ? Object.values(row.colour_filter).some((look) => /red|pink/.test(look) && !/no red|not red/.test(look)) : null,
     thermal: row.thermal,
     phenomena: row.phenomena.map((phenomenon) => phenomenon.toLowerCase()),
+    harmedBy: benchTests.filter((test) => harm[test] >= 1),
     isSeries: row.kind === "natural" && (seriesGroups.has(row.group) || seriesRows.has(row.id)),
   };
 }

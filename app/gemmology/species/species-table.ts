@@ -1,3 +1,4 @@
+import type { HarmfulTest } from "./test-harm.ts";
 import type { SpeciesKind, TabulatedCharacter } from "./species-row.ts";
 
 /** A closed interval, low ≤ high. */
@@ -40,6 +41,8 @@ export type SpeciesForm = Readonly<{
   phenomena: readonly string[];
   /** A member of a solid solution, whose index and density rise together with composition. */
   isSeries: boolean;
+  /** Tests of the bench that can damage it. */
+  harmedBy: readonly HarmfulTest[];
 }>;
 
 export type SpeciesNode = Readonly<{ id: string; name: string; /** Prior weight by prevalence, before normalising. */ weight: number; forms: readonly SpeciesForm[] }>;
