@@ -1,18 +1,20 @@
 import { requireRange } from "../require-range.ts";
 
 /**
- * How deep something seems to lie that is so deep in a stone, seen straight down from air.
+ * Depth at which something under a plane face seems to lie, seen straight down.
  *
- *   d_seen = d √(1 − NA²) / √(n² − NA²)
+ * @param realMm real depth, mm, > 0
+ * @param n index above what is seen, in [1, 4]
+ * @param nObserver index on the observer's side, in [1, 4]; air is 1
+ * @returns mm, by rays near the normal
+ * @throws RangeError when an argument leaves its range
  *
- * @param numericalAperture of the objective; 0 for the eye
- * @throws RangeError
- *
- * Source: Snell's law for the marginal ray.
+ * Source: Snell's law for small angles, standard optics.
+ * @example apparentDepthMm({ realMm: 4.12, n: 1.768 }) // ≈ 2.33
  */
-export function apparentDepthMm({ realMm, n, numericalAperture = 0 }: { realMm: number; n: number; numericalAperture?: number }): number {
-  requireRange("realMm", realMm, realMm >= 0);
+export function apparentDepthMm({ realMm, n, nObserver = 1 }: { realMm: number; n: number; nObserver?: number }): number {
+  requireRange("realMm", realMm, realMm > 0);
   requireRange("n", n, n >= 1 && n <= 4);
-  requireRange("numericalAperture", numericalAperture, numericalAperture >= 0 && numericalAperture < 1);
-  return (realMm * Math.sqrt(1 - numericalAperture ** 2)) / Math.sqrt(n ** 2 - numericalAperture ** 2);
+  requireRange("nObserver", nObserver, nObserver >= 1 && nObserver <= 4);
+  return (realMm * nObserver) / n;
 }

@@ -1,37 +1,45 @@
 import { requireRange } from "../require-range.ts";
-
-/** A published dispersion formula; the numbers mean what its type says, with wavelengths in micrometres. */
-export type DispersionFormula = Readonly<{ formulaType: string; coefficients: readonly number[]; rangeUm: readonly number[] }>;
+import type { DispersionFormula } from "./dispersion-formula.ts";
 
 /**
- * Index at a wavelength by a published formula.
+ * Index of a material at a wavelength, by its dispersion formula.
  *
- *   formula 1 (Sellmeier)   n² − 1 = c₁ + Σ b L²/(L² − c²)
- *   formula 2 (Sellmeier)   n² − 1 = c₁ + Σ b L²/(L² − c)
- *   formula 4               n² = c₁ + b₁ L^e₁/(L² − d₁^f₁) + b₂ L^e₂/(L² − d₂^f₂) + Σ b L^c
+ * @param nm wavelength in air, nm, within the formula's range
+ * @returns the index, unrounded
+ * @throws RangeError when the wavelength leaves the formula's range, or the formula gives no index above 1 there
  *
- * @param nm wavelength in nanometres
- * @throws RangeError outside the formula's range, or for a type that is not there
- *
- * Source: each formula's own, kept beside its numbers.
+ * Source: W. Sellmeier, Annalen der Physik 219 (1871) 272; A. L. Cauchy's formula as in standard optics; a cubic by
+ * Lagrange for tables. Coefficients are the caller's and carry their own source.
+ * @example indexAtWavelength({ kind: "sellmeier", fromNm: 226, toNm: 760, constant: 1, terms: [{ strength: 0.3306, pole: 0.175 ** 2 }, { strength: 4.3356, pole: 0.106 ** 2 }] }, 589.3) // ≈ 2.4173, diamond
  */
-export function indexAtWavelength({ formulaType, coefficients, rangeUm }: DispersionFormula, nm: number): number {
-  const L = nm / 1000;
-  requireRange("nm", nm, L >= rangeUm[0]! && L <= rangeUm[1]!);
-  const [first = 0, ...rest] = coefficients;
-  const pairs = (from: readonly number[]) => Array.from({ length: Math.floor(from.length / 2) }, (_, at) => [from[2 * at]!, from[2 * at + 1]!] as const);
-  const sum = (terms: readonly number[]) => terms.reduce((total, term) => total + term, 0);
-  switch (formulaType) {
-    case "formula 1":
-      return Math.sqrt(1 + first + sum(pairs(rest).map(([b, c]) => (b * L ** 2) / (L ** 2 - c ** 2))));
-    case "formula 2":
-      return Math.sqrt(1 + first + sum(pairs(rest).map(([b, c]) => (b * L ** 2) / (L ** 2 - c))));
-    case "formula 4": {
-      const [b1 = 0, e1 = 0, d1 = 0, f1 = 1, b2 = 0, e2 = 0, d2 = 0, f2 = 1, ...others] = rest;
-      const term = (b: number, e: number, d: number, f: number) => (b === 0 ? 0 : (b * L ** e) / (L ** 2 - d ** f));
-      return Math.sqrt(first + term(b1, e1, d1, f1) + term(b2, e2, d2, f2) + sum(pairs(others).map(([b, c]) => b * L ** c)));
+export function indexAtWavelength(formula: DispersionFormula, nm: number): number {
+  requireRange("nm", nm, nm >= formula.fromNm && nm <= formula.toNm);
+  const n = indexBy(formula, nm);
+  requireRange(`n at ${nm} nm`, n, n >= 1);
+  return n;
+}
+
+function indexBy(formula: DispersionFormula, nm: number): number {
+  const um = nm / 1000;
+  const square = um * um;
+  switch (formula.kind) {
+    case "sellmeier":
+      return Math.sqrt(formula.terms.reduce((sum, { strength, pole }) => sum + (strength * square) / (square - pole), formula.constant));
+    case "cauchy":
+      return formula.a + formula.b / square;
+    case "powers": {
+      const resonant = formula.resonances.reduce((sum, { strength, power, pole }) => sum + (strength * um ** power) / (square - pole), formula.constant);
+      return Math.sqrt(formula.powers.reduce((sum, { strength, power }) => sum + strength * um ** power, resonant));
     }
-    default:
-      throw new RangeError(`formulaType out of range: ${formulaType}`);
+    case "table":
+      return cubicThrough(formula.points, nm);
   }
+}
+
+function cubicThrough(points: Extract<DispersionFormula, { kind: "table" }>["points"], nm: number): number {
+  requireRange("points of the table", points.length, points.length >= 4);
+  const next = points.findIndex((point) => point.nm >= nm);
+  const first = Math.min(Math.max(next - 2, 0), points.length - 4);
+  const four = points.slice(first, first + 4);
+  return four.reduce((sum, { nm: at, n }) => sum + four.reduce((weight, other) => (other.nm === at ? weight : (weight * (nm - other.nm)) / (at - other.nm)), n), 0);
 }

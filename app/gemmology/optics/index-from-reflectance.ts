@@ -1,21 +1,22 @@
 import { requireRange } from "../require-range.ts";
 
 /**
- * Index from the share of light that one polished surface throws back at normal incidence in air.
+ * Index from the share of light that one polished face sends back at normal incidence. Coatings, scratches and light from
+ * faces behind bias it beyond the uncertainty; infrared reflectance gives the infrared index.
  *
- *   n = (1 + √R) / (1 − √R),   dn/dR = 1 / (√R (1 − √R)²)
+ * @param reflectance 0 to below 1, of one face in air
+ * @param uReflectance standard uncertainty of it, ≥ 0
+ * @returns the index, above 1, and its standard uncertainty, dimensionless, unrounded
+ * @throws RangeError when an argument leaves its range, or the index would exceed 4
  *
- * Holds for a transparent stone without a coating.
- *
- * @param reflectance R, above 0 and below 0.4
- * @param u its standard uncertainty
- * @throws RangeError
- *
- * Source: Fresnel's equations; propagation by JCGM 100:2008.
+ * Source: Fresnel's equations at normal incidence, solved for n; propagation by JCGM 100:2008, 5.1.2.
+ * @example indexFromReflectance({ reflectance: 0.1719 }).n // ≈ 2.417
  */
-export function indexFromReflectance({ reflectance, u = 0.005 }: { reflectance: number; u?: number }): { n: number; u: number } {
-  requireRange("reflectance", reflectance, reflectance > 0 && reflectance < 0.4);
-  requireRange("u", u, u >= 0);
-  const root = Math.sqrt(reflectance);
-  return { n: (1 + root) / (1 - root), u: u / (root * (1 - root) ** 2) };
+export function indexFromReflectance({ reflectance, uReflectance = 0.005 }: { reflectance: number; uReflectance?: number }): { n: number; u: number } {
+  requireRange("reflectance", reflectance, reflectance > 0 && reflectance < 1);
+  requireRange("uReflectance", uReflectance, uReflectance >= 0);
+  const amplitude = Math.sqrt(reflectance);
+  const n = (1 + amplitude) / (1 - amplitude);
+  requireRange("n", n, n <= 4);
+  return { n, u: uReflectance / (amplitude * (1 - amplitude) ** 2) };
 }

@@ -1,17 +1,16 @@
-import { edgeIndices, upperVibrationDeg, type PrincipalIndices } from "./edge-indices.ts";
-import { polariserUDeg, type RotationRun } from "./rotation-run.ts";
+import { edgesAtTilt, edgesWithTilt, facetView, sheetsOf, upperVibrationDeg, type PrincipalIndices, type TiltedEdges } from "./edge-indices.ts";
+import { deviations, type Observed } from "./observed.ts";
 import { turned, type Orientation } from "./vector.ts";
 
 /** How many different principal indices: 1 isotropic, 2 uniaxial (along axes 1 and 2, then 3), 3 biaxial. */
 export type Rank = 1 | 2 | 3;
 export type Crystal = Readonly<{ rank: Rank; free: readonly number[]; axes: readonly Orientation[] }>;
-export type EdgeName = "upper" | "lower" | "polariser";
-export type Residual = Readonly<{ facet: number; reading: number; edge: EdgeName; /** Observed less computed, in standard uncertainties. */ value: number; u: number }>;
 
 /** A uniaxial crystal does not change when it turns about its axis, an isotropic one in no way. */
-const turnsOf: Readonly<Record<Rank, number>> = { 1: 0, 2: 2, 3: 3 };
+export const turnsOf: Readonly<Record<Rank, number>> = { 1: 0, 2: 2, 3: 3 };
 
 export const principalOf = ({ rank, free }: Pick<Crystal, "rank" | "free">): PrincipalIndices => (rank === 1 ? [free[0]!, free[0]!, free[0]!] : rank === 2 ? [free[0]!, free[0]!, free[1]!] : [free[0]!, free[1]!, free[2]!]);
+export const inOrder = (crystal: Pick<Crystal, "rank" | "free">) => [...principalOf(crystal)].sort((a, b) => a - b) as [number, number, number];
 export const parameterCount = ({ rank, axes }: Pick<Crystal, "rank" | "axes">) => rank + axes.length * turnsOf[rank];
 
 /** The crystal with its parameters moved: first its indices, then each facet's orientation by a small turn. */
@@ -24,24 +23,32 @@ export function moved(crystal: Crystal, step: readonly number[]): Crystal {
   };
 }
 
-/** What was read against what the crystal would show, every edge and azimuth once, always in the same order. */
-export function residualsOf(crystal: Crystal, { facets }: RotationRun): Residual[] {
-  const indices = principalOf(crystal);
-  const residuals: Residual[] = [];
-  facets.forEach(({ readings }, facet) => {
-    const axes = crystal.axes[facet]!;
-    readings.forEach(({ angleDeg, upper, lower, u, polariserDeg }, reading) => {
-      const shown = edgeIndices(indices, axes, angleDeg);
-      if (upper !== null) residuals.push({ facet, reading, edge: "upper", value: (upper - shown.upper) / u, u });
-      if (lower !== null) residuals.push({ facet, reading, edge: "lower", value: (lower - shown.lower) / u, u });
-      if (polariserDeg !== null && crystal.rank > 1) residuals.push({ facet, reading, edge: "polariser", value: halfTurn(polariserDeg - upperVibrationDeg(indices, axes, angleDeg)) / polariserUDeg, u: polariserUDeg });
-    });
-  });
-  return residuals;
+/** What the crystal shows at every position, and how far the readings are from it. */
+export type Shown = Readonly<{ edges: readonly TiltedEdges[]; residuals: readonly (readonly number[])[] }>;
+
+export function shownOf(crystal: Crystal, { positions }: Observed): Shown {
+  const sheets = sheetsOf(principalOf(crystal));
+  const edges = positions.map(({ facet, angleDeg }) => edgesWithTilt(sheets, facetView(crystal.axes[facet]!, angleDeg)));
+  return { edges, residuals: positions.map((position, at) => deviations(position, edges[at]!, vibration(crystal, position))) };
 }
 
-/** A difference of directions without arrow: −90° up to 90°. */
-export function halfTurn(deg: number): number {
-  const folded = ((deg % 180) + 180) % 180;
-  return folded > 90 ? folded - 180 : folded;
+/**
+ * The residuals of a crystal near one whose tilts are known. An edge is a maximum over the tilt, so that it does not
+ * change with the tilt to the first order: for derivatives this is exact.
+ *
+ * @param facet where only one facet's crystal was turned, that facet; the others' residuals come back empty
+ */
+export function residualsNear(crystal: Crystal, { positions }: Observed, { edges }: Shown, facet: number | null): readonly (readonly number[])[] {
+  const sheets = sheetsOf(principalOf(crystal));
+  return positions.map((position, at) => (facet !== null && position.facet !== facet ? [] : deviations(position, edgesAtTilt(sheets, facetView(crystal.axes[position.facet]!, position.angleDeg), edges[at]!), vibration(crystal, position))));
+}
+
+function vibration(crystal: Crystal, { facet, angleDeg, polariserDeg }: { facet: number; angleDeg: number; polariserDeg: number | null }): number | null {
+  return polariserDeg === null || crystal.rank === 1 ? null : upperVibrationDeg(principalOf(crystal), crystal.axes[facet]!, angleDeg);
+}
+
+/** The facet's crystal as a mirror in the facet shows it: it has the same edges, and vibrations on the other side of the normal. */
+export function mirrored(axes: Orientation): Orientation {
+  // All three axes mirrored would be left-handed; an axis has no arrow, so one of them is turned round.
+  return [[axes[0][0], axes[0][1], -axes[0][2]], [axes[1][0], axes[1][1], -axes[1][2]], [-axes[2][0], -axes[2][1], axes[2][2]]];
 }

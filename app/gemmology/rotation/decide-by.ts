@@ -1,5 +1,6 @@
 import { edgeIndices, upperVibrationDeg } from "./edge-indices.ts";
-import { halfTurn, principalOf, type Crystal } from "./crystal-model.ts";
+import { inOrder, principalOf, type Crystal } from "./crystal-model.ts";
+import { halfTurn } from "./observed.ts";
 import { polariserUDeg, type RotationRun } from "./rotation-run.ts";
 import { cross, unit, type Orientation, type Vector } from "./vector.ts";
 
@@ -8,29 +9,35 @@ const leanDeg = 40;
 const degree = Math.PI / 180;
 
 /** Between two crystals that show one facet the same edges: the polariser at which rotation, or else which second facet. */
-export function decideBetween(first: Crystal, second: Crystal, run: RotationRun, nameOf: (crystal: Crystal) => string): string {
+export function decideBetween(first: Crystal, second: Crystal, run: RotationRun): string {
   const polariser = bestPolariser(first, second, run);
   const facet = bestSecondFacet(first, second);
   const sentences: string[] = [];
   if (polariser.apartDeg > 3 * polariserUDeg) {
     sentences.push(
-      `Turn the ${polariser.facet} to ${polariser.angleDeg}° and find the polariser's azimuth at which the upper edge is strongest: ${Math.round(polariser.firstDeg)}° from the normal means ${nameOf(first)}, ${Math.round(polariser.secondDeg)}° means ${nameOf(second)}.`,
+      `Turn the ${polariser.facet} to ${polariser.angleDeg}° and find the polariser's azimuth at which the upper edge is strongest: ${Math.round(polariser.firstDeg)}° to either side of the normal means ${nameOf(first)}, ${Math.round(polariser.secondDeg)}° means ${nameOf(second)}.`,
     );
   }
   if (facet.apart > 0.0005) sentences.push(`${sentences.length > 0 ? "Or read" : "Read"} a second facet that leans by about ${leanDeg}° towards ${facet.azimuthDeg}° of this run: the value that both runs share is β.`);
   return sentences.join(" ") || "The polariser and a second facet would hardly differ here: look for the interference figure.";
 }
 
-function bestPolariser(first: Crystal, second: Crystal, { facets }: RotationRun) {
+/**
+ * The rotation at which the two upper edges vibrate most differently. A crystal and its mirror image show the same edges,
+ * so that only the angle to the normal counts, to whichever side.
+ */
+export function bestPolariser(first: Crystal, second: Crystal, { facets }: RotationRun) {
   let best = { facet: facets[0]!.label, angleDeg: 0, firstDeg: 0, secondDeg: 0, apartDeg: -1 };
+  const [one, other] = [principalOf(first), principalOf(second)];
+  const widest = inOrder(first)[2] - inOrder(first)[0];
   facets.forEach(({ label }, at) => {
-    for (let angleDeg = 0; angleDeg < 180; angleDeg += 5) {
-      const indices = [principalOf(first), principalOf(second)] as const;
-      const edges = edgeIndices(indices[0], first.axes[at]!, angleDeg);
-      if (edges.upper - edges.lower < 0.001) continue; // the edges nearly touch: nothing vanishes cleanly
-      const [firstDeg, secondDeg] = [upperVibrationDeg(indices[0], first.axes[at]!, angleDeg), upperVibrationDeg(indices[1], second.axes[at]!, angleDeg)];
-      const apartDeg = Math.abs(halfTurn(firstDeg - secondDeg));
-      if (apartDeg > best.apartDeg + 0.5) best = { facet: label, angleDeg, firstDeg, secondDeg, apartDeg };
+    for (let angleDeg = 0; angleDeg < 180; angleDeg += 1) {
+      const edges = edgeIndices(one, first.axes[at]!, angleDeg);
+      // Where the edges nearly touch nothing vanishes cleanly.
+      if (edges.upper - edges.lower < Math.max(0.001, 0.25 * widest)) continue;
+      const [firstDeg, secondDeg] = [Math.abs(halfTurn(upperVibrationDeg(one, first.axes[at]!, angleDeg))), Math.abs(halfTurn(upperVibrationDeg(other, second.axes[at]!, angleDeg)))];
+      const apartDeg = Math.abs(firstDeg - secondDeg);
+      if (apartDeg > best.apartDeg + 0.05) best = { facet: label, angleDeg, firstDeg, secondDeg, apartDeg };
     }
   });
   return best;
@@ -38,7 +45,7 @@ function bestPolariser(first: Crystal, second: Crystal, { facets }: RotationRun)
 
 /** Over leaning facets, the azimuth at which neither crystal's second pair of values holds the other's β. */
 function bestSecondFacet(first: Crystal, second: Crystal) {
-  const betaOf = (crystal: Crystal) => [...principalOf(crystal)].sort((a, b) => a - b)[1]!;
+  const betaOf = (crystal: Crystal) => inOrder(crystal)[1];
   let best = { azimuthDeg: 0, apart: -1 };
   for (let azimuthDeg = 0; azimuthDeg < 360; azimuthDeg += 30) {
     const apart = Math.min(furthest(first, azimuthDeg, betaOf(second)), furthest(second, azimuthDeg, betaOf(first)));
@@ -64,4 +71,9 @@ function leaning(axes: Orientation, azimuthDeg: number): Orientation {
   const x = unit(cross([0, 1, 0], normal));
   const frame = [x, cross(normal, x), normal] as const;
   return axes.map((axis): Vector => [axis[0] * frame[0][0] + axis[1] * frame[0][1] + axis[2] * frame[0][2], axis[0] * frame[1][0] + axis[1] * frame[1][1] + axis[2] * frame[1][2], axis[0] * frame[2][0] + axis[1] * frame[2][1] + axis[2] * frame[2][2]]) as unknown as Orientation;
+}
+
+function nameOf(crystal: Crystal): string {
+  if (crystal.rank === 2) return `a uniaxial crystal with ω ${crystal.free[0]!.toFixed(4)}`;
+  return `a biaxial crystal with β ${inOrder(crystal)[1].toFixed(4)}`;
 }

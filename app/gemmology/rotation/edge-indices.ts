@@ -19,11 +19,31 @@ const degree = Math.PI / 180;
  * Source: derived from Maxwell's equations; agrees with the number of real normal wave vectors of Booker's quartic.
  */
 export function edgeIndices(indices: PrincipalIndices, axes: Orientation, angleDeg: number): EdgePair {
+  const { upper, lower } = edgesWithTilt(sheetsOf(indices), facetView(axes, angleDeg));
+  return { upper, lower };
+}
+
+/** Both index sheets over a wave normal in crystal axes: larger index, smaller index. */
+export type Sheets = (wave: Vector) => readonly [number, number];
+/** In crystal axes: the direction along the prism, and the facet's normal. */
+export type FacetView = Readonly<{ along: Vector; normal: Vector }>;
+/** Edges with the tilt ψ of the wave normal (radians, towards the facet's normal) at which each stands. */
+export type TiltedEdges = EdgePair & Readonly<{ upperTilt: number; lowerTilt: number }>;
+
+export function facetView(axes: Orientation, angleDeg: number): FacetView {
   const s: Vector = [Math.cos(angleDeg * degree), Math.sin(angleDeg * degree), 0];
-  const along: Vector = [dot(s, axes[0]), dot(s, axes[1]), dot(s, axes[2])];
-  const normal: Vector = [axes[0][2], axes[1][2], axes[2][2]];
-  const sheets = sheetsOf(indices);
-  return { upper: highest((psi) => sheets(wave(along, normal, psi))[0] * Math.cos(psi)), lower: highest((psi) => sheets(wave(along, normal, psi))[1] * Math.cos(psi)) };
+  return { along: [dot(s, axes[0]), dot(s, axes[1]), dot(s, axes[2])], normal: [axes[0][2], axes[1][2], axes[2][2]] };
+}
+
+export function edgesWithTilt(sheets: Sheets, { along, normal }: FacetView): TiltedEdges {
+  const [upper, upperTilt] = highest((psi) => sheets(wave(along, normal, psi))[0] * Math.cos(psi));
+  const [lower, lowerTilt] = highest((psi) => sheets(wave(along, normal, psi))[1] * Math.cos(psi));
+  return { upper, lower, upperTilt, lowerTilt };
+}
+
+/** What the edges would be if they stood at given tilts: near their own tilts right to the second order. */
+export function edgesAtTilt(sheets: Sheets, { along, normal }: FacetView, { upperTilt, lowerTilt }: Pick<TiltedEdges, "upperTilt" | "lowerTilt">): EdgePair {
+  return { upper: sheets(wave(along, normal, upperTilt))[0] * Math.cos(upperTilt), lower: sheets(wave(along, normal, lowerTilt))[1] * Math.cos(lowerTilt) };
 }
 
 /** Upper and lower index of the section of the indicatrix across a wave normal (in crystal axes): the wave-normal approximation of the edges. */
@@ -57,7 +77,7 @@ const wave = (along: Vector, normal: Vector, psi: number): Vector => {
 };
 
 /** Impermeabilities less their mean keep every digit where the two sheets nearly touch. */
-function sheetsOf(indices: PrincipalIndices): (w: Vector) => readonly [number, number] {
+export function sheetsOf(indices: PrincipalIndices): Sheets {
   const a = indices.map((n) => 1 / (n * n));
   const mean = (a[0]! + a[1]! + a[2]!) / 3;
   const [p, q, r] = [a[0]! - mean, a[1]! - mean, a[2]! - mean];
@@ -70,7 +90,7 @@ function sheetsOf(indices: PrincipalIndices): (w: Vector) => readonly [number, n
 }
 
 /** The largest value near ψ = 0: by parabolas, or by golden section where two sheets meet and there is a kink. */
-function highest(f: (psi: number) => number): number {
+function highest(f: (psi: number) => number): readonly [value: number, psi: number] {
   let psi = 0;
   let step = 0.02;
   for (let turn = 0; turn < 4; turn++) {
@@ -80,7 +100,7 @@ function highest(f: (psi: number) => number): number {
     const move = (step * (left - right)) / (2 * curvature);
     if (Math.abs(move) > 0.3) break;
     psi += move;
-    if (turn >= 1 && Math.abs(move) < 1e-6) return f(psi);
+    if (turn >= 1 && Math.abs(move) < 1e-6) return [f(psi), psi];
     step = 1e-3;
   }
   const golden = (Math.sqrt(5) - 1) / 2;
@@ -98,5 +118,5 @@ function highest(f: (psi: number) => number): number {
       fRight = f(right);
     }
   }
-  return Math.max(fLeft, fRight);
+  return fLeft > fRight ? [fLeft, left] : [fRight, right];
 }

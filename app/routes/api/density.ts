@@ -1,15 +1,17 @@
 import { hydrostaticDensity } from "#app/gemmology/density/hydrostatic-density.ts";
 import { parseWeighing } from "#app/gemmology/density/parse-weighing.ts";
+import { weighingWarning } from "#app/gemmology/density/weighing-warning.ts";
 import { apiDoor } from "#app/web/api-door.server.ts";
 import { problem } from "#app/web/problem.server.ts";
 import type { Route } from "./+types/density";
 
-/** `POST /api/v1/density`: one weighing in, the density with its uncertainty and budget out. */
+/** `POST /api/v1/density`: one weighing in, the density with its uncertainty and budget out, and a warning where the stone is too small for the balance. */
 export function action({ request, context }: Route.ActionArgs) {
   return apiDoor({ request, context }, (value) => {
     const parsed = parseWeighing(value);
     if (!parsed.ok) return problem({ status: 422, title: "Weighing not understood", detail: parsed.errors.map(({ path, message }) => `${path || "weighing"} ${message}`).join("; "), errors: parsed.errors });
-    return Response.json(hydrostaticDensity(parsed.weighing), { headers: { "Cache-Control": "no-store" } });
+    const result = hydrostaticDensity(parsed.weighing);
+    return Response.json({ ...result, warning: weighingWarning({ massAirCt: parsed.weighing.massAirCt, result }) }, { headers: { "Cache-Control": "no-store" } });
   });
 }
 

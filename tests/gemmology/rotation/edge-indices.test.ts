@@ -2,7 +2,7 @@ import fc from "fast-check";
 import { expect, test } from "vitest";
 import worked from "#fixtures/worked/rotation-examples.json" with { type: "json" };
 import { edgeIndices, sectionIndices, upperVibrationDeg, type PrincipalIndices } from "#app/gemmology/rotation/edge-indices.ts";
-import { halfTurn } from "#app/gemmology/rotation/crystal-model.ts";
+import { halfTurn } from "#app/gemmology/rotation/observed.ts";
 import { dot, type Vector } from "#app/gemmology/rotation/vector.ts";
 import { onFacet } from "./a-rotation-run.ts";
 
