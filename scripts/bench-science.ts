@@ -3,6 +3,8 @@ import { loadSpeciesTable } from "#app/features/species/load-species-table.serve
 import { parseEvidence } from "#app/gemmology/ranking/parse-evidence.ts";
 import { rankSpecies } from "#app/gemmology/ranking/rank-species.ts";
 import { fitRotation } from "#app/gemmology/rotation/fit-rotation.ts";
+import { benchTestIds, type BenchTestId } from "#app/gemmology/next-test/bench-test.ts";
+import { nextTests } from "#app/gemmology/next-test/next-tests.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
 import rotation from "#fixtures/worked/rotation-examples.json" with { type: "json" };
 import { evidenceOf, type PublishedStone } from "./accuracy/published-stone.ts";
@@ -32,6 +34,9 @@ const say = (what: string, sorted: readonly number[], aim: string) =>
 
 const ranking = times(stones, (evidence) => rankSpecies(evidence, table), { rounds: 20, warm: 10 });
 say(`one stone against ${table.nodes.length} species`, ranking, "median under 1 ms");
+const openBench = { massCt: 3, uAirCt: 0.0015, uWaterCt: 0.004, isPolished: true, offered: new Set(benchTestIds), done: new Set<BenchTestId>(), poor: new Set<BenchTestId>(), barred: new Map<BenchTestId, string>() };
+const ranked = stones.map((evidence) => rankSpecies(evidence, table).candidates);
+say("what to test next", times(ranked, (candidates) => nextTests(candidates, table, openBench), { rounds: 5 }), "under 15 ms");
 say("one rotation run of 12 positions", times(runs, fitRotation, { rounds: 10 }), "under 20 ms");
 
 const startedAt = performance.now();

@@ -100,15 +100,13 @@ test("stated 95 % intervals hold the truth in 93 to 97 % of random crystals, fac
   const { even, normal } = randomFrom(2_026);
   const runs = sized({ always: 700, whole: 5_000 });
   const held = { alpha: 0, beta: 0, gamma: 0 };
-  let [found, slowestMs] = [0, 0];
+  let found = 0;
   for (let at = 0; at < runs; at++) {
     const alpha = 1.5 + 0.2 * even();
     const truth: PrincipalIndices = [alpha, alpha + 0.004 + 0.02 * even(), 0];
     const indices: PrincipalIndices = [truth[0], truth[1], truth[1] + 0.004 + 0.02 * even()];
     const facet = aFacet(indices, onFacet([normal(), normal(), normal()]), { u: 0.0003 + 0.0007 * even(), noise: normal });
-    const startedAt = performance.now();
     const fit: RotationFit = fitRotation({ facets: [facet] });
-    if (at > 20) slowestMs = Math.max(slowestMs, performance.now() - startedAt);
     const best = fit.solutions.filter(({ character }) => character === "biaxial").sort((a, b) => Math.abs(sorted(a)[1]! - indices[1]) - Math.abs(sorted(b)[1]! - indices[1]))[0];
     if (!best) continue;
     found++;
