@@ -15,6 +15,7 @@ export function algebraicStart(pairs: readonly Pair[]): Start[] {
   if (apart.size < 3) return [];
   const middle = pairs.reduce((sum, { upper, lower }) => sum + upper ** -2 + lower ** -2, 0) / (2 * pairs.length);
   return crystalsOf({
+    power: -2,
     middle,
     s: harmonics(pairs, ({ upper, lower }) => upper ** -2 - middle + (lower ** -2 - middle)),
     p: harmonics(pairs, ({ upper, lower }) => (upper ** -2 - middle) * (lower ** -2 - middle)),

@@ -1,11 +1,12 @@
 import { algebraicStart } from "./algebraic-start.ts";
 import { inOrder, principalOf, type Crystal } from "./crystal-model.ts";
 import { distinctMinima } from "./distinct-minima.ts";
-import { edgeIndices, type PrincipalIndices } from "./edge-indices.ts";
+import { bestTurn } from "./best-turn.ts";
+import type { PrincipalIndices } from "./edge-indices.ts";
 import type { Observed, Position } from "./observed.ts";
 import { refine, type Refined } from "./refine.ts";
-import { crystalsOf, harmonicsOf } from "./section-harmonics.ts";
-import { turned, type Orientation } from "./vector.ts";
+import { twinsOf } from "./twins-of.ts";
+import type { Orientation } from "./vector.ts";
 
 const mostMinima = 4;
 const mostJoint = 4;
@@ -40,15 +41,8 @@ function minimaOfFacet(positions: readonly Position[]): Refined[] {
   const isComplete = pairs.length === positions.length && pairs.length >= 6;
   const starts = algebraicStart(pairs).map(({ indices, axes }): Crystal => ({ rank: 3, free: indices, axes: [axes] }));
   const found = distinctMinima([...starts, ...(isComplete && starts.length > 0 ? [] : guesses(positions))].map((start) => refine(start, observed)));
-  // What shows the same sections as a crystal that was found is a minimum as well, or near one.
-  const twins = found.slice(0, 2).flatMap(({ crystal }) => {
-    const indices = principalOf(crystal);
-    const [, beta] = inOrder(crystal);
-    return crystalsOf(harmonicsOf({ indices, axes: crystal.axes[0]! }))
-      .filter((twin) => Math.abs(twin.indices[1] - beta) > 1e-5)
-      .map((twin) => refine({ rank: 3, free: twin.indices, axes: [twin.axes] }, observed));
-  });
-  return distinctMinima([...found, ...twins]).slice(0, mostMinima);
+  const twins = found.slice(0, 2).flatMap(({ crystal }) => twinsOf({ indices: principalOf(crystal), axes: crystal.axes[0]! }));
+  return distinctMinima([...found, ...twins.map(({ indices, axes }) => refine({ rank: 3, free: indices, axes: [axes] }, observed))]).slice(0, mostMinima);
 }
 
 /** Crystals to begin from where positions are few or edges are missing. */
@@ -59,25 +53,6 @@ function guesses(positions: readonly Position[]): Crystal[] {
     const free: PrincipalIndices = [alpha, alpha + share * (gamma - alpha), gamma];
     return { rank: 3, free, axes: [bestTurn(free, positions)] };
   });
-}
-
-const upright: Orientation = [[1, 0, 0], [0, 1, 0], [0, 0, 1]];
-
-/** Of some orientations the one that a facet's readings fit best. */
-function bestTurn(indices: PrincipalIndices, positions: readonly Position[]): Orientation {
-  let [best, least] = [upright, Number.POSITIVE_INFINITY];
-  for (const [x, y] of [[0, 0], [0.8, 0], [0, 0.8], [0.8, 0.8], [1.4, 0.3], [0.3, 1.4], [1.4, 1.4]] as const)
-    for (let turn = 0; turn < 4; turn++) {
-      const axes = turned(turned(upright, [x, y, 0]), [0, 0, (turn * Math.PI) / 4]);
-      let sum = 0;
-      for (const { angleDeg, upper, lower, u } of positions) {
-        const shown = edgeIndices(indices, axes, angleDeg);
-        if (upper !== null) sum += Math.abs(upper - shown.upper) / u;
-        if (lower !== null) sum += Math.abs(lower - shown.lower) / u;
-      }
-      if (sum < least) [least, best] = [sum, axes];
-    }
-  return best;
 }
 
 /** How far another facet's indices are from these, in what is uncertain about them. */

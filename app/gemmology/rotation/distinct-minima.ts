@@ -5,8 +5,8 @@ import type { Refined } from "./refine.ts";
 const hopeless = 100;
 
 /** Minima apart in their indices, the deepest first; of two that are the same, the deeper. */
-export function distinctMinima(found: readonly Refined[]): Refined[] {
-  const kept: Refined[] = [];
+export function distinctMinima<Minimum extends Refined>(found: readonly Minimum[]): Minimum[] {
+  const kept: Minimum[] = [];
   for (const each of [...found].sort((a, b) => a.chiSquared - b.chiSquared)) {
     if (kept[0] && each.chiSquared > kept[0].chiSquared + hopeless) break;
     if (!kept.some((other) => isSame(each, other))) kept.push(each);

@@ -1,10 +1,11 @@
 import { principalOf } from "./crystal-model.ts";
 import { upperVibrationDeg } from "./edge-indices.ts";
-import { halfTurn, isMerged, type Observed } from "./observed.ts";
+import { halfTurn, isMerged, type Observed, type Position } from "./observed.ts";
 import type { Refined } from "./refine.ts";
 import { polariserUDeg, type RotationRun } from "./rotation-run.ts";
 import type { Misfit } from "./rotation-fit.ts";
 
+/** In standard uncertainties: beyond this a reading is named. */
 const outlierAt = 3.5;
 
 type Deviation = Readonly<{ at: number; edge: Misfit["edge"]; /** Observed less computed, in standard uncertainties. */ by: number }>;
@@ -25,13 +26,17 @@ export function edgeByEdge({ crystal, shown }: Refined, { positions }: Observed)
   });
 }
 
-/** Readings that the crystal does not explain, by name, the worst first. */
-export function findMisfits(refined: Refined, observed: Observed, { facets }: RotationRun): Misfit[] {
-  return edgeByEdge(refined, observed)
+/** Readings that the crystal does not explain, by name. */
+export function findMisfits(refined: Refined, observed: Observed, run: RotationRun): Misfit[] {
+  return namedMisfits(edgeByEdge(refined, observed).map(({ at, edge, by }) => ({ position: observed.positions[at]!, edge, by })), run);
+}
+
+/** What deviates too far, in words, the worst first. */
+export function namedMisfits(deviations: readonly Readonly<{ position: Position; edge: Misfit["edge"]; by: number }>[], { facets }: RotationRun): Misfit[] {
+  return deviations
     .filter(({ by }) => Math.abs(by) > outlierAt)
     .sort((a, b) => Math.abs(b.by) - Math.abs(a.by))
-    .map(({ at, edge, by }) => {
-      const { facet, angleDeg } = observed.positions[at]!;
+    .map(({ position: { facet, angleDeg }, edge, by }) => {
       const { label } = facets[facet]!;
       const what = edge === "polariser" ? "the polariser's azimuth" : "the reading";
       return { facet: label, angleDeg, edge, by, message: `${what} at ${angleDeg}°${facets.length > 1 ? ` on the ${label}` : ""} doesn't fit: ${Math.abs(by).toFixed(1)} u` };

@@ -9,7 +9,7 @@ import { isMerged, observedOf, type Observed } from "./observed.ts";
 import { refine, type Refined } from "./refine.ts";
 import { rotationModelVersion, type RotationFit, type RotationSolution } from "./rotation-fit.ts";
 import type { RotationRun } from "./rotation-run.ts";
-import { chanceOf, simplerWhereAlike } from "./simpler-crystals.ts";
+import { chanceOf, simplerWhereAlike, type Candidate } from "./simpler-crystals.ts";
 import { solutionOf } from "./solution-of.ts";
 import type { Orientation } from "./vector.ts";
 
@@ -42,7 +42,7 @@ export function fitRotation(run: RotationRun): RotationFit {
   const biaxial = biaxialMinima(observed);
   const least = Math.min(isotropic.chiSquared, ...biaxial.map(({ chiSquared }) => chiSquared));
   const isIsotropic = isotropic.chiSquared - least < chanceOf(parameterCount({ rank: 3, axes: isotropic.crystal.axes }) - 1, "0.27 %");
-  const kept = isIsotropic ? [isotropic] : distinctMinima(biaxial.flatMap((each) => simplerWhereAlike(each, observed))).sort(simplerFirst).slice(0, mostSolutions);
+  const kept: readonly Candidate[] = isIsotropic ? [isotropic] : distinctMinima(biaxial.flatMap((each) => simplerWhereAlike(each, observed))).sort(simplerFirst).slice(0, mostSolutions);
 
   const best = kept[0]!;
   const degreesOfFreedom = Math.max(1, countOf(observed) - parameterCount(best.crystal));

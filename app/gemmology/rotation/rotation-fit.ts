@@ -16,8 +16,8 @@ export type RotationSolution = Readonly<{
   /** Root mean square of what was read less what this crystal would show. */
   rms: number;
   deltaChiSquared: number;
-  /** What only one edge bounds. */
-  bounds?: Readonly<{ betaAtLeast?: number; betaAtMost?: number }>;
+  /** What readings bound without determining it: β by one edge; of a uniaxial crystal how far apart its two equal indices may be (95 %). */
+  bounds?: Readonly<{ betaAtLeast?: number; betaAtMost?: number; gapAtMost?: number }>;
 }>;
 
 export type Misfit = Readonly<{ facet: string; angleDeg: number; edge: "upper" | "lower" | "polariser"; /** In standard uncertainties. */ by: number; message: string }>;

@@ -6,27 +6,25 @@ import { cross, type Orientation, type Vector } from "./vector.ts";
 export type Start = Readonly<{ indices: PrincipalIndices; axes: Orientation }>;
 
 /**
- * Sum s and product p of 1/U² and 1/L², both less `middle`, over the rotation φ of a facet: each holds a constant and the
- * harmonics cos 2φ and sin 2φ only.
+ * A tensor of the crystal: its principal values are n² (permittivity) or n⁻² (impermeability). Across a direction in the
+ * facet it has two values in the plane; over the rotation φ, their sum s and product p, both values less `middle`, hold a
+ * constant and the harmonics cos 2φ and sin 2φ only.
  */
-export type SectionHarmonics = Readonly<{ middle: number; s: readonly [number, number, number]; p: readonly [number, number, number] }>;
+export type SectionHarmonics = Readonly<{ power: 2 | -2; middle: number; s: readonly [number, number, number]; p: readonly [number, number, number] }>;
 
 /** The harmonics that a crystal's sections have. */
-export function harmonicsOf({ indices, axes }: Start): SectionHarmonics {
-  const a = indices.map((n) => n ** -2);
+export function harmonicsOf({ indices, axes }: Start, power: 2 | -2): SectionHarmonics {
+  const a = indices.map((n) => n ** power);
   const middle = (a[0]! + a[1]! + a[2]!) / 3;
   const component = (i: number, j: number) => axes.reduce((sum, axis, at) => sum + (a[at]! - middle) * axis[i]! * axis[j]!, 0);
   const [uu, vv, uv, p, q, along] = [component(0, 0), component(1, 1), component(0, 1), component(0, 2), component(1, 2), component(2, 2)];
   const m = (uu + vv) / 2;
   const [sc, ss] = [m - uu, -uv];
-  return { middle, s: [along + m, sc, ss], p: [along * m - (p * p + q * q) / 2, along * sc - (q * q - p * p) / 2, p * q + along * ss] };
+  return { power, middle, s: [along + m, sc, ss], p: [along * m - (p * p + q * q) / 2, along * sc - (q * q - p * p) / 2, p * q + along * ss] };
 }
 
-/**
- * The crystals, at most two, whose sections have these harmonics: the impermeability tensor follows once its component
- * along the normal is known, and that has two admissible values.
- */
-export function crystalsOf({ middle, s: [s0, sc, ss], p: [p0, pc, ps] }: SectionHarmonics): Start[] {
+/** The crystals, at most two, whose sections have these harmonics: the tensor follows once its component along the normal is known, and that has two admissible values. */
+export function crystalsOf({ power, middle, s: [s0, sc, ss], p: [p0, pc, ps] }: SectionHarmonics): Start[] {
   const w = (a: number) => a * (s0 - a) - p0;
   const g = (a: number) => w(a) - Math.hypot(a * sc - pc, a * ss - ps);
   // w has its top at s0/2 and falls below zero at this distance from it; the admissible values lie within.
@@ -42,11 +40,10 @@ export function crystalsOf({ middle, s: [s0, sc, ss], p: [p0, pc, ps] }: Section
       [p, q, a + middle],
     ]);
     if (values.some((value) => !(value > 0))) return [];
-    // The largest impermeability is the smallest index.
-    const [z, y, x] = vectors as unknown as [Vector, Vector, Vector];
+    const [[alpha, x], [beta, y], [gamma, z]] = values.map((value, at) => [value ** (1 / power), vectors[at]!] as const).sort(([one], [other]) => one - other) as unknown as readonly [readonly [number, Vector], readonly [number, Vector], readonly [number, Vector]];
     const upright = cross(x, y);
     const isRightHanded = upright[0] * z[0] + upright[1] * z[1] + upright[2] * z[2] >= 0;
-    return [{ indices: [values[2]! ** -0.5, values[1]! ** -0.5, values[0]! ** -0.5], axes: [x, y, isRightHanded ? z : [-z[0], -z[1], -z[2]]] }];
+    return [{ indices: [alpha, beta, gamma], axes: [x, y, isRightHanded ? z : [-z[0], -z[1], -z[2]]] }];
   });
 }
 

@@ -1,13 +1,13 @@
 import { opticAngle } from "../optics/optic-angle.ts";
-import type { Refined } from "./refine.ts";
 import type { AxisOnFacet, RotationSolution } from "./rotation-fit.ts";
 import type { RotationRun } from "./rotation-run.ts";
+import type { Candidate } from "./simpler-crystals.ts";
 import type { Vector } from "./vector.ts";
 
 const degree = Math.PI / 180;
 
 /** A minimum in the trade's words, with standard uncertainties widened by a factor. */
-export function solutionOf({ crystal, covariance }: Refined, { facets }: RotationRun, { deltaChiSquared, widen, rms }: { deltaChiSquared: number; widen: number; rms: number }): RotationSolution {
+export function solutionOf({ crystal, covariance, gapAtMost }: Candidate, { facets }: RotationRun, { deltaChiSquared, widen, rms }: { deltaChiSquared: number; widen: number; rms: number }): RotationSolution {
   const shared = { rms, deltaChiSquared };
   const u = (at: number) => widen * Math.sqrt(Math.max(0, covariance[at]![at]!));
   const gap = (i: number, j: number) => widen * Math.sqrt(Math.max(0, covariance[i]![i]! + covariance[j]![j]! - 2 * covariance[i]![j]!));
@@ -15,7 +15,7 @@ export function solutionOf({ crystal, covariance }: Refined, { facets }: Rotatio
   if (crystal.rank === 2) {
     const [omega, epsilon] = crystal.free as unknown as [number, number];
     const orientation = facets.map(({ label }, at) => ({ facet: label, axes: [onFacet("c", crystal.axes[at]![2])] }));
-    return { character: "uniaxial", sign: epsilon > omega ? "+" : "-", indices: { omega, epsilon }, u: { omega: u(0), epsilon: u(1) }, birefringence: { value: Math.abs(epsilon - omega), u: gap(0, 1) }, twoVDeg: null, orientation, ...shared };
+    return { character: "uniaxial", sign: epsilon > omega ? "+" : "-", indices: { omega, epsilon }, u: { omega: u(0), epsilon: u(1) }, birefringence: { value: Math.abs(epsilon - omega), u: gap(0, 1) }, twoVDeg: null, orientation, ...shared, ...(gapAtMost === undefined ? {} : { bounds: { gapAtMost } }) };
   }
   const at = crystal.free.map((value, index) => ({ value, index })).sort((a, b) => a.value - b.value).map(({ index }) => index) as [number, number, number];
   const [alpha, beta, gamma] = at.map((index) => crystal.free[index]!) as [number, number, number];
