@@ -14,11 +14,17 @@ export function distinctMinima<Minimum extends Refined>(found: readonly Minimum[
   return kept;
 }
 
-/** The same indices within a quarter of what is uncertain about them. */
+/** The same kind of crystal, with the same indices within half of what is uncertain about each. */
 function isSame(one: Refined, other: Refined): boolean {
+  if (one.crystal.rank !== other.crystal.rank) return false;
   const [a, b] = [inOrder(one.crystal), inOrder(other.crystal)];
-  const near = Math.max(3e-5, 0.25 * Math.min(leastU(one), leastU(other)));
-  return a.every((value, at) => Math.abs(value - b[at]!) < near);
+  const [ua, ub] = [usInOrder(one), usInOrder(other)];
+  return a.every((value, at) => Math.abs(value - b[at]!) < Math.max(3e-5, 0.5 * Math.min(ua[at]!, ub[at]!)));
 }
 
-const leastU = ({ covariance }: Refined) => Math.sqrt(Math.max(0, Math.min(...covariance.map((row, at) => row[at]!))));
+function usInOrder({ crystal, covariance }: Refined): number[] {
+  const own = covariance.map((row, at) => ({ value: crystal.free[at]!, u: Math.sqrt(Math.max(0, row[at]!)) })).sort((a, b) => a.value - b.value);
+  const us = own.map(({ u }) => u);
+  // Of the two indices that a uniaxial crystal has, the ordinary counts twice.
+  return crystal.rank === 2 ? (crystal.free[0]! < crystal.free[1]! ? [us[0]!, us[0]!, us[1]!] : [us[0]!, us[1]!, us[1]!]) : crystal.rank === 1 ? [us[0]!, us[0]!, us[0]!] : us;
+}

@@ -19,6 +19,8 @@ export type EdgeExtremes = Readonly<{
   parameters: number;
 }>;
 
+/** No gem material is doubly refractive by more (rutile, 0.296): a narrower dip of an edge is a misreading. */
+const strongestBirefringence = 0.3;
 const degree = Math.PI / 180;
 const huber = 2.5;
 const sum = (values: readonly number[]) => values.reduce((total, value) => total + value, 0);
@@ -35,7 +37,7 @@ const costOf = (residuals: readonly number[]) => sum(residuals.map((value) => (M
  */
 export function edgeExtremes(positions: readonly Position[], edge: EdgeName): EdgeExtremes {
   const apart = new Set(positions.map(({ angleDeg }) => Math.round((((angleDeg % 180) + 180) % 180) * 10))).size;
-  const models = [fitConstant(positions, edge), ...(apart >= 4 ? [fitUniaxial(positions, edge)] : []), ...(apart >= 7 ? [fitBiaxial(positions, edge)] : [])];
+  const models = [fitConstant(positions, edge), ...(apart >= 4 ? [fitUniaxial(positions, edge)] : []), ...(apart >= 7 ? fitBiaxial(positions, edge) : [])];
   const criteria = models.map(({ residuals, parameters }) => costOf(residuals) + 2 * parameters);
   const least = Math.min(...criteria);
   const weights = criteria.map((criterion) => Math.exp((least - criterion) / 2));
@@ -64,7 +66,7 @@ function fitUniaxial(positions: readonly Position[], edge: EdgeName): EdgeExtrem
 }
 
 /** A biaxial crystal whose other edge is unknown: the seen one's outer extreme is still determined, its far indices hardly. */
-function fitBiaxial(positions: readonly Position[], edge: EdgeName): EdgeExtremes {
+function fitBiaxial(positions: readonly Position[], edge: EdgeName): [EdgeExtremes] | [] {
   const own = positions.map((position) => ({ ...position, facet: 0, polariserDeg: null, ...(edge === "lower" ? { upper: null } : { lower: null }) }));
   const observed = { facetCount: 1, positions: own };
   const edges = positions.map((position) => position[edge]!);
@@ -76,13 +78,15 @@ function fitBiaxial(positions: readonly Position[], edge: EdgeName): EdgeExtreme
       return { rank: 3, free, axes: [bestTurn(free, own)] };
     })
     .map((start) => refine(start, observed))
+    .filter(({ crystal }) => inOrder(crystal)[2] - inOrder(crystal)[0] < strongestBirefringence)
     .sort((a, b) => a.chiSquared - b.chiSquared);
-  const { crystal, covariance, shown } = best!;
+  if (!best) return [];
+  const { crystal, covariance, shown } = best;
   const indices = inOrder(crystal);
   const outer = edge === "lower" ? indices[0] : indices[2];
   const at = crystal.free.indexOf(outer);
   const along = Array.from({ length: 180 }, (_, angleDeg) => edgeIndices(crystal.free as PrincipalIndices, crystal.axes[0]!, angleDeg)[edge]);
-  return { outer, uOuter: Math.sqrt(Math.max(0, covariance[at]![at]!)), inner: edge === "lower" ? Math.max(...along) : Math.min(...along), residuals: shown.residuals.map(([value]) => value!), parameters: 6 };
+  return [{ outer, uOuter: Math.sqrt(Math.max(0, covariance[at]![at]!)), inner: edge === "lower" ? Math.max(...along) : Math.min(...along), residuals: shown.residuals.map(([value]) => value!), parameters: 6 }];
 }
 
 /** Linear least squares in which a residual beyond 2.5 standard uncertainties counts by its size only (Huber). */

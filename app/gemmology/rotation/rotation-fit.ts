@@ -35,4 +35,4 @@ export type RotationFit = Readonly<{
   modelVersion: string;
 }>;
 
-export const rotationModelVersion = "rotation-1";
+export const rotationModelVersion = "rotation-2";

@@ -26,7 +26,8 @@ export function solutionOf({ crystal, covariance, gapAtMost }: Candidate, { face
     character: "biaxial",
     sign: angle.sign,
     indices: { alpha, beta, gamma },
-    u: { alpha: u(at[0]), beta: u(at[1]), gamma: u(at[2]) },
+    // β lies between the others, whatever else is known of it: a rectangular distribution at the widest (JCGM 100:2008, 4.3.7).
+    u: { alpha: u(at[0]), beta: Math.min(u(at[1]), (gamma - alpha) / Math.sqrt(12)), gamma: u(at[2]) },
     birefringence: { value: gamma - alpha, u: gap(at[0], at[2]) },
     twoVDeg: { value: angle.twoVDeg, u: angle.uDeg },
     orientation,
