@@ -5,7 +5,9 @@ import { pseudoInverse } from "#app/gemmology/linear/pseudo-inverse.ts";
 import { solve } from "#app/gemmology/linear/solve.ts";
 import { symmetricEigen } from "#app/gemmology/linear/symmetric-eigen.ts";
 
-const aSymmetricMatrix = fc.integer({ min: 2, max: 7 }).chain((size) => fc.array(fc.array(fc.double({ min: -5, max: 5, noNaN: true }), { minLength: size, maxLength: size }), { minLength: size, maxLength: size }).map((rows) => rows.map((row, i) => row.map((value, j) => value + rows[j]![i]!))));
+/** Thousandths: on entries at the end of what a double holds the library gives up. */
+const anEntry = fc.integer({ min: -5_000, max: 5_000 }).map((value) => value / 1_000);
+const aSymmetricMatrix = fc.integer({ min: 2, max: 7 }).chain((size) => fc.array(fc.array(anEntry, { minLength: size, maxLength: size }), { minLength: size, maxLength: size }).map((rows) => rows.map((row, i) => row.map((value, j) => value + rows[j]![i]!))));
 
 test("eigenvalues agree with a general-purpose library", () => {
   fc.assert(
@@ -13,7 +15,7 @@ test("eigenvalues agree with a general-purpose library", () => {
       const library = new EigenvalueDecomposition(new Matrix(matrix), { assumeSymmetric: true }).realEigenvalues.sort((a, b) => a - b);
       symmetricEigen(matrix).values.forEach((value, at) => expect(value).toBeCloseTo(library[at]!, 8));
     }),
-    { numRuns: 200 },
+    { numRuns: 300 },
   );
 });
 
@@ -29,6 +31,6 @@ test("solutions and pseudo-inverses agree with a general-purpose library", () =>
       const inverse = libraryPseudoInverse(square).to2DArray();
       pseudoInverse(rows).forEach((row, i) => row.forEach((value, j) => expect(value).toBeCloseTo(inverse[i]![j]!, 7)));
     }),
-    { numRuns: 200 },
+    { numRuns: 300 },
   );
 });
