@@ -15,7 +15,7 @@ test("eigenvalues agree with a general-purpose library", () => {
       const library = new EigenvalueDecomposition(new Matrix(matrix), { assumeSymmetric: true }).realEigenvalues.sort((a, b) => a - b);
       symmetricEigen(matrix).values.forEach((value, at) => expect(value).toBeCloseTo(library[at]!, 8));
     }),
-    { numRuns: 300 },
+    { numRuns: 300, seed: 11 },
   );
 });
 
@@ -31,6 +31,6 @@ test("solutions and pseudo-inverses agree with a general-purpose library", () =>
       const inverse = libraryPseudoInverse(square).to2DArray();
       pseudoInverse(rows).forEach((row, i) => row.forEach((value, j) => expect(value).toBeCloseTo(inverse[i]![j]!, 7)));
     }),
-    { numRuns: 300 },
+    { numRuns: 300, seed: 11 },
   );
 });
