@@ -93,7 +93,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
         </div>
         <Preview reading={preview} instrument={instrument} />
       </div>
-      <div className="grid content-start gap-3">
+      <div className={`grid content-start gap-3 ${kind === "rotation" ? "md:col-span-2 md:grid-cols-2" : ""}`}>
         {fitting.length > 0 ? (
           <SelectField
             key={fields.instrument.key}
@@ -163,4 +163,4 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
   );
 }
 
-const derivedNames: Partial<Record<string, string>> = { birefringence: "Birefringence", sg: "Density", n: "Index" };
+const derivedNames: Partial<Record<string, string>> = { birefringence: "Birefringence", sg: "Density", n: "Index", low: "Lowest index", high: "Highest index", omega: "nω", epsilon: "nε", alpha: "nα", beta: "nβ", gamma: "nγ" };

@@ -1,8 +1,9 @@
 import { parseDecimal } from "#app/domain/decimal.ts";
+import { isOutOfCheck, type InstrumentKind } from "#app/domain/instrument-kind.ts";
 import { massDifference } from "#app/features/custody/mass-difference.ts";
 import type { ComposedReading } from "./compose-reading.ts";
 
-type WarnedInstrument = Readonly<{ name: string; status: "inService" | "restricted" | "outOfService"; statusReason: string; upperLimit: number | null; standardUncertainty: number | null }>;
+type WarnedInstrument = Readonly<{ name: string; kind: InstrumentKind; status: "inService" | "restricted" | "outOfService"; statusReason: string; upperLimit: number | null; standardUncertainty: number | null }>;
 
 /** What a colleague at the next bench would say of a reading that is kept all the same. */
 export function readingWarnings({ reading, instrument, check, today, earlierWeightText }: {
@@ -16,9 +17,9 @@ export function readingWarnings({ reading, instrument, check, today, earlierWeig
 }): string[] {
   if (reading.quality === "noResult") return [];
   const warnings: string[] = [];
-  if (instrument && reading.values.length > 0) {
+  if (instrument && isOutOfCheck({ kind: instrument.kind, nextDueOn: check?.nextDueOn ?? null, today })) {
     if (!check) warnings.push(`${instrument.name} has no passed check on record.`);
-    else if (check.nextDueOn < today) warnings.push(`The check of ${instrument.name} was due on ${check.nextDueOn}.`);
+    else warnings.push(`The check of ${instrument.name} was due on ${check.nextDueOn}.`);
   }
   if (instrument?.status === "restricted") warnings.push(`${instrument.name} is restricted${instrument.statusReason ? `: ${instrument.statusReason}` : ""}.`);
   const limit = instrument?.upperLimit;
