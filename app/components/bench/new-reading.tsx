@@ -14,6 +14,7 @@ import { aboutTest, noResultReasons, readingQualities, readingQualityNames, type
 import { composeReading, type ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
 import { withUncertainty } from "#app/features/readings/reading-words.ts";
+import { weighingNotes } from "#app/features/readings/weighing-notes.ts";
 import type { BenchInstrument } from "#app/features/stones/get-bench.server.ts";
 import { DescribedFields } from "./described-fields.tsx";
 import { moveOnByEnter } from "./move-on-by-enter.ts";
@@ -139,6 +140,7 @@ const pick = ({ id, errors }: { id: string; errors?: string[] }) => ({ id, error
 /** What follows from the digits, before they are saved. */
 function Preview({ reading, instrument }: { reading: ComposedReading | null; instrument: BenchInstrument | null }) {
   const derived = reading?.values.filter(({ formula }) => formula !== null) ?? [];
+  const notes = reading && weighingNotes(reading);
   if (derived.length === 0 && !instrument) return null;
   return (
     <dl className="grid grid-cols-[auto_1fr] gap-x-3.5 gap-y-1 border-t border-dashed border-rule-2 pt-2.5 text-sm" aria-live="polite">
@@ -148,6 +150,15 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
           <dd className="font-mono">{withUncertainty(value, value.name === "sg" ? 3 : 4)}</dd>
         </div>
       ))}
+      {notes ? (
+        <div className="contents">
+          <dt className="text-ink-3">Weighings</dt>
+          <dd>
+            {notes.spread}
+            {notes.drift ? <span className="block text-straw">{notes.drift}</span> : null}
+          </dd>
+        </div>
+      ) : null}
       {instrument ? (
         <div className="contents">
           <dt className="text-ink-3">Instrument</dt>

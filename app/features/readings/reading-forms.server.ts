@@ -4,7 +4,7 @@ import {
 } from "#app/domain/reading.ts";
 import { idFromShortRef } from "#app/domain/short-ref.ts";
 import { describedKinds, isDescribed, testForms, type DescribedKind } from "#app/domain/bench-tests/test-forms.ts";
-import { twoEdges, type DescribedDraft, type ReadingDraft } from "./reading-draft.ts";
+import { againNames, twoEdges, type DescribedDraft, type ReadingDraft } from "./reading-draft.ts";
 import { isTicked, optionalLines, requestIdField, requiredText } from "#app/features/form-fields.server.ts";
 
 /** Digits as typed; whether they make sense is judged with the instrument in hand (compose-reading.ts). */
@@ -58,7 +58,7 @@ const readings = z.discriminatedUnion(
       figure: z.enum(interferenceFigures, { error: "Choose which figure was seen." }).optional(),
       sign: z.enum(["+", "-"], { error: "Choose the sign, or leave it open." }).optional(),
     }),
-    z.object({ ...common, kind: z.literal("density"), method: z.enum(weighingMethods, { error: "Choose how it was weighed." }), massAirCt: typed(), massLiquidCt: typed(), tempC: typed() }),
+    z.object({ ...common, kind: z.literal("density"), method: z.enum(weighingMethods, { error: "Choose how it was weighed." }), massAirCt: typed(), massLiquidCt: typed(), tempC: typed(), massAirCt2: typed(), massAirCt3: typed(), massLiquidCt2: typed(), massLiquidCt3: typed() }),
     z.object({ ...common, kind: z.literal("weight"), weightCt: typed() }),
     z.object({ ...common, kind: z.literal("dimensions"), shape: z.enum(["round", "other"], { error: "Choose the outline." }), lengthMm: typed(), widthMm: typed(), depthMm: typed() }),
     z.object({ ...common, kind: z.literal("rotation"), light: seen.light, rows: typed() }),
@@ -91,6 +91,7 @@ const isOfDescribed = <Input extends { kind: ObservationKind }>(input: Input): i
 function draftOf(input: z.output<typeof readings>): ReadingDraft {
   if (isOfDescribed(input)) return { kind: input.kind, quality: input.quality, typed: Object.fromEntries(testForms[input.kind].fields.map(({ name }) => [name, (input as unknown as DescribedDraft["typed"])[name] ?? ""])) };
   if (input.kind === "refractometer") return { ...input, ...twoEdges(input), edges: input.isOneEdge ? "one" : "two" };
+  if (input.kind === "density") return { ...input, again: Object.fromEntries(againNames.map((name) => [name, input[name]])) };
   if (input.kind === "polariscope") return { ...input, behaviour: input.behaviour ?? "cannotTell", figure: input.figure ?? "notSought", sign: input.sign ?? null };
   return input;
 }

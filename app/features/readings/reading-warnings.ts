@@ -2,6 +2,7 @@ import { parseDecimal } from "#app/domain/decimal.ts";
 import { isOutOfCheck, type InstrumentKind } from "#app/domain/instrument-kind.ts";
 import { massDifference } from "#app/features/custody/mass-difference.ts";
 import type { ComposedReading } from "./compose-reading.ts";
+import { weighingNotes } from "./weighing-notes.ts";
 
 type WarnedInstrument = Readonly<{ name: string; kind: InstrumentKind; status: "inService" | "restricted" | "outOfService"; statusReason: string; upperLimit: number | null; standardUncertainty: number | null }>;
 
@@ -27,6 +28,8 @@ export function readingWarnings({ reading, instrument, check, today, earlierWeig
   if (limit && edge && reading.detail.kind !== "criticalAngle" && Math.abs(edge.value - limit) <= 0.01) {
     warnings.push("This is close to the contact liquid's own edge, which is sharp and stays still while the stone turns.");
   }
+  const drift = weighingNotes(reading)?.drift;
+  if (drift) warnings.push(drift);
   const weight = reading.values.find(({ name }) => name === "weightCt" || name === "massAirCt");
   if (weight && parseDecimal(earlierWeightText) !== undefined) {
     const { differenceCt, isAlarming } = massDifference({
