@@ -79,6 +79,7 @@ export default [
       // bench
       route("stones/:stoneCode", "routes/lab/stones/bench.tsx"),
       route("stones/:stoneCode/mark.json", "routes/lab/stones/mark.ts"),
+      route("stones/:stoneCode/sent-readings", "routes/lab/stones/sent-readings.ts"),
       route("stones/:stoneCode/sheet", "routes/lab/stones/sheet.tsx"),
       route("stones/:stoneCode/readings/:sequence/strike", "routes/lab/stones/strike.tsx"),
       route("stones/:stoneCode/conclusion", "routes/lab/stones/conclusion.tsx"),
