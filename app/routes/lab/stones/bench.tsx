@@ -1,6 +1,6 @@
 import type { SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
-import { useMemo, useState } from "react";
+import { useCallback, useMemo, useState } from "react";
 import { Link, redirect } from "react-router";
 import { uuidv7 } from "uuidv7";
 import { HiddenCandidatesCard, HideCandidatesForm } from "#app/components/bench/hide-candidates-card.tsx";
@@ -214,7 +214,6 @@ type LoaderData = Route.ComponentProps["loaderData"];
 type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { labSlug: string; readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
 function Examination({ labSlug, person, isKept, readings, ranking, next, instruments, test, requestId, areCandidatesHidden, plan, view, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
-  const [typed, setTyped] = useState<ComposedReading | null>(null);
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const struckCount = readings.filter(({ strike }) => strike).length;
   const hidden = areCandidatesHidden ? `&candidates=hidden${planSearch(plan)}` : "";
@@ -222,6 +221,11 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
   const whose = useMemo(() => ({ person, labSlug }), [person, labSlug]);
   const deeds = useOutbox(whose, stone.code);
   const waiting = useWaitingReadings(deeds, instruments);
+  // One's own saved reading clears the form; a refused one keeps what was typed, and a colleague's leaves it alone.
+  const formKey = `${test}-${readings.filter(({ isOwn }) => isOwn).length}-${deeds.length}`;
+  const [draft, setDraft] = useState<{ formKey: string; reading: ComposedReading | null }>({ formKey: "", reading: null });
+  const onDraft = useCallback((reading: ComposedReading | null) => setDraft({ formKey, reading }), [formKey]);
+  const typed = draft.formKey === formKey ? draft.reading : null;
   const strikesWaiting = useMemo(() => strikesThatWait(deeds), [deeds]);
   const counted = useMemo(() => [...standing.filter(({ sequence }) => !strikesWaiting.has(sequence)), ...waiting.filter(({ isStruck }) => !isStruck).map(({ reading }) => ({ ...reading, sequence: null }))], [standing, waiting, strikesWaiting]);
   return (
@@ -233,10 +237,9 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
           <Card title="New reading" note="kept as you type it, never overwritten">
             <TestChoice current={test} hrefOf={(kind) => `?test=${kind}${hidden}`} />
             <NewReading
-              // One's own saved reading clears the form; a refused one keeps what was typed, and a colleague's leaves it alone.
-              key={`${test}-${readings.filter(({ isOwn }) => isOwn).length}-${deeds.length}`}
+              key={formKey}
               {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden }}
-              onDraft={setTyped}
+              onDraft={onDraft}
             />
           </Card>
         ) : null}
