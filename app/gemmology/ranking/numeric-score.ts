@@ -1,4 +1,4 @@
-import { blunderShare } from "./defaults.ts";
+import { blunderShares } from "./defaults.ts";
 import { normalPdf } from "../statistics/normal-pdf.ts";
 import { softUniformDensity, softUniformTwoSided } from "./soft-uniform.ts";
 import type { Interval } from "../species/species-table.ts";
@@ -13,11 +13,23 @@ function usualDensity({ value, usual, width, sigma }: { value: number; usual: nu
   return normalPdf((value - usual) / spread) / spread;
 }
 
+export type NumericReading = Readonly<{
+  value: number;
+  u: number;
+  range: Interval;
+  /** What is met most, where that is known. */
+  usual?: number | undefined;
+  softness: number;
+  span: number;
+  /** Share of blunders among such readings; that of good ones where left out. */
+  blunderShare?: number | undefined;
+}>;
+
 /**
  * A reading against a range: soft uniform ⊗ Gaussian, with a share of blunders spread over the property's span, so that a
  * single slip can never count more than ln(p·span/share).
  */
-export function numericScore({ value, u, range, usual, softness, span }: { value: number; u: number; range: Interval; /** What is met most, where that is known. */ usual?: number | undefined; softness: number; span: number }): Score {
+export function numericScore({ value, u, range, usual, softness, span, blunderShare = blunderShares.good }: NumericReading): Score {
   const sigma = Math.sqrt(u * u + softness * softness);
   const soft = { low: range[0], high: range[1], sigma };
   const distance = value < range[0] ? (value - range[0]) / sigma : value > range[1] ? (value - range[1]) / sigma : 0;

@@ -68,6 +68,7 @@ type Judged = { logLikelihood: number; best: SpeciesForm; bestScores: Score[]; c
 /** A species is the mixture of its forms; it is contradicted when every one of them is. */
 function judge(node: SpeciesNode, terms: readonly Term[]): Judged {
   const isShared = terms.filter(({ isIndex }) => isIndex).length > 1;
+  const hasBoth = terms.some(({ isIndex }) => isIndex) && terms.some(({ property }) => property === "sg");
   let best = node.forms[0]!;
   let bestScores: Score[] = [];
   let bestLog = -Infinity;
@@ -79,7 +80,7 @@ function judge(node: SpeciesNode, terms: readonly Term[]): Judged {
     let log = 0;
     for (const score of scores) log += score.logLikelihood;
     // Far out, neither a shared error nor a composition brings a form back.
-    if ((form.isSeries || isShared) && scores.every(({ distance }) => Math.abs(distance) < farOut)) log += form.isSeries ? compositionGain(form, terms, scores) : sharedOffsetGain(form, terms, scores);
+    if (((form.isSeries && hasBoth) || isShared) && scores.every(({ distance }) => Math.abs(distance) < farOut)) log += form.isSeries && hasBoth ? compositionGain(form, terms, scores) : sharedOffsetGain(form, terms, scores);
     logs.push(Math.log(form.share) + log);
     const against = terms.flatMap((term, index) => (contradicts(term, scores[index]!) ? [index] : []));
     const isAgainst = new Set(against.map((index) => independentKind(terms[index]!.property))).size > 1;
@@ -113,16 +114,10 @@ const scatterShare = 0.15;
  * garnet of low index and high density fits each of its ranges and still is none of that series.
  */
 function compositionGain(form: SpeciesForm, terms: readonly Term[], scores: readonly Score[]): number {
-  const moves = terms.map(({ isIndex, property }) => isIndex || property === "sg");
-  if (!terms.some(({ isIndex }) => isIndex) || !terms.some(({ property }) => property === "sg")) return 0;
-  let separate = 0;
-  terms.forEach((_, index) => {
-    if (moves[index]) separate += scores[index]!.logLikelihood;
-  });
-  const joint = alongComposition(form).map((there) => {
-    return terms.reduce((sum, term, index) => (moves[index] ? sum + term.score(there, 0).logLikelihood : sum), -Math.log(compositions.length));
-  });
-  return logSumExp(joint) - separate;
+  const moving = terms.flatMap((term, index) => (term.isIndex || term.property === "sg" ? [{ term, separate: scores[index]!.logLikelihood }] : []));
+  const separate = moving.reduce((sum, each) => sum + each.separate, 0);
+  const joint = alongComposition(form).map((there) => moving.reduce((sum, { term }) => sum + term.score(there, 0).logLikelihood, 0));
+  return logSumExp(joint) - Math.log(compositions.length) - separate;
 }
 
 /** A form's compositions are the same for every stone. */
@@ -147,12 +142,14 @@ function atComposition(form: SpeciesForm, share: number): SpeciesForm {
 }
 
 function contradicts(term: Term, score: Score): boolean {
-  return score.tail < (term.measure ? verdictAt.contradicts : seenContradictsBelow);
+  return !term.cannotContradict && score.tail < (term.measure ? verdictAt.contradicts : seenContradictsBelow);
 }
+
+const kinds: Readonly<Record<string, string>> = { birefringence: "ri", opticSign: "opticCharacter", heavyLiquid: "sg" };
 
 /** Observations of one kind may share one mistake: a facet, a liquid's edge, a balance. */
 function independentKind(property: string): string {
-  return property === "birefringence" ? "ri" : property === "opticSign" ? "opticCharacter" : property;
+  return kinds[property] ?? property;
 }
 
 /** The strongest contradiction, and the strongest of another kind. */
@@ -186,6 +183,7 @@ function verdictOf(term: Term, score: Score): Verdict {
 
 function because(term: Term, form: SpeciesForm, score: Score, verdict: Verdict): string {
   if (verdict === "contradicts") return term.contradiction(form, score);
+  if (term.explain) return term.explain(form);
   if (!term.measure) return verdict === "agrees" ? "as known of it" : "seldom seen of it";
   if (score.distance === 0) return "inside its range";
   const side = score.distance > 0 ? "above" : "below";
