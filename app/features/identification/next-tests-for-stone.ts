@@ -3,7 +3,7 @@ import { parseDecimal } from "#app/domain/decimal.ts";
 import type { ObservationKind } from "#app/domain/reading.ts";
 import type { BenchTestId } from "#app/gemmology/next-test/bench-test.ts";
 import { nextTests, type NextTest, type Vetoed } from "#app/gemmology/next-test/next-tests.ts";
-import { rankSpecies } from "#app/gemmology/ranking/rank-species.ts";
+import { rankSpecies, type RankOptions } from "#app/gemmology/ranking/rank-species.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
 import { evidenceFromReadings } from "#app/features/readings/evidence-from-readings.ts";
 import { waterWeighingUncertaintyCt, weighingUncertaintyCt } from "#app/features/readings/usual-uncertainty.ts";
@@ -19,12 +19,12 @@ const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refracto
 const mostShown = 3;
 
 /** What to test next, from the readings that stand, this stone's weight, its consents and the instruments at hand. */
-export function nextTestsForStone(readings: readonly NumberedReading[], table: SpeciesTable, stone: StoneToTest): NextTests {
+export function nextTestsForStone(readings: readonly NumberedReading[], table: SpeciesTable, stone: StoneToTest, options: RankOptions = {}): NextTests {
   const evidence = evidenceFromReadings(readings);
   if (Object.keys(evidence).length === 0) return { recommended: [], vetoed: [] };
   const { done, poor } = testsMade(readings);
   const balance = stone.instruments.find(({ kind }) => kind === "balance") ?? null;
-  const { recommended, vetoed } = nextTests(rankSpecies(evidence, table).candidates, table, {
+  const { recommended, vetoed } = nextTests(rankSpecies(evidence, table, options).candidates, table, {
     massCt: stone.isMounted ? null : (parseDecimal(stone.weightText) ?? null),
     uAirCt: weighingUncertaintyCt(balance),
     uWaterCt: waterWeighingUncertaintyCt(balance),
