@@ -9,12 +9,11 @@ import type { Score, Term } from "./term.ts";
 const farOut = 8;
 
 /** The observations with what is the same for every species. */
-export type Plan = Readonly<{ terms: readonly Term[]; kinds: readonly string[]; indices: readonly number[]; indicesAndDensity: readonly number[] | null }>;
+export type Plan = Readonly<{ terms: readonly Term[]; kinds: readonly string[]; indices: readonly number[]; densities: readonly number[] }>;
 
 export function planOf(terms: readonly Term[]): Plan {
   const at = (is: (term: Term) => boolean) => terms.flatMap((term, index) => (is(term) ? [index] : []));
-  const [indices, densities] = [at(({ isIndex }) => isIndex), at(({ property }) => property === "sg")];
-  return { terms, kinds: terms.map(independentKind), indices, indicesAndDensity: indices.length > 0 && densities.length > 0 ? [...indices, ...densities] : null };
+  return { terms, kinds: terms.map(independentKind), indices: at(({ isIndex }) => isIndex), densities: at(({ property }) => property === "sg") };
 }
 
 export type Judged = Readonly<{
@@ -53,18 +52,28 @@ export function judgeSpecies({ forms }: SpeciesNode, plan: Plan): Judged {
   return { logLikelihood: logSumExp(logs), best, bestScores, isContradicted: !isOpen };
 }
 
-/** What readings gain that belong together. Far out, neither a shared error nor a composition brings a form back. */
-function jointGain(form: SpeciesForm, { terms, indices, indicesAndDensity }: Plan, scores: readonly Score[]): number {
-  const isSeries = form.isSeries && indicesAndDensity !== null;
-  if (!isSeries && indices.length < 2) return 0;
-  for (const { distance } of scores) if (distance >= farOut || distance <= -farOut) return 0;
+/**
+ * What readings gain that belong together. One that lies far out belongs to none of them: neither a shared error nor a
+ * composition brings it back, and the others stay together without it, so that it cannot raise a form.
+ */
+function jointGain(form: SpeciesForm, { terms, indices, densities }: Plan, scores: readonly Score[]): number {
+  if (indices.length < (form.isSeries && densities.length > 0 ? 1 : 2)) return 0;
   const together: Term[] = [];
   let separate = 0;
-  for (const index of isSeries ? indicesAndDensity : indices) {
-    together.push(terms[index]!);
-    separate += scores[index]!.logLikelihood;
-  }
-  return isSeries ? compositionGain(form, together, separate) : sharedOffsetGain(form, together, separate);
+  const gather = (from: readonly number[]) => {
+    for (const index of from) {
+      const { distance, logLikelihood } = scores[index]!;
+      if (distance >= farOut || distance <= -farOut) continue;
+      together.push(terms[index]!);
+      separate += logLikelihood;
+    }
+  };
+  gather(indices);
+  const indexCount = together.length;
+  if (indexCount === 0) return 0;
+  if (form.isSeries) gather(densities);
+  if (together.length > indexCount) return compositionGain(form, together, separate);
+  return indexCount > 1 ? sharedOffsetGain(form, together, separate) : 0;
 }
 
 function isTwiceContradicted({ terms, kinds }: Plan, scores: readonly Score[]): boolean {

@@ -3,7 +3,7 @@ import type { SpeciesForm, VarietySpectrum } from "../species/species-table.ts";
 import { inBritish } from "./appearance-terms.ts";
 import { defaultU } from "./defaults.ts";
 import type { AbsorptionSeen, Evidence } from "./evidence.ts";
-import { half, seenTerm, summary } from "./seen-term.ts";
+import { seenTerm, summary } from "./seen-term.ts";
 import { softUniformDensity } from "./soft-uniform.ts";
 import type { Term } from "./term.ts";
 
@@ -18,7 +18,7 @@ const unlistedPerNm = 0.003;
 const blankShare = 0.35;
 /** A variety of another colour than the stone's. */
 const otherColourWeight = 0.15;
-/** Lines of one cause come together: no more than so many count. */
+/** Lines of one cause come together, and stay away together: no more than so many count. */
 const mostLines = 4;
 /** Wavelength from which on a prism's scale is crowded, and how much broader the middle of a band is to find. */
 const redFromNm = 620;
@@ -41,10 +41,10 @@ export function spectrumTerm(lines: readonly AbsorptionSeen[], colours: NonNulla
   const countShare = seen.length > mostLines ? mostLines / seen.length : 1;
   const observed = seen.length === 0 ? "no lines" : lines.map(({ nm, kind }) => (kind === "line" ? `${nm}` : `${nm} band`)).join(", ");
   return {
-    ...seenTerm("absorption", observed, unlistedPerNm ** (seen.length * countShare), half),
+    ...seenTerm("absorption", observed, unlistedPerNm ** (seen.length * countShare)),
     score: ({ absorption }) => {
       const blank = countShare * seen.length * Math.log(strayPerNm);
-      if (absorption.length === 0) return { logLikelihood: half * blank, tail: 1, distance: 0 };
+      if (absorption.length === 0) return { logLikelihood: blank, tail: 1, distance: 0 };
       let [likelihood, weightSum] = [0, 0];
       for (const spectrum of absorption) {
         const weight = spectrum.colours === 0 || stone === 0 || (spectrum.colours & stone) !== 0 ? 1 : otherColourWeight;
@@ -52,7 +52,7 @@ export function spectrumTerm(lines: readonly AbsorptionSeen[], colours: NonNulla
         likelihood += weight * Math.exp(spectrumLog(spectrum, seen, { visibility, countShare }) - blank);
       }
       const sum = blankShare + ((1 - blankShare) * likelihood) / weightSum;
-      return { logLikelihood: half * (blank + Math.log(sum)), tail: seen.length > 0 && sum <= 1 ? 0.05 : 1, distance: 0 };
+      return { logLikelihood: blank + Math.log(sum), tail: seen.length > 0 && sum <= 1 ? 0.05 : 1, distance: 0 };
     },
     reference: (forms) => summary(forms.flatMap(({ absorption }) => absorption.flatMap(({ lines: known }) => known.filter(([, , strength]) => strength >= 2).map(([nm]) => `${nm} nm`)))),
     explain: (form) => explained(form, seen, { visibility, countShare, stone }),
@@ -68,8 +68,13 @@ function spectrumLog({ lines }: VarietySpectrum, seen: readonly Seen[], { visibi
     }
     log += countShare * Math.log(density);
   }
-  for (const line of lines) if (!seen.some((each) => matches(line, each))) log += Math.log(1 - visibility * seenShare[line[2] as 1 | 2 | 3]);
-  return log;
+  let [unseen, unseenLog] = [0, 0];
+  for (const line of lines) {
+    if (seen.some((each) => matches(line, each))) continue;
+    unseen++;
+    unseenLog += Math.log(1 - visibility * seenShare[line[2] as 1 | 2 | 3]);
+  }
+  return log + unseenLog * Math.min(1, mostLines / Math.max(1, unseen));
 }
 
 const matches = ([known, halfWidth]: VarietySpectrum["lines"][number], { nm, u }: Seen) => Math.abs(known - nm) <= halfWidth + 2 * u;

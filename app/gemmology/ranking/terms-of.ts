@@ -16,7 +16,7 @@ export function termsOf(evidence: Evidence): Term[] {
     ...(evidence.opticSign ? [opticSignTerm(evidence.opticSign)] : []),
     ...(evidence.sg ? [sgTerm(evidence.sg)] : []),
     ...sorted(evidence.heavyLiquids ?? []).map(heavyLiquidTerm),
-    ...lookedAtTerms({ ...evidence, ...(evidence.absorption && { absorption: sorted(evidence.absorption) }), ...(evidence.phenomena && { phenomena: sorted(evidence.phenomena) }) }),
+    ...lookedAtTerms({ ...evidence, ...(evidence.absorption && { absorption: sorted(evidence.absorption) }), ...(evidence.phenomena && { phenomena: sorted(evidence.phenomena) }), ...(evidence.colour && { colour: sorted(evidence.colour) }) }),
   ];
 }
 
