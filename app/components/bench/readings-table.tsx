@@ -78,7 +78,7 @@ function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: st
       </Cell>
       <Cell className="text-right">
         <span className="flex flex-wrap items-center justify-end gap-x-3 gap-y-1">
-          {reading.isOfSecondCheck ? <Chip tone="blue">check</Chip> : null}
+          {reading.isOfSecondCheck ? <Chip tone="blue">check</Chip> : reading.isBlind ? <Chip>before candidates</Chip> : null}
           {gap && !isStruck ? <Chip tone="green">δ {gap.value.toFixed(3)}</Chip> : null}
           {strikeTo ? (
             <Link to={strikeTo} className="no-print inline-flex min-h-6 items-center text-xs text-ink-3 underline decoration-rule-2 hover:text-red hover:decoration-red" aria-label={`Strike reading ${reading.sequence}`}>

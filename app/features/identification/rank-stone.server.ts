@@ -16,13 +16,13 @@ const mostReasons = 30;
  * @param readings those of the stone that the caller has read already; read here where left out
  * @param prior by how common species are, or "even"; the first where left out
  */
-export async function rankStone(ctx: LabContext, input: ({ stoneCode: string } | { readings: readonly ReadingView[] }) & RankOptions) {
+export async function rankStone(ctx: LabContext, input: ({ stoneCode: string } | { readings: readonly ReadingView[]; compare?: readonly string[] }) & RankOptions) {
   requireRole(ctx, "readings.read");
   const readings = "readings" in input ? input.readings : (await listReadings(ctx, input)).filter(({ isOfSecondCheck }) => !isOfSecondCheck);
   const { table } = loadSpeciesTable();
   const options: RankOptions = input.prior ? { prior: input.prior } : {};
   return {
-    bench: rankReadings(readings, table, { mostReasons, ...options }),
+    bench: rankReadings(readings, table, { mostReasons, ...options, ...("compare" in input && { compare: input.compare }) }),
     snapshot: () => rankingSnapshot(readings, table, options),
     tableVersion: table.version,
     /** Good readings that contradict a species by themselves. */

@@ -1,7 +1,8 @@
 import { expect, test } from "vitest";
 import { natureOfStone } from "#app/features/identification/nature-of-stone.ts";
 import { rankReadings } from "#app/features/identification/rank-readings.ts";
-import { composeReading, type ReadingInstrument } from "#app/features/readings/compose-reading.ts";
+import { composeReading } from "#app/features/readings/compose-reading.ts";
+import type { ReadingInstrument } from "#app/features/readings/reading-instrument.ts";
 import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
 import { corundum } from "../../setup/bench-factory.ts";
 

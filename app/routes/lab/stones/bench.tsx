@@ -2,6 +2,8 @@ import type { SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { useMemo, useState } from "react";
 import { Link, redirect } from "react-router";
+import { HiddenCandidatesCard, HideCandidatesForm } from "#app/components/bench/hide-candidates-card.tsx";
+import { RankingViewForm } from "#app/components/bench/ranking-view-form.tsx";
 import { NextTestsCard } from "#app/components/bench/next-tests-card.tsx";
 import { FollowStone } from "#app/components/bench/follow-stone.tsx";
 import { CheckOffer } from "#app/components/bench/check-offer.tsx";
@@ -18,6 +20,8 @@ import { observationKinds, type ObservationKind } from "#app/domain/reading.ts";
 import { nextTestsForStone } from "#app/features/identification/next-tests-for-stone.ts";
 import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
 import { rankStone } from "#app/features/identification/rank-stone.server.ts";
+import { readingsAsOf, type RankingView } from "#app/features/identification/readings-as-of.ts";
+import { planFromSearch, planLeft, planSearch } from "#app/features/readings/reading-plan.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { latestSize } from "#app/features/readings/latest-size.ts";
@@ -33,6 +37,11 @@ import { orResponse } from "#app/web/or-response.server.ts";
 import type { Route } from "./+types/bench";
 
 const testOf = (url: URL): ObservationKind => observationKinds.find((kind) => kind === url.searchParams.get("test")) ?? "refractometer";
+function viewOf(url: URL): RankingView {
+  const at = Number(url.searchParams.get("at") || Number.NaN);
+  return { atSequence: Number.isSafeInteger(at) ? at : null, areStruckCounted: url.searchParams.get("struck") === "on" };
+}
+const isLookedBack = ({ atSequence, areStruckCounted }: RankingView) => atSequence !== null || areStruckCounted;
 const checkName = (isSolePractice: boolean) => (isSolePractice ? "Self-check" : "Second check");
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {
@@ -45,6 +54,10 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const isOffered = mayCheck && !bench.isInvolved && url.searchParams.get("show") !== "examination";
   const shown = isOffered ? null : readings;
   const examined = shown?.filter(({ isOfSecondCheck }) => !isOfSecondCheck) ?? null;
+  const view = viewOf(url);
+  const compare = [...new Set(url.searchParams.getAll("compare").filter(Boolean))].slice(0, 2);
+  const plan = planFromSearch(url.searchParams);
+  const left = planLeft(plan, examined ?? []);
   return {
     stone: bench.stone,
     condition: bench.stone.condition,
@@ -56,10 +69,12 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
     check: isOffered ? null : check && { kind: check.kind, checker: check.checker, isCompared: check.comparedAt !== null, outcome: check.outcome, reason: check.reason },
     conclusion: isOffered ? null : conclusion && { version: conclusion.version, by: conclusion.by },
     instruments: isOffered ? [] : instruments,
-    ranking: examined && (await rankStone(ctx, { readings: examined })).bench,
+    ranking: examined && (await rankStone(ctx, { readings: readingsAsOf(examined, view), compare })).bench,
+    view: { ...view, compare, standing: isLookedBack(view) && examined ? readingsAsOf(examined, view).filter(({ strike }) => !strike).map(({ sequence }) => sequence) : null },
     next: examined && nextTestsForStone(examined, loadSpeciesTable().table, { ...bench.stone, consents: bench.consents, instruments }),
     test: testOf(url),
-    areCandidatesHidden: url.searchParams.get("candidates") === "hidden",
+    areCandidatesHidden: url.searchParams.get("candidates") === "hidden" && (plan.kinds.length === 0 || left.length > 0),
+    plan: { ...plan, left },
     requestId: newRequestId(),
     can: {
       record: isAllowed(ctx.roles, "readings.record") && bench.stone.goodsState !== "released" && ["received", "examining", "returned"].includes(state),
@@ -142,11 +157,12 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
 type LoaderData = Route.ComponentProps["loaderData"];
 type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
-function Examination({ readings, ranking, next, instruments, test, requestId, areCandidatesHidden, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
+function Examination({ readings, ranking, next, instruments, test, requestId, areCandidatesHidden, plan, view, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
   const [typed, setTyped] = useState<ComposedReading | null>(null);
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const struckCount = readings.filter(({ strike }) => strike).length;
-  const hidden = areCandidatesHidden ? "&candidates=hidden" : "";
+  const hidden = areCandidatesHidden ? `&candidates=hidden${planSearch(plan)}` : "";
+  const standing = useMemo(() => (view.standing ? examined.filter(({ sequence }) => view.standing!.includes(sequence)).map((reading) => ({ ...reading, strike: null })) : examined), [examined, view.standing]);
   return (
     <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_24rem] xl:grid-cols-[minmax(0,1fr)_30.75rem]">
       <FollowStone base={base} mark={stone.version} />
@@ -188,29 +204,27 @@ function Examination({ readings, ranking, next, instruments, test, requestId, ar
       </div>
       <div className="grid min-w-0 gap-5">
         {areCandidatesHidden ? (
-          <Card title="Candidates" note="hidden while you read">
-            <CardBody>
-              <p className="text-ink-2">Readings made now are marked as made without candidates in view.</p>
-              <p className="mt-3">
-                <Link to={`?test=${test}`} preventScrollReset className="text-link">
-                  Show the candidates
-                </Link>
-              </p>
-            </CardBody>
-          </Card>
+          <HiddenCandidatesCard planLeft={plan.left} showHref={`?test=${test}`} />
         ) : (
           <>
-            <LiveCandidates saved={ranking} readings={examined} typed={can.record ? typed : null} />
+            {view.standing ? <Caution>The ranking {view.atSequence === null ? "with what the struck readings said" : `as it was after reading ${view.atSequence}`}. <Link to={`?test=${test}`} preventScrollReset className="text-link">Back to now</Link></Caution> : null}
+            <LiveCandidates saved={ranking} readings={standing} compare={view.compare} typed={can.record && !view.standing ? typed : null} />
             {next && can.record ? <NextTestsCard next={next} hrefOf={(kind) => `?test=${kind}`} /> : null}
-            <p className="no-print flex flex-wrap gap-x-5 gap-y-1 px-1 text-sm">
+            <RankingViewForm
+              key={`${view.atSequence}-${view.areStruckCounted}-${view.compare.join("-")}`}
+              test={test}
+              moments={examined.map(({ sequence, when, detail }) => ({ sequence, when, kind: detail.kind }))}
+              hasStruck={struckCount > 0}
+              view={view}
+              comparable={ranking.comparable}
+              compare={view.compare}
+              isOpen={view.standing !== null || view.compare.length > 0}
+            />
+            {can.record ? <HideCandidatesForm test={test} lastSequence={readings.at(-1)?.sequence ?? 0} /> : null}
+            <p className="no-print px-1 text-sm">
               <Link to={mapHref} className="text-link">
                 On the index and density map
               </Link>
-              {can.record ? (
-                <Link to={`?test=${test}&candidates=hidden`} preventScrollReset className="text-link">
-                  Hide the candidates while reading
-                </Link>
-              ) : null}
             </p>
           </>
         )}
