@@ -42,9 +42,12 @@ const denialBehind = /^\s*[:–(-]?\s*(none|absent|not (seen|found|present|visib
 const clauseEnd = /[;:]|\.(?!\d)|\bbut\b/i;
 const phraseEnd = /[,;:]|\.(?!\d)|\bbut\b/i;
 
+/** How a feature is written: in observers' words, or by its own name, as a list to tick has it. */
+const sayings = new Map(features.map(({ name, words }) => [name, new RegExp(`${words.source}|\\b${name}\\b`, "gi")]));
+
 /** Said at least once where its clause does not deny it and its phrase does not give it another sense. */
-function isSaid(text: string, { words, unlessWith }: Feature): boolean {
-  return [...text.matchAll(new RegExp(words.source, `${words.flags}g`))].some((found) => {
+function isSaid(text: string, { name, unlessWith }: Feature): boolean {
+  return [...text.matchAll(sayings.get(name)!)].some((found) => {
     if (ofNothing.test(found[0])) return true;
     const [before, behind] = [text.slice(0, found.index), text.slice(found.index + found[0].length)];
     if (denialBefore.test(before.split(clauseEnd).at(-1)!) || denialBehind.test(behind)) return false;

@@ -50,6 +50,17 @@ test.each([
   expect(said(speciesId, text)).toEqual([]);
 });
 
+test("each feature is known by its own name, as it is ticked", () => {
+  for (const { name, meanings, saysNothingOf } of features) {
+    const speciesId = meanings.flatMap(({ species }) => (species === "any" ? [] : species))[0] ?? "corundum";
+    const { findings, silent } = of(speciesId, name);
+    if (meanings.length > 0) expect(findings.map(({ feature }) => feature), name).toContain(name);
+    if (saysNothingOf) expect(silent.map(({ feature }) => feature), name).toContain(name);
+  }
+  expect(said("corundum", "Join of an assembled stone")).toEqual(["nature: composite, positive"]);
+  expect(said("corundum", "no silk, intact")).toEqual([]);
+});
+
 test("bubbles speak of a melt by themselves, of a filling within a fissure", () => {
   expect(said("corundum", "two-phase inclusions, gas bubbles in a row")).toEqual(["nature: synthetic, indication"]);
   expect(said("corundum", "flattened bubbles in a fissure")).toEqual(["treatment: fissures filled with glass or resin, indication"]);
