@@ -15,7 +15,7 @@ type StoneToTest = Readonly<{ weightText: string; isMounted: boolean; mount: str
 export type NextTests = Readonly<{ recommended: ReadonlyArray<NextTest & { kind: ObservationKind }>; vetoed: readonly Vetoed[] }>;
 
 /** The tests that the bench has a form for. */
-const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refractometer", spot: "spot", polariscope: "polariscope", figure: "polariscope", density: "density", dichroscope: "dichroscope", longWave: "ultraviolet", shortWave: "ultraviolet", colourFilter: "colourFilter", thermalProbe: "thermalProbe" };
+const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refractometer", spot: "spot", polariscope: "polariscope", figure: "polariscope", density: "density", dichroscope: "dichroscope", longWave: "ultraviolet", shortWave: "ultraviolet", colourFilter: "colourFilter", thermalProbe: "thermalProbe", spectroscope: "spectroscope", magnet: "magnet", brewster: "brewster", depth: "realDepth" };
 const mostShown = 3;
 
 /** What to test next, from the readings that stand, this stone's weight, its consents and the instruments at hand. */
@@ -29,6 +29,7 @@ export function nextTestsForStone(readings: readonly NumberedReading[], table: S
     uAirCt: weighingUncertaintyCt(balance),
     uWaterCt: waterWeighingUncertaintyCt(balance),
     isPolished: true,
+    isOverLimit: evidence.ri?.some(({ kind }) => kind === "overLimit") ?? false,
     offered: new Set(Object.keys(kindOf) as BenchTestId[]),
     done,
     poor,
@@ -51,7 +52,8 @@ function testsMade(readings: readonly NumberedReading[]): { done: Set<BenchTestI
     if (detail.kind === "density") to.add("density");
     if (detail.kind === "rotation") to.add("edges").add("spot");
     if (detail.kind === "ultraviolet") to.add(detail.wave === "shortWave" ? "shortWave" : "longWave");
-    if (detail.kind === "dichroscope" || detail.kind === "colourFilter" || detail.kind === "thermalProbe") to.add(detail.kind);
+    if (detail.kind === "realDepth") to.add("depth");
+    if (detail.kind === "spectroscope" || detail.kind === "magnet" || detail.kind === "brewster" || detail.kind === "dichroscope" || detail.kind === "colourFilter" || detail.kind === "thermalProbe") to.add(detail.kind);
   }
   return { done, poor };
 }
@@ -75,6 +77,10 @@ function barredTests({ consents, instruments, isMounted, mount }: StoneToTest): 
   bar(["longWave", "shortWave"], consents.includes("ultraviolet") ? undefined : "the client has not agreed to ultraviolet light");
   bar(["thermalProbe"], consents.includes("thermalProbe") ? undefined : "the client has not agreed to the thermal probe");
   bar(["dichroscope"], missing("dichroscope", "dichroscope"));
+  bar(["spectroscope"], missing("spectroscope", "spectroscope"));
+  bar(["magnet"], isMounted ? "the mount’s metal would answer the magnet" : missing("magnet", "magnet"));
+  bar(["brewster"], missing("brewsterMeter", "Brewster-angle meter"));
+  bar(["depth"], missing("microscope", "microscope with a focus scale"));
   bar(["longWave", "shortWave"], missing("uvLamp", "ultraviolet lamp"));
   bar(["thermalProbe"], missing("thermalProbe", "thermal probe"));
   return barred;
