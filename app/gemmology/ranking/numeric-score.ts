@@ -1,7 +1,7 @@
 import { blunderShares } from "./defaults.ts";
 import { normalCdf } from "../statistics/normal-cdf.ts";
 import { normalPdf } from "../statistics/normal-pdf.ts";
-import { softUniformDensity, softUniformTwoSided, type SoftUniform } from "./soft-uniform.ts";
+import { softUniformCdf, softUniformDensity, softUniformSurvival, type SoftUniform } from "./soft-uniform.ts";
 import type { Interval } from "../species/species-table.ts";
 import type { Score } from "./term.ts";
 
@@ -39,8 +39,8 @@ export function numericScore({ value, u, range, usual, softness, span, blunderSh
   return { logLikelihood: Math.log((1 - blunderShare) * density + blunderShare / span), tail: distance === 0 ? 1 : tailOf(soft, value, usual, spread), distance };
 }
 
-/** Two-sided, of the same mixture as the density. */
+/** Two-sided, of the same mixture as the density; the value lies outside the range, so that its nearer tail is known. */
 function tailOf(soft: SoftUniform, value: number, usual: number | undefined, spread: number): number {
-  const even = softUniformTwoSided(soft, value);
-  return usual === undefined ? even : Math.min(1, (1 - usualShare) * even + 2 * usualShare * normalCdf(-Math.abs(value - usual) / spread));
+  const even = 2 * (value > soft.high ? softUniformSurvival(soft, value) : softUniformCdf(soft, value));
+  return usual === undefined ? Math.min(1, even) : Math.min(1, (1 - usualShare) * even + 2 * usualShare * normalCdf(-Math.abs(value - usual) / spread));
 }
