@@ -4,6 +4,7 @@ export default [
   index("routes/home.tsx"),
   route("healthz", "routes/healthz.ts"),
   route("room", "routes/room.ts"),
+  route("spectrum-view", "routes/spectrum-view.ts"),
 
   route("species-table/:fileName", "routes/species-table.ts"),
   route("species-names/:fileName", "routes/species-names.ts"),

@@ -40,6 +40,7 @@ export async function routeLines(): Promise<RouteLine[]> {
     { path: "", get: "anyone" },
     { path: "healthz", get: "anyone" },
     { path: "room", post: "anyone" },
+    { path: "spectrum-view", post: "anyone" },
     { path: "species-table/:fileName", params: { fileName: "none.json" }, get: "anyone", getStatus: 404 },
     { path: "species-names/:fileName", params: { fileName: "none.json" }, get: "anyone", getStatus: 404 },
     { path: "sign-in", get: "anyone", post: "anyone" },
