@@ -1,5 +1,5 @@
 import { getFormProps, useForm, type SubmissionResult } from "@conform-to/react";
-import { useState, type FormEvent } from "react";
+import { useCallback, useRef, useState, type FormEvent } from "react";
 import { Form, useNavigation } from "react-router";
 import { formatCalendarDate } from "#app/domain/calendar-date.ts";
 import { Button } from "#app/components/ui/button.tsx";
@@ -8,12 +8,18 @@ import { FormAlert } from "#app/components/ui/form-alert.tsx";
 import { RadioGroupField } from "#app/components/ui/choice-field.tsx";
 import { SelectField } from "#app/components/ui/select-field.tsx";
 import { TextAreaField } from "#app/components/ui/text-field.tsx";
-import { instrumentKindFor, noResultReasons, readingQualities, readingQualityNames, type ObservationKind } from "#app/domain/reading.ts";
+import { Caution } from "#app/components/ui/caution.tsx";
+import { isDescribed } from "#app/domain/bench-tests/test-forms.ts";
+import { aboutTest, noResultReasons, readingQualities, readingQualityNames, type ObservationKind, type ReadingQuality } from "#app/domain/reading.ts";
 import { composeReading, type ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
 import { withUncertainty } from "#app/features/readings/reading-words.ts";
 import type { BenchInstrument } from "#app/features/stones/get-bench.server.ts";
+import { DescribedFields } from "./described-fields.tsx";
+import { moveOnByEnter } from "./move-on-by-enter.ts";
 import { ReadingFields, type ReadingFieldset } from "./reading-fields.tsx";
+import { RotationFields } from "./rotation-fields.tsx";
+import { useFirstField } from "./use-first-field.ts";
 
 type NewReadingProps = {
   kind: ObservationKind;
@@ -23,14 +29,13 @@ type NewReadingProps = {
   areCandidatesHidden: boolean;
   /** What the typed digits amount to; null while they are no reading. */
   onDraft?: (reading: ComposedReading | null) => void;
-  caution?: string;
 };
 
 /** The form of one test. It posts without script; with script it says at once what follows from the digits. */
-export function NewReading({ kind, instruments, requestId, lastResult, areCandidatesHidden, onDraft, caution }: NewReadingProps) {
-  const needed = instrumentKindFor[kind];
+export function NewReading({ kind, instruments, requestId, lastResult, areCandidatesHidden, onDraft }: NewReadingProps) {
+  const { instrumentKind: needed, needsInstrument, caution } = aboutTest(kind);
   const fitting = needed ? instruments.filter((instrument) => instrument.kind === needed) : instruments;
-  const usual = needed ? (fitting.find(({ isOutOfCheck, status }) => !isOutOfCheck && status === "inService") ?? fitting[0]) : undefined;
+  const usual = needed && needsInstrument ? (fitting.find(({ isOutOfCheck, status }) => !isOutOfCheck && status === "inService") ?? fitting[0]) : undefined;
   const [form, fields] = useForm<ReadingFieldset>({
     id: `reading-${kind}`,
     lastResult,
@@ -40,6 +45,9 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
   });
   const [preview, setPreview] = useState<ComposedReading | null>(null);
   const [instrumentRef, setInstrumentRef] = useState(usual?.ref ?? "");
+  const [quality, setQuality] = useState<ReadingQuality>("good");
+  const element = useRef<HTMLFormElement>(null);
+  useFirstField(element);
   const navigation = useNavigation();
   const isSaving = navigation.state === "submitting";
   const instrument = fitting.find(({ ref }) => ref === instrumentRef) ?? null;
@@ -48,22 +56,36 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
     const typed = new FormData(event.currentTarget);
     const chosen = fitting.find(({ ref }) => ref === typed.get("instrument")) ?? null;
     setInstrumentRef(chosen?.ref ?? "");
-    const reading = composeReading(readingDraftFromForm(typed), chosen).reading ?? null;
-    setPreview(reading);
-    onDraft?.(reading);
+    const draft = readingDraftFromForm(typed);
+    setQuality(draft.quality);
+    // A run is fitted where its curves are drawn.
+    if (draft.kind !== "rotation") show(composeReading(draft, chosen).reading ?? null);
   }
+  const show = useCallback(
+    (reading: ComposedReading | null) => {
+      setPreview(reading);
+      onDraft?.(reading);
+    },
+    [onDraft],
+  );
 
   return (
-    <Form method="post" preventScrollReset {...getFormProps(form)} onChange={onType} className="group/reading grid gap-x-7 gap-y-4 px-4.5 py-4 md:grid-cols-[minmax(0,19rem)_minmax(0,1fr)]">
+    <Form method="post" preventScrollReset {...getFormProps(form)} ref={element} onChange={onType} onKeyDown={moveOnByEnter} className="group/reading grid gap-x-7 gap-y-4 px-4.5 py-4 md:grid-cols-[minmax(0,19rem)_minmax(0,1fr)]">
       <input type="hidden" name="kind" value={kind} />
       <input type="hidden" name={fields.requestId.name} defaultValue={fields.requestId.initialValue} key={fields.requestId.key} />
       {areCandidatesHidden ? <input type="hidden" name="areCandidatesHidden" value="on" /> : null}
       <div className="md:col-span-2 empty:hidden">
         <FormAlert errors={form.errors} id={form.errorId} />
-        {caution ? <p className="text-sm text-straw">{caution}</p> : null}
+        {caution ? <Caution>{caution}</Caution> : null}
       </div>
-      <div className="grid content-start gap-3">
-        <ReadingFields kind={kind} fields={fields} />
+      <div className={`grid content-start gap-3 ${kind === "rotation" ? "md:col-span-2" : ""}`}>
+        {isDescribed(kind) ? (
+          <DescribedFields kind={kind} fields={fields} />
+        ) : kind === "rotation" ? (
+          <RotationFields rows={fields.rows} light={fields.light} onReading={show} {...{ instrument, quality }} />
+        ) : (
+          <ReadingFields kind={kind} fields={fields} />
+        )}
         <div className="mt-1 flex flex-wrap gap-2.5">
           <Button size="bench" busyLabel={isSaving && "Recording"}>
             Record
@@ -77,11 +99,11 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
             key={fields.instrument.key}
             {...fieldProps(fields.instrument)}
             label="Instrument"
-            isRequired={needed !== null}
-            emptyLabel={needed ? "Choose" : "By eye"}
+            isRequired={needsInstrument}
+            emptyLabel={needsInstrument ? "Choose" : "None, or by eye"}
             options={fitting.map(({ ref, name, description, isOutOfCheck }) => ({ value: ref, label: `${name}${description ? `, ${description}` : ""}${isOutOfCheck ? " (check overdue)" : ""}` }))}
           />
-        ) : needed ? (
+        ) : needsInstrument ? (
           <p className="text-sm text-straw">No instrument of this kind is in service. Enter it under Instruments, or record “No reading”.</p>
         ) : null}
         <RadioGroupField
@@ -102,7 +124,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
           emptyLabel="Choose"
           options={noResultReasons.map((value) => ({ value, label: value[0]!.toUpperCase() + value.slice(1) }))}
         />
-        {kind === "free" ? null : (
+        {hasOwnText.has(kind) ? null : (
           <TextAreaField key={fields.note.key} {...fieldProps(fields.note)} label="Note" isRequired={false} rows={2} maxLength={2000} />
         )}
       </div>
@@ -110,6 +132,8 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
   );
 }
 
+/** Forms whose own text is where a note would go. */
+const hasOwnText: ReadonlySet<ObservationKind> = new Set(["free", "magnification", "immersion"]);
 const pick = ({ id, errors }: { id: string; errors?: string[] }) => ({ id, errors });
 
 /** What follows from the digits, before they are saved. */

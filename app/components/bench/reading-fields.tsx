@@ -4,12 +4,12 @@ import { checkboxProps, fieldProps } from "#app/components/ui/field-props.ts";
 import { SelectField } from "#app/components/ui/select-field.tsx";
 import { TextAreaField, TextField } from "#app/components/ui/text-field.tsx";
 import {
-  facetNames, interferenceFigureNames, lightNames, polariscopeBehaviourNames, spotMethodNames, weighingMethodNames, type ObservationKind,
+  facetNames, interferenceFigureNames, lightNames, polariscopeBehaviourNames, spotMethodNames, weighingMethodNames, type WrittenKind,
 } from "#app/domain/reading.ts";
 
 export type ReadingFieldset = Record<
   | "requestId" | "instrument" | "quality" | "noResultReason" | "note" | "facet" | "light" | "isOneEdge" | "isRotated" | "low" | "high" | "n" | "method" | "limit" | "angleDeg" | "prismN"
-  | "behaviour" | "directionsTried" | "figure" | "sign" | "massAirCt" | "massLiquidCt" | "tempC" | "weightCt" | "shape" | "lengthMm" | "widthMm" | "depthMm" | "text",
+  | "behaviour" | "directionsTried" | "figure" | "sign" | "massAirCt" | "massLiquidCt" | "tempC" | "weightCt" | "shape" | "lengthMm" | "widthMm" | "depthMm" | "text" | "rows",
   string
 >;
 type Fields = Required<{ [Name in keyof ReadingFieldset]: FieldMetadata<string, ReadingFieldset, string[]> }>;
@@ -18,7 +18,7 @@ const optionsOf = (names: Readonly<Record<string, string>>) => Object.entries(na
 const figures = { inputMode: "decimal", isMono: true, size: "bench", maxLength: 24 } as const;
 
 /** What each test asks for: the numbers as the instrument shows them, then how they were seen. */
-export function ReadingFields({ kind, fields }: { kind: ObservationKind; fields: Fields }) {
+export function ReadingFields({ kind, fields }: { kind: Exclude<WrittenKind, "rotation">; fields: Fields }) {
   const number = (name: keyof ReadingFieldset, label: string, unit: string, more: object = {}) => <TextField key={fields[name].key} {...fieldProps(fields[name])} {...figures} label={label} unit={unit} {...more} />;
   const choice = (name: keyof ReadingFieldset, label: string, names: Readonly<Record<string, string>>, more: object = {}) => <SelectField key={fields[name].key} {...fieldProps(fields[name])} label={label} options={optionsOf(names)} {...more} />;
   const seen = (
@@ -32,7 +32,7 @@ export function ReadingFields({ kind, fields }: { kind: ObservationKind; fields:
       return (
         <>
           <div className="grid grid-cols-2 gap-2.5">
-            {number("low", "Low edge", "n")}
+            {number("low", "Low edge", "n", { hint: "1762 1770 will do" })}
             {number("high", "High edge", "n", { isRequired: true })}
           </div>
           <div className="flex flex-wrap gap-x-5">

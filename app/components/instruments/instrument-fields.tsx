@@ -2,7 +2,8 @@ import type { FieldMetadata } from "@conform-to/react";
 import { fieldProps } from "#app/components/ui/field-props.ts";
 import { SelectField } from "#app/components/ui/select-field.tsx";
 import { TextField } from "#app/components/ui/text-field.tsx";
-import { instrumentKindNames, instrumentKinds } from "#app/features/instruments/instrument-kinds.ts";
+import { instrumentKinds } from "#app/domain/instrument-kind.ts";
+import { instrumentKindNames } from "#app/features/instruments/instrument-kinds.ts";
 
 type Field = FieldMetadata<string, Record<string, unknown>, string[]>;
 export type InstrumentFieldset = Record<"kind" | "name" | "description" | "serial" | "location" | "resolution" | "standardUncertainty" | "upperLimit" | "prismIndex", Field>;

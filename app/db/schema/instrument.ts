@@ -1,9 +1,8 @@
 import { boolean, date, foreignKey, index, int, mysqlTable, primaryKey, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
 import { exactText, id, instant, measured } from "../columns.ts";
+import type { InstrumentKind } from "#app/domain/instrument-kind.ts";
 import { users } from "./account.ts";
 import { laboratories } from "./laboratory.ts";
-
-export type InstrumentKind = "refractometer" | "angleRefractometer" | "polariscope" | "balance" | "gauge" | "thermometer" | "microscope" | "other";
 
 export const instruments = mysqlTable(
   "instruments",

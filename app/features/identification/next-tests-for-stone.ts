@@ -15,7 +15,7 @@ type StoneToTest = Readonly<{ weightText: string; isMounted: boolean; mount: str
 export type NextTests = Readonly<{ recommended: ReadonlyArray<NextTest & { kind: ObservationKind }>; vetoed: readonly Vetoed[] }>;
 
 /** The tests that the bench has a form for. */
-const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refractometer", spot: "spot", polariscope: "polariscope", figure: "polariscope", density: "density" };
+const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refractometer", spot: "spot", polariscope: "polariscope", figure: "polariscope", density: "density", dichroscope: "dichroscope", longWave: "ultraviolet", shortWave: "ultraviolet", colourFilter: "colourFilter", thermalProbe: "thermalProbe" };
 const mostShown = 3;
 
 /** What to test next, from the readings that stand, this stone's weight, its consents and the instruments at hand. */
@@ -49,9 +49,15 @@ function testsMade(readings: readonly NumberedReading[]): { done: Set<BenchTestI
     if (detail.kind === "polariscope") to.add("polariscope");
     if (detail.kind === "polariscope" && detail.figure !== "notSought") to.add("figure");
     if (detail.kind === "density") to.add("density");
+    if (detail.kind === "rotation") to.add("edges").add("spot");
+    if (detail.kind === "ultraviolet") to.add(detail.wave === "shortWave" ? "shortWave" : "longWave");
+    if (detail.kind === "dichroscope" || detail.kind === "colourFilter" || detail.kind === "thermalProbe") to.add(detail.kind);
   }
   return { done, poor };
 }
+
+/** Instruments whose readings a check bears out; others only show or do not. */
+const checkedKinds: ReadonlySet<BenchInstrument["kind"]> = new Set(["refractometer", "angleRefractometer", "balance", "gauge"]);
 
 function barredTests({ consents, instruments, isMounted, mount }: StoneToTest): Map<BenchTestId, string> {
   const barred = new Map<BenchTestId, string>();
@@ -64,10 +70,15 @@ function barredTests({ consents, instruments, isMounted, mount }: StoneToTest): 
   const missing = (kind: BenchInstrument["kind"], name: string) => {
     const fitting = instruments.filter((instrument) => instrument.kind === kind);
     if (fitting.length === 0) return `no ${name} is in service`;
-    return fitting.every(({ isOutOfCheck }) => isOutOfCheck) && kind !== "polariscope" ? `the check of every ${name} is overdue` : undefined;
+    return fitting.every(({ isOutOfCheck }) => isOutOfCheck) && checkedKinds.has(kind) ? `the check of every ${name} is overdue` : undefined;
   };
   bar(["edges", "spot"], missing("refractometer", "refractometer"));
   bar(["polariscope", "figure"], missing("polariscope", "polariscope"));
   bar(["density"], missing("balance", "balance"));
+  bar(["longWave", "shortWave"], consents.includes("ultraviolet") ? undefined : "the client has not agreed to ultraviolet light");
+  bar(["thermalProbe"], consents.includes("thermalProbe") ? undefined : "the client has not agreed to the thermal probe");
+  bar(["dichroscope"], missing("dichroscope", "dichroscope"));
+  bar(["longWave", "shortWave"], missing("uvLamp", "ultraviolet lamp"));
+  bar(["thermalProbe"], missing("thermalProbe", "thermal probe"));
   return barred;
 }

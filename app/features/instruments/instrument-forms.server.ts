@@ -3,7 +3,7 @@ import { decimalPlaces, parseDecimal } from "#app/domain/decimal.ts";
 import { typedDecimal } from "#app/domain/typed-decimal.ts";
 import { isCalendarDate } from "#app/domain/calendar-date.ts";
 import { optionalText, requestIdField, requiredText, versionField } from "#app/features/form-fields.server.ts";
-import { instrumentKinds } from "./instrument-kinds.ts";
+import { instrumentKinds } from "#app/domain/instrument-kind.ts";
 
 /** A number of an instrument in its own unit, or nothing. */
 function optionalNumber(label: string, { min, max }: { min: number; max: number }) {

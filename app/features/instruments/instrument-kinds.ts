@@ -1,6 +1,6 @@
-export const instrumentKinds = ["refractometer", "angleRefractometer", "polariscope", "balance", "gauge", "thermometer", "microscope", "other"] as const;
+import type { InstrumentKind } from "#app/domain/instrument-kind.ts";
 
-export const instrumentKindNames: Readonly<Record<(typeof instrumentKinds)[number], string>> = {
+export const instrumentKindNames: Readonly<Record<InstrumentKind, string>> = {
   refractometer: "Refractometer",
   angleRefractometer: "Angle refractometer",
   polariscope: "Polariscope",
@@ -8,6 +8,17 @@ export const instrumentKindNames: Readonly<Record<(typeof instrumentKinds)[numbe
   gauge: "Gauge",
   thermometer: "Thermometer",
   microscope: "Microscope",
+  dichroscope: "Dichroscope",
+  spectroscope: "Spectroscope",
+  uvLamp: "Ultraviolet lamp",
+  colourFilter: "Colour filter",
+  thermalProbe: "Thermal probe",
+  conductivityMeter: "Conductivity meter",
+  magnet: "Magnet",
+  immersionSet: "Immersion liquids",
+  reflectivityMeter: "Reflectivity meter",
+  brewsterMeter: "Brewster-angle meter",
+  heavyLiquids: "Heavy liquids",
   other: "Other",
 };
 

@@ -1,32 +1,37 @@
 import type { FieldErrors } from "#app/domain/app-error.ts";
-import { decimalPlaces, parseDecimal } from "#app/domain/decimal.ts";
-import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
+import { parseDecimal } from "#app/domain/decimal.ts";
+import { impliedIndex } from "#app/domain/implied-index.ts";
+import type { ReadingDetail, ReadingQuality, ReadingValue } from "#app/domain/reading.ts";
 import { derivedDensity, derivedIndex, differenceOfEdges } from "./derived-values.ts";
-import type { ReadingDraft } from "./reading-draft.ts";
+import { plainText } from "#app/domain/plain-text.ts";
+import { composeDescribed } from "./compose-described.ts";
+import { isDescribedDraft, type ReadingDraft } from "./reading-draft.ts";
+import type { ReadingInstrument } from "./reading-instrument.ts";
+import { readNumber, type NumberRule } from "./read-number.ts";
 import { angleUncertaintyDeg, edgeUncertainty, gaugeUncertaintyMm, spotUncertainty, usualUncertainty, waterWeighingUncertaintyCt, weighingUncertaintyCt } from "./usual-uncertainty.ts";
 
-/** What a reading needs to know of the instrument that it was made on. */
-export type ReadingInstrument = Readonly<{ resolution: number | null; standardUncertainty: number | null; upperLimit: number | null; prismIndex: number | null }>;
 export type ComposedReading = Readonly<{ detail: ReadingDetail; quality: ReadingQuality; values: readonly ReadingValue[] }>;
+/** Every test but the rotation run, whose fit is loaded where it is needed: see compose-rotation.ts. */
+export type QuickDraft = Exclude<ReadingDraft, { kind: "rotation" }>;
 export type Composed = { reading: ComposedReading; problems?: undefined } | { reading?: undefined; problems: FieldErrors };
-
-type NumberRule = Readonly<{ name: ReadingValueName; what: string; unit: ReadingValue["unit"]; example: string; min: number; max: number; mostDecimals: number; isReadOnInstrument?: boolean; u: number | null }>;
 
 /**
  * A reading as it was typed, turned into its numbers with their uncertainties and what follows from them, or into what
  * is wrong, a sentence a field. The browser runs it as digits are typed, the server before it saves.
  */
-export function composeReading(draft: ReadingDraft, instrument: ReadingInstrument | null): Composed {
+export function composeReading(draft: QuickDraft, instrument: ReadingInstrument | null): Composed {
+  if (isDescribedDraft(draft)) return composeDescribed(draft, instrument);
   const problems: Record<string, string[]> = {};
   const values: ReadingValue[] = [];
   const refuse = (field: string, message: string) => void (problems[field] ??= []).push(message);
   const number = (field: string, text: string, rule: NumberRule): number | undefined => {
-    const read = readNumber(text, rule, instrument);
+    const digits = rule.unit === "n" ? impliedIndex(text) : text;
+    const read = readNumber(digits, rule, instrument);
     if (typeof read === "string") {
       refuse(field, read);
       return undefined;
     }
-    values.push({ name: rule.name, value: read, typedText: text.trim(), unit: rule.unit, standardUncertainty: rule.u, formula: null });
+    values.push({ name: rule.name, value: read, typedText: digits.trim(), unit: rule.unit, standardUncertainty: rule.u, formula: null });
     return read;
   };
   const { quality } = draft;
@@ -111,7 +116,7 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
         return { kind, shape };
       }
       case "free": {
-        const text = draft.text.replace(/\r\n?/g, "\n").normalize("NFC").trim();
+        const text = plainText(draft.text);
         if (!isEmpty && text === "") refuse("text", "Write what was seen.");
         if (text.length > mostFreeText) refuse("text", `At most ${mostFreeText} characters; this is ${text.length}.`);
         return { kind: draft.kind, text };
@@ -150,31 +155,3 @@ const mostFreeText = 1000;
 const largestGap = 0.3;
 const indexRule = { unit: "n", example: "1.762", min: 1.3, max: 2.1, mostDecimals: 4, isReadOnInstrument: true } as const;
 const massRule = { unit: "ct", min: 0, max: 500_000, mostDecimals: 4, isReadOnInstrument: true } as const;
-
-/** The number, or the sentence that says why it is none. */
-function readNumber(text: string, { what, unit, example, min, max, mostDecimals, isReadOnInstrument, name }: NumberRule, instrument: ReadingInstrument | null): number | string {
-  if (text.trim() === "") return `Write ${what}.`;
-  const value = text.length > 24 ? undefined : parseDecimal(text);
-  if (value === undefined) return `Write ${what} as it is shown, in digits: for example ${example}.`;
-  if (unit === "ct" && (name === "massLiquidCt" ? value < 0 : value <= 0)) return name === "massLiquidCt" ? `${sentence(what)} is not less than zero.` : `${sentence(what)} is more than zero.`;
-  if (value < min) return unit === "mm" ? `${sentence(what)} is at least ${min} mm.` : outside(what, unit, min, max);
-  if (value > max) return unit === "ct" || unit === "mm" ? `At most ${max} ${unit}: is the unit right?` : outside(what, unit, min, max);
-  const decimals = decimalPlaces(text);
-  if (decimals > mostDecimals) return `At most ${mostDecimals} decimals.`;
-  const step = isReadOnInstrument ? instrument?.resolution : null;
-  if (step && decimals > Math.max(decimalsOf(step), 2)) return `This instrument is read to ${step}: write the digits that it shows.`;
-  return value;
-}
-
-const unitWords: Partial<Record<ReadingValue["unit"], string>> = { deg: "°", degC: " °C" };
-
-function outside(what: string, unit: ReadingValue["unit"], min: number, max: number): string {
-  const words = unitWords[unit] ?? "";
-  return `${sentence(what)} lies between ${min}${words} and ${max}${words}.`;
-}
-
-function decimalsOf(step: number): number {
-  return /\.(\d+)$/.exec(step.toFixed(6).replace(/0+$/, ""))?.[1]?.length ?? 0;
-}
-
-const sentence = (text: string) => text[0]!.toUpperCase() + text.slice(1);

@@ -1,9 +1,10 @@
 import { z } from "zod";
 import {
-  facets, interferenceFigures, lights, noResultReasons, polariscopeBehaviours, readingQualities, spotMethods, weighingMethods,
+  facets, interferenceFigures, lights, noResultReasons, polariscopeBehaviours, readingQualities, spotMethods, weighingMethods, type ObservationKind,
 } from "#app/domain/reading.ts";
 import { idFromShortRef } from "#app/domain/short-ref.ts";
-import type { ReadingDraft } from "./reading-draft.ts";
+import { describedKinds, isDescribed, testForms, type DescribedKind } from "#app/domain/bench-tests/test-forms.ts";
+import { twoEdges, type DescribedDraft, type ReadingDraft } from "./reading-draft.ts";
 import { isTicked, optionalLines, requestIdField, requiredText } from "#app/features/form-fields.server.ts";
 
 /** Digits as typed; whether they make sense is judged with the instrument in hand (compose-reading.ts). */
@@ -35,6 +36,13 @@ const common = {
   areCandidatesHidden: isTicked(),
 };
 
+/** The fields of a described test as they came; composeDescribed judges them with the instrument in hand. */
+function typedFields(kind: DescribedKind) {
+  const one = () => z.string().optional().transform((text) => text ?? "");
+  const many = () => z.union([z.array(z.string()), z.string().transform((text) => [text])]).optional().transform((texts) => texts ?? []);
+  return Object.fromEntries(testForms[kind].fields.map(({ name, type }) => [name, type === "many" ? many() : one()]));
+}
+
 const readings = z.discriminatedUnion(
   "kind",
   [
@@ -53,7 +61,9 @@ const readings = z.discriminatedUnion(
     z.object({ ...common, kind: z.literal("density"), method: z.enum(weighingMethods, { error: "Choose how it was weighed." }), massAirCt: typed(), massLiquidCt: typed(), tempC: typed() }),
     z.object({ ...common, kind: z.literal("weight"), weightCt: typed() }),
     z.object({ ...common, kind: z.literal("dimensions"), shape: z.enum(["round", "other"], { error: "Choose the outline." }), lengthMm: typed(), widthMm: typed(), depthMm: typed() }),
+    z.object({ ...common, kind: z.literal("rotation"), light: seen.light, rows: typed() }),
     z.object({ ...common, kind: z.literal("free"), text: typed() }),
+    ...describedKinds.map((kind) => z.object({ ...common, kind: z.literal(kind), ...typedFields(kind) })),
   ],
   { error: "Choose a test." },
 );
@@ -76,8 +86,11 @@ export const readingForm = readings
     draft: draftOf(input),
   }));
 
+const isOfDescribed = <Input extends { kind: ObservationKind }>(input: Input): input is Extract<Input, { kind: DescribedKind }> => isDescribed(input.kind);
+
 function draftOf(input: z.output<typeof readings>): ReadingDraft {
-  if (input.kind === "refractometer") return { ...input, edges: input.isOneEdge ? "one" : "two" };
+  if (isOfDescribed(input)) return { kind: input.kind, quality: input.quality, typed: Object.fromEntries(testForms[input.kind].fields.map(({ name }) => [name, (input as unknown as DescribedDraft["typed"])[name] ?? ""])) };
+  if (input.kind === "refractometer") return { ...input, ...twoEdges(input), edges: input.isOneEdge ? "one" : "two" };
   if (input.kind === "polariscope") return { ...input, behaviour: input.behaviour ?? "cannotTell", figure: input.figure ?? "notSought", sign: input.sign ?? null };
   return input;
 }

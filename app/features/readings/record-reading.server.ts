@@ -4,7 +4,8 @@ import { instrumentChecks, instruments, itemConsents, items, observations, obser
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import type { Id, InstrumentId, ObservationId, SecondCheckId } from "#app/domain/ids.ts";
-import { consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
+import type { ConsentCode } from "#app/domain/consent-code.ts";
+import { aboutTest, consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
 import { examinationStateNames } from "#app/domain/stone-state.ts";
 import { typedDecimal } from "#app/domain/typed-decimal.ts";
 import { recordAudit } from "#app/features/audit/record-audit.server.ts";
@@ -12,7 +13,8 @@ import { instrumentKindNames } from "#app/features/instruments/instrument-kinds.
 import type { LabContext } from "#app/features/lab-context.ts";
 import { requireRole } from "#app/features/require-role.ts";
 import { moveExamination } from "#app/features/stones/move-examination.server.ts";
-import { composeReading, type ComposedReading } from "./compose-reading.ts";
+import { composeAnyReading } from "./compose-any-reading.ts";
+import type { ComposedReading } from "./compose-reading.ts";
 import type { ReadingDraft } from "./reading-draft.ts";
 import { readingWarnings } from "./reading-warnings.ts";
 
@@ -60,7 +62,7 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     if (stone.goodsState === "released") throw new AppError("conflict", "These goods have been released: nothing more can be read from them.");
     if (draft.quality !== "noResult") await requireConsent(scope, { kind: draft.kind, itemId: stone.itemId, isMounted: stone.isMounted });
     const { instrument, check } = await findInstrument(scope, input);
-    const { reading, problems } = composeReading(draft, instrument);
+    const { reading, problems } = composeAnyReading(draft, instrument);
     if (!reading) throw new AppError("invalid_input", Object.values(problems)[0]?.[0] ?? "This reading is not complete.", { fieldErrors: problems });
 
     const [counted] = await tx
@@ -132,10 +134,18 @@ async function requireConsent(ctx: LabContext, { kind, itemId, isMounted }: { ki
   if (kind === "density" && (isMounted || isStrung)) throw refusal(`A ${isStrung ? "strung" : "mounted"} stone is not weighed in water: the weight would be that of everything together. Record “No reading”, because the mount blocks it.`);
   if (kind === "weight" && (isMounted || isStrung)) throw refusal(`A ${isStrung ? "strung" : "mounted"} stone cannot be weighed by itself. Record “No reading”, because the mount blocks it.`);
   if (code && !item?.isGiven) {
-    const what = code === "hydrostatic" ? "weighing in water" : "contact liquid on a facet";
-    throw refusal(`The client has not agreed to ${what}. Record “No reading”, consent refused, or ask the client first.`);
+    throw refusal(`The client has not agreed to ${consentWords[code] ?? "this test"}. Record “No reading”, consent refused, or ask the client first.`);
   }
 }
+
+const consentWords: Partial<Record<ConsentCode, string>> = {
+  contactLiquid: "contact liquid on a facet",
+  hydrostatic: "weighing in water",
+  ultraviolet: "ultraviolet light",
+  immersionLiquid: "immersion in a liquid",
+  heavyLiquid: "heavy liquids",
+  thermalProbe: "the thermal probe",
+};
 
 function refusal(message: string): AppError {
   return new AppError("invalid_input", message, { fieldErrors: { quality: [message] } });
@@ -145,7 +155,7 @@ async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordRe
   const kind = instrumentKindFor[draft.kind];
   const wrong = (message: string) => new AppError("invalid_input", message, { fieldErrors: { instrument: [message] } });
   if (instrumentId === null) {
-    if (kind === null || draft.quality === "noResult") return { instrument: null, check: null };
+    if (!aboutTest(draft.kind).needsInstrument || draft.quality === "noResult") return { instrument: null, check: null };
     throw wrong("Choose the instrument that showed it.");
   }
   const { db, laboratoryId } = ctx;

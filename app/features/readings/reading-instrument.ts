@@ -1,0 +1,2 @@
+/** What a reading needs to know of the instrument that it was made on. */
+export type ReadingInstrument = Readonly<{ resolution: number | null; standardUncertainty: number | null; upperLimit: number | null; prismIndex: number | null }>;
