@@ -1,5 +1,5 @@
 import { useId, useRef, useState, type FormEvent } from "react";
-import { useIsHydrated } from "#app/components/accounts/use-is-hydrated.ts";
+import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 import { DrawnSpectrum } from "#app/components/charts/spectrum/drawn-spectrum.tsx";
 import { TextAreaField } from "#app/components/ui/text-field.tsx";
 import { spectrumLineWords } from "#app/domain/bench-tests/spectrum-line-words.ts";
@@ -22,6 +22,7 @@ type SpectrumLinesFieldProps = {
   errors?: readonly string[];
   defaultValue?: string;
   maxLength?: number;
+  placeholder?: string;
   /** As this browser chose; see spectrum-view.server.ts. */
   view?: SpectrumView;
   onView?: (view: SpectrumView) => void;
@@ -33,7 +34,7 @@ type SpectrumLinesFieldProps = {
  * Lines and bands of a spectrum: a field of words, which is what is sent, and the same drawn. Either changes the other.
  * Without script the words alone are typed.
  */
-export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, errors, defaultValue = "", maxLength = 500, view: initialView = usualSpectrumView, onView, candidates = [] }: SpectrumLinesFieldProps) {
+export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, errors, defaultValue = "", maxLength = 500, placeholder, view: initialView = usualSpectrumView, onView, candidates = [] }: SpectrumLinesFieldProps) {
   const isLive = useIsHydrated();
   const field = useRef<HTMLTextAreaElement>(null);
   const helpId = useId();
@@ -76,6 +77,7 @@ export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, 
         isRequired={false}
         rows={2}
         maxLength={maxLength}
+        placeholder={placeholder}
         defaultValue={defaultValue}
         hint={hint}
         errors={errors}

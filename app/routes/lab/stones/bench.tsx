@@ -16,6 +16,7 @@ import { Caution } from "#app/components/ui/caution.tsx";
 import { isAllowed } from "#app/domain/permissions.ts";
 import { observationKinds, type ObservationKind } from "#app/domain/reading.ts";
 import { nextTestsForStone } from "#app/features/identification/next-tests-for-stone.ts";
+import { absorptionLines } from "#app/features/species/absorption-lines.ts";
 import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
 import { rankStone } from "#app/features/identification/rank-stone.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
@@ -30,12 +31,13 @@ import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
+import { spectrumViewOf } from "#app/web/spectrum-view.server.ts";
 import type { Route } from "./+types/bench";
 
 const testOf = (url: URL): ObservationKind => observationKinds.find((kind) => kind === url.searchParams.get("test")) ?? "refractometer";
 const checkName = (isSolePractice: boolean) => (isSolePractice ? "Self-check" : "Second check");
 
-export async function loader({ context, params, url }: Route.LoaderArgs) {
+export async function loader({ request, context, params, url }: Route.LoaderArgs) {
   const ctx = context.get(labContext);
   const { readings, conclusion, check, instruments, ...bench } = await orResponse(getBench(ctx, params));
   // A checker works on a page of their own until they compare; nothing of the examination leaves the server before.
@@ -45,6 +47,8 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const isOffered = mayCheck && !bench.isInvolved && url.searchParams.get("show") !== "examination";
   const shown = isOffered ? null : readings;
   const examined = shown?.filter(({ isOfSecondCheck }) => !isOfSecondCheck) ?? null;
+  const ranking = examined && (await rankStone(ctx, { readings: examined })).bench;
+  const areCandidatesHidden = url.searchParams.get("candidates") === "hidden";
   return {
     stone: bench.stone,
     condition: bench.stone.condition,
@@ -56,10 +60,15 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
     check: isOffered ? null : check && { kind: check.kind, checker: check.checker, isCompared: check.comparedAt !== null, outcome: check.outcome, reason: check.reason },
     conclusion: isOffered ? null : conclusion && { version: conclusion.version, by: conclusion.by },
     instruments: isOffered ? [] : instruments,
-    ranking: examined && (await rankStone(ctx, { readings: examined })).bench,
+    ranking,
     next: examined && nextTestsForStone(examined, loadSpeciesTable().table, { ...bench.stone, consents: bench.consents, instruments }),
     test: testOf(url),
-    areCandidatesHidden: url.searchParams.get("candidates") === "hidden",
+    areCandidatesHidden,
+    spectrum: {
+      view: spectrumViewOf(request),
+      candidates: testOf(url) === "spectroscope" && ranking?.hasEvidence && !areCandidatesHidden ? absorptionLines(loadSpeciesTable().table, ranking.candidates.map(({ speciesId }) => speciesId)) : [],
+      taken: url.searchParams.getAll("line").join(", ").slice(0, 500),
+    },
     requestId: newRequestId(),
     can: {
       record: isAllowed(ctx.roles, "readings.record") && bench.stone.goodsState !== "released" && ["received", "examining", "returned"].includes(state),
@@ -78,6 +87,7 @@ export async function action({ request, context, params, url }: Route.ActionArgs
   try {
     const { sequence, warnings } = await recordReading(ctx, { ...submission.value, stoneCode: params.stoneCode });
     const notice = [`Reading ${sequence} is recorded.`, ...warnings].join(" ");
+    url.searchParams.delete("line"); // what was taken from a measured spectrum is recorded now
     return redirect(`${url.pathname}${url.search}`, { headers: { "Set-Cookie": await noticeHeader(notice, warnings.length > 0 ? "caution" : "done") } });
   } catch (error) {
     return formRefused(submission, error);
@@ -142,7 +152,7 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
 type LoaderData = Route.ComponentProps["loaderData"];
 type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
-function Examination({ readings, ranking, next, instruments, test, requestId, areCandidatesHidden, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
+function Examination({ readings, ranking, next, instruments, test, requestId, areCandidatesHidden, spectrum, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
   const [typed, setTyped] = useState<ComposedReading | null>(null);
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const struckCount = readings.filter(({ strike }) => strike).length;
@@ -157,7 +167,7 @@ function Examination({ readings, ranking, next, instruments, test, requestId, ar
             <NewReading
               // One's own saved reading clears the form; a refused one keeps what was typed, and a colleague's leaves it alone.
               key={`${test}-${readings.filter(({ isOwn }) => isOwn).length}`}
-              {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden }}
+              {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden, spectrum }}
               onDraft={setTyped}
             />
           </Card>
