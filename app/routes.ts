@@ -81,6 +81,8 @@ export default [
       route("stones/:stoneCode", "routes/lab/stones/bench.tsx"),
       route("stones/:stoneCode/mark.json", "routes/lab/stones/mark.ts"),
       route("stones/:stoneCode/sheet", "routes/lab/stones/sheet.tsx"),
+      route("stones/:stoneCode/spectra", "routes/lab/stones/spectra.tsx"),
+      route("stones/:stoneCode/spectra/:sequence/file", "routes/lab/stones/spectrum-file.ts"),
       route("stones/:stoneCode/readings/:sequence/strike", "routes/lab/stones/strike.tsx"),
       route("stones/:stoneCode/conclusion", "routes/lab/stones/conclusion.tsx"),
       route("stones/:stoneCode/second-check", "routes/lab/stones/second-check.tsx"),

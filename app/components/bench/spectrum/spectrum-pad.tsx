@@ -111,7 +111,7 @@ export function SpectrumPad({ id, lines, view, selected, onSelect, onAdd, onChan
       aria-valuemax={drawnSpectrumNm.to}
       aria-valuenow={cursorNm}
       aria-valuetext={`${cursorNm} nm${bandFromNm === null ? "" : `, band from ${bandFromNm} nm`}${here ? `, ${spectrumLineWords(here)}` : ""}`}
-      className="block cursor-crosshair touch-pan-y overflow-visible select-none"
+      className="block cursor-crosshair touch-pan-y overflow-visible rounded-sm outline-none select-none focus-visible:outline-2 focus-visible:outline-offset-2 focus-visible:outline-tint"
       onKeyDown={onKeyDown}
       onFocus={() => setHasFocus(true)}
       onBlur={() => setHasFocus(false)}

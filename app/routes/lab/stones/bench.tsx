@@ -176,11 +176,16 @@ function Examination({ readings, ranking, next, instruments, test, requestId, ar
           title="Readings"
           note={`${readings.length - struckCount} kept, ${struckCount} struck`}
           aside={
-            readings.length > 0 ? (
-              <Link to={`${base}/sheet`} className="no-print text-sm text-ink-2">
-                Bench sheet
+            <span className="no-print flex flex-wrap gap-x-4 text-sm">
+              <Link to={`${base}/spectra`} className="text-ink-2">
+                Measured spectra
               </Link>
-            ) : null
+              {readings.length > 0 ? (
+                <Link to={`${base}/sheet`} className="text-ink-2">
+                  Bench sheet
+                </Link>
+              ) : null}
+            </span>
           }
         >
           <ReadingsTable
