@@ -1,3 +1,4 @@
+import { solve } from "../linear/solve.ts";
 import { absorbanceOf } from "./absorbance.ts";
 import type { MeasuredSpectrum } from "./measured-spectrum.ts";
 import { prominencesOf } from "./prominences.ts";
@@ -19,6 +20,8 @@ const widestLineNm = 8;
 const leastShareOfRange = 0.02;
 const leastOverNoise = 6;
 const mostPeaks = 24;
+/** Of a peak's prominence from its top, where its middle is sought. */
+const topShare = 0.3;
 
 /**
  * Peaks to offer of a measured spectrum, the most prominent ones, in the order of their wavelength. A person decides
@@ -40,7 +43,7 @@ export function spectrumPeaks(spectrum: MeasuredSpectrum): SpectrumPeak[] {
     .slice(0, mostPeaks)
     .map(({ at, prominence }) => {
       const widthNm = widthAt(axis, values, at, values[at]! - prominence / 2);
-      return { nm: topOf(axis, values, at), widthNm, prominence, kind: widthNm <= widestLineNm ? ("line" as const) : ("band" as const) };
+      return { nm: topOf(axis, values, at, prominence), widthNm, prominence, kind: widthNm <= widestLineNm ? ("line" as const) : ("band" as const) };
     })
     .sort((a, b) => a.nm - b.nm);
 }
@@ -54,12 +57,28 @@ function noiseOf(values: readonly number[]): number {
   return jumps.length === 0 ? 0 : jumps[Math.floor(jumps.length / 2)]! / (0.6745 * Math.sqrt(6));
 }
 
-/** The top of the parabola through a maximum and its two neighbours; of a flat top its middle. */
-function topOf(axis: readonly number[], values: readonly number[], at: number): number {
-  const [x0, x1, x2] = [axis[at - 1]!, axis[at]!, axis[at + 1]!];
-  const [left, right] = [(values[at]! - values[at - 1]!) / (x1 - x0), (values[at + 1]! - values[at]!) / (x2 - x1)];
-  if (left <= 0 || right >= 0) return middleOfFlat(axis, values, at);
-  return Math.min(x2, Math.max(x0, x0 + (x1 - x0) / 2 + (left * (x2 - x0)) / (2 * (left - right))));
+/**
+ * The top of the parabola of least squares through all that stands in the highest three tenths of a peak, so that noise
+ * moves it little; through its neighbours where these are few; of a flat top its middle.
+ */
+function topOf(axis: readonly number[], values: readonly number[], at: number, prominence: number): number {
+  if (values[at - 1] === values[at] || values[at + 1] === values[at]) return middleOfFlat(axis, values, at);
+  const level = values[at]! - topShare * prominence;
+  let [start, end] = [at - 1, at + 1];
+  while (start > 0 && values[start - 1]! > level) start--;
+  while (end + 1 < values.length && values[end + 1]! > level) end++;
+  // Powers of the distance from the highest point, in units of the stretch, summed for the normal equations.
+  const unit = axis[end]! - axis[start]!;
+  const sums = [0, 0, 0, 0, 0];
+  const right = [0, 0, 0];
+  for (let index = start; index <= end; index++) {
+    const x = (axis[index]! - axis[at]!) / unit;
+    for (let power = 0; power <= 4; power++) sums[power]! += x ** power;
+    for (let power = 0; power <= 2; power++) right[power]! += (values[index]! - values[at]!) * x ** power;
+  }
+  const [, slope, bend] = solve([sums.slice(0, 3), sums.slice(1, 4), sums.slice(2, 5)], right) as [number, number, number];
+  const top = axis[at]! - (unit * slope) / (2 * bend);
+  return bend < 0 && top >= axis[start]! && top <= axis[end]! ? top : axis[at]!;
 }
 
 function middleOfFlat(axis: readonly number[], values: readonly number[], at: number): number {
