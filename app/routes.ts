@@ -80,6 +80,7 @@ export default [
       // bench
       route("stones/:stoneCode", "routes/lab/stones/bench.tsx"),
       route("stones/:stoneCode/mark.json", "routes/lab/stones/mark.ts"),
+      route("stones/:stoneCode/sent-readings", "routes/lab/stones/sent-readings.ts"),
       route("stones/:stoneCode/sheet", "routes/lab/stones/sheet.tsx"),
       route("stones/:stoneCode/spectra", "routes/lab/stones/spectra.tsx"),
       route("stones/:stoneCode/spectra/:sequence/file", "routes/lab/stones/spectrum-file.ts"),

@@ -91,6 +91,7 @@ export async function routeLines(): Promise<RouteLine[]> {
     lab("species/:speciesId", { params: { speciesId: "corundum" }, get: all, isShared: true }),
     lab("stones/:stoneCode", { params: examined, get: all, post: ["gemmologist"] }),
     lab("stones/:stoneCode/mark.json", { params: examined, get: all }),
+    lab("stones/:stoneCode/sent-readings", { params: examined, post: ["gemmologist"] }),
     lab("stones/:stoneCode/sheet", { params: examined, get: all }),
     lab("stones/:stoneCode/spectra", { params: measured, get: examine, post: ["gemmologist"] }),
     lab("stones/:stoneCode/spectra/:sequence/file", { params: { ...measured, sequence: "1" }, get: examine }),

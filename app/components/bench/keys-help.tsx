@@ -24,8 +24,8 @@ export function KeysHelp() {
   if (!isHydrated) return null;
   return (
     <>
-      <button type="button" onClick={open} aria-keyshortcuts="?" className="mt-2 hidden min-h-6 items-center text-xs text-ink-3 underline decoration-rule-2 hover:text-ink md:pointer-fine:inline-flex">
-        Keys: ?
+      <button type="button" onClick={open} aria-keyshortcuts="?" className="hidden min-h-6 items-center text-xs text-ink-3 underline decoration-rule-2 hover:text-ink md:pointer-fine:inline-flex">
+        All keys: ?
       </button>
       <dialog ref={dialog} aria-labelledby="keys-title" className="m-auto max-h-[85vh] w-[min(40rem,92vw)] overflow-y-auto rounded-lg border border-rule-2 bg-sheet p-5 text-ink backdrop:bg-ink/40">
         <h2 id="keys-title" className="mb-3">

@@ -14,6 +14,7 @@ import { aboutTest, noResultReasons, readingQualities, readingQualityNames, type
 import { composeReading, type ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
 import { withUncertainty } from "#app/features/readings/reading-words.ts";
+import { weighingNotes } from "#app/features/readings/weighing-notes.ts";
 import type { BenchInstrument } from "#app/features/stones/get-bench.server.ts";
 import { DescribedFields } from "./described-fields.tsx";
 import { moveOnByEnter } from "./move-on-by-enter.ts";
@@ -99,7 +100,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
         </div>
         <Preview reading={preview} instrument={instrument} />
       </div>
-      <div className="grid content-start gap-3">
+      <div className={`grid content-start gap-3 ${kind === "rotation" ? "md:col-span-2 md:grid-cols-2" : ""}`}>
         {fitting.length > 0 ? (
           <SelectField
             key={fields.instrument.key}
@@ -145,6 +146,7 @@ const pick = ({ id, errors }: { id: string; errors?: string[] }) => ({ id, error
 /** What follows from the digits, before they are saved. */
 function Preview({ reading, instrument }: { reading: ComposedReading | null; instrument: BenchInstrument | null }) {
   const derived = reading?.values.filter(({ formula }) => formula !== null) ?? [];
+  const notes = reading && weighingNotes(reading);
   if (derived.length === 0 && !instrument) return null;
   return (
     <dl className="grid grid-cols-[auto_1fr] gap-x-3.5 gap-y-1 border-t border-dashed border-rule-2 pt-2.5 text-sm" aria-live="polite">
@@ -154,6 +156,15 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
           <dd className="font-mono">{withUncertainty(value, value.name === "sg" ? 3 : 4)}</dd>
         </div>
       ))}
+      {notes ? (
+        <div className="contents">
+          <dt className="text-ink-3">Weighings</dt>
+          <dd>
+            {notes.spread}
+            {notes.drift ? <span className="block text-straw">{notes.drift}</span> : null}
+          </dd>
+        </div>
+      ) : null}
       {instrument ? (
         <div className="contents">
           <dt className="text-ink-3">Instrument</dt>
@@ -169,4 +180,4 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
   );
 }
 
-const derivedNames: Partial<Record<string, string>> = { birefringence: "Birefringence", sg: "Density", n: "Index" };
+const derivedNames: Partial<Record<string, string>> = { birefringence: "Birefringence", sg: "Density", n: "Index", low: "Lowest index", high: "Highest index", omega: "nω", epsilon: "nε", alpha: "nα", beta: "nβ", gamma: "nγ" };

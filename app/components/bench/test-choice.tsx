@@ -15,11 +15,11 @@ export function TestChoice({ current, hrefOf }: TestChoiceProps) {
   useEscapeToTests();
   return (
     <nav aria-label="Test" className="no-print border-b border-rule px-4.5 pb-3.5">
-      <ul className="grid gap-x-4 gap-y-2 sm:flex sm:flex-wrap">
+      <ul className="flex flex-wrap items-center gap-x-5 gap-y-1.5">
         {testGroups.map(({ name, kinds }) => (
-          <li key={name} className="min-w-0">
-            <span className="mb-1 block text-xs text-ink-3">{name}</span>
-            <ul className="flex flex-wrap gap-1.5">
+          <li key={name} className="flex min-w-0 flex-wrap items-center gap-1">
+            <span className="mr-1 text-xs text-ink-3">{name}</span>
+            <ul className="flex flex-wrap gap-1">
               {kinds.map((kind) => (
                 <li key={kind}>
                   <TestLink kind={kind} isCurrent={kind === current} to={hrefOf(kind)} />
@@ -28,8 +28,10 @@ export function TestChoice({ current, hrefOf }: TestChoiceProps) {
             </ul>
           </li>
         ))}
+        <li>
+          <KeysHelp />
+        </li>
       </ul>
-      <KeysHelp />
     </nav>
   );
 }
@@ -45,7 +47,7 @@ function TestLink({ kind, isCurrent, to }: { kind: ObservationKind; isCurrent: b
       preventScrollReset
       aria-current={isCurrent ? "true" : undefined}
       aria-keyshortcuts={hotkey}
-      className={`flex min-h-8 items-center gap-2 rounded-md border px-2.5 text-sm font-medium no-underline pointer-coarse:min-h-11 ${look}`}
+      className={`flex min-h-7 items-center gap-1.5 rounded-md border px-2 text-sm font-medium no-underline pointer-coarse:min-h-11 ${look}`}
     >
       {name}
       <Key>{hotkey}</Key>

@@ -38,7 +38,7 @@ export function RotationPlot({ run, fit }: { run: RotationRun; fit: RotationFit 
             </g>
           ))}
           {[fromDeg, (fromDeg + toDeg) / 2, toDeg].map((angleDeg) => (
-            <text key={angleDeg} x={x(angleDeg)} y={plot.bottom + 16} textAnchor="middle" className="fill-ink-3 font-mono text-[10.5px]">
+            <text key={angleDeg} x={x(angleDeg)} y={plot.bottom + 16} textAnchor={angleDeg === toDeg ? "end" : "middle"} className="fill-ink-3 font-mono text-[10.5px]">
               {Math.round(angleDeg)}°
             </text>
           ))}

@@ -56,9 +56,6 @@ function testsMade(readings: readonly NumberedReading[]): { done: Set<BenchTestI
   return { done, poor };
 }
 
-/** Instruments whose readings a check bears out; others only show or do not. */
-const checkedKinds: ReadonlySet<BenchInstrument["kind"]> = new Set(["refractometer", "angleRefractometer", "balance", "gauge"]);
-
 function barredTests({ consents, instruments, isMounted, mount }: StoneToTest): Map<BenchTestId, string> {
   const barred = new Map<BenchTestId, string>();
   const bar = (tests: readonly BenchTestId[], because: string | undefined) => {
@@ -70,7 +67,7 @@ function barredTests({ consents, instruments, isMounted, mount }: StoneToTest): 
   const missing = (kind: BenchInstrument["kind"], name: string) => {
     const fitting = instruments.filter((instrument) => instrument.kind === kind);
     if (fitting.length === 0) return `no ${name} is in service`;
-    return fitting.every(({ isOutOfCheck }) => isOutOfCheck) && checkedKinds.has(kind) ? `the check of every ${name} is overdue` : undefined;
+    return fitting.every(({ isOutOfCheck }) => isOutOfCheck) ? `the check of every ${name} is overdue` : undefined;
   };
   bar(["edges", "spot"], missing("refractometer", "refractometer"));
   bar(["polariscope", "figure"], missing("polariscope", "polariscope"));

@@ -14,12 +14,12 @@ const mostReasons = 30;
  *
  * @param readings those of the stone that the caller has read already; read here where left out
  */
-export async function rankStone(ctx: LabContext, input: { stoneCode: string } | { readings: readonly ReadingView[] }) {
+export async function rankStone(ctx: LabContext, input: { stoneCode: string } | { readings: readonly ReadingView[]; compare?: readonly string[] }) {
   requireRole(ctx, "readings.read");
   const readings = "readings" in input ? input.readings : (await listReadings(ctx, input)).filter(({ isOfSecondCheck }) => !isOfSecondCheck);
   const { table } = loadSpeciesTable();
   return {
-    bench: rankReadings(readings, table, { mostReasons }),
+    bench: rankReadings(readings, table, { mostReasons, ...("compare" in input && { compare: input.compare }) }),
     snapshot: () => rankingSnapshot(readings, table),
     tableVersion: table.version,
     /** Good readings that contradict a species by themselves. */

@@ -5,7 +5,8 @@ import type { ReadingDetail, ReadingQuality, ReadingValue } from "#app/domain/re
 import { derivedDensity, derivedIndex, differenceOfEdges } from "./derived-values.ts";
 import { plainText } from "#app/domain/plain-text.ts";
 import { composeDescribed } from "./compose-described.ts";
-import { isDescribedDraft, type ReadingDraft } from "./reading-draft.ts";
+import { meanOfRepeats } from "#app/gemmology/statistics/mean-of-repeats.ts";
+import { againNames, isDescribedDraft, type ReadingDraft } from "./reading-draft.ts";
 import type { ReadingInstrument } from "./reading-instrument.ts";
 import { readNumber, type NumberRule } from "./read-number.ts";
 import { angleUncertaintyDeg, edgeUncertainty, gaugeUncertaintyMm, spotUncertainty, usualUncertainty, waterWeighingUncertaintyCt, weighingUncertaintyCt } from "./usual-uncertainty.ts";
@@ -129,12 +130,15 @@ export function composeReading(draft: QuickDraft, instrument: ReadingInstrument 
     if (limit && n > limit + 0.002) refuse(field, `Above ${limit}, the limit of this refractometer's contact liquid: record it as over the limit.`);
   }
 
-  function readDensity({ method, massAirCt, massLiquidCt, tempC }: Extract<ReadingDraft, { kind: "density" }>) {
+  function readDensity({ method, massAirCt, massLiquidCt, tempC, again = {} }: Extract<ReadingDraft, { kind: "density" }>) {
     const uAir = weighingUncertaintyCt(instrument);
     const uLiquid = waterWeighingUncertaintyCt(instrument);
     const isHung = method === "suspended";
     const air = number("massAirCt", massAirCt, { ...massRule, name: "massAirCt", what: "the weight in air", example: "2.143", u: uAir });
     const liquid = number("massLiquidCt", massLiquidCt, { ...massRule, name: "massLiquidCt", what: isHung ? "the weight in water" : "what the beaker gained", example: isHung ? "1.606" : "0.537", u: uLiquid });
+    const repeats = (names: readonly (typeof againNames)[number][], u: number) => names.flatMap((name) => (again[name]?.trim() ? (number(name, again[name], { ...massRule, name, what: "this weighing", example: "2.143", u }) ?? []) : []));
+    const airs = repeats(["massAirCt2", "massAirCt3"], uAir);
+    const liquids = repeats(["massLiquidCt2", "massLiquidCt3"], uLiquid);
     const temp = number("tempC", tempC, { name: "tempC", what: "the water's temperature", unit: "degC", example: "21.4", min: 0, max: 40, mostDecimals: 2, u: usualUncertainty.waterTempC });
     if (air === undefined || liquid === undefined) return;
     if (liquid >= air) {
@@ -142,8 +146,14 @@ export function composeReading(draft: QuickDraft, instrument: ReadingInstrument 
       return refuse("massLiquidCt", `${message} must be less than the weight in air (${massAirCt.trim()} ct).`);
     }
     if (!isHung && liquid === 0) return refuse("massLiquidCt", "The beaker gains more than nothing when a stone hangs in it.");
-    if (temp === undefined) return;
-    const sg = derivedDensity({ method, massAirCt: air, massLiquidCt: liquid, tempC: temp, uAirCt: uAir, uLiquidCt: uLiquid });
+    for (const name of againNames) {
+      const value = values.find((one) => one.name === name)?.value;
+      const first = name.startsWith("massAir") ? air : liquid;
+      if (value !== undefined && Math.abs(value - first) > Math.max(0.1, 0.1 * first)) return refuse(name, `This weighing is far from the first (${first} ct). Is a digit wrong?`);
+    }
+    if (temp === undefined || Object.keys(problems).length > 0) return;
+    const [inAir, inLiquid] = [meanOfRepeats([air, ...airs], uAir), meanOfRepeats([liquid, ...liquids], uLiquid)];
+    const sg = derivedDensity({ method, massAirCt: inAir.mean, massLiquidCt: inLiquid.mean, tempC: temp, uAirCt: inAir.u, uLiquidCt: inLiquid.u });
     if (sg.value < 0.8 || sg.value > 25) return refuse("massLiquidCt", `These weights give a density of ${sg.value.toPrecision(3)}, which no stone has. Is a digit wrong, or the method another?`);
     values.push(sg);
   }

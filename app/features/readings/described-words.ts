@@ -10,15 +10,15 @@ export function describedWords(detail: DescribedDetail, values: readonly Reading
   const { fields } = testForms[detail.kind];
   const [first, ...others] = fields.filter((field) => !field.isCondition);
   const told = (field: TestField) => fieldWords(field, detail, values);
-  const list = (some: readonly TestField[]) => some.map(told).filter(Boolean).join(", ");
-  return { headline: first ? told(first) : "", seen: list(others), conditions: lowerFirst(list(fields.filter(({ isCondition }) => isCondition))) };
+  const list = (some: readonly TestField[]) => some.map(told).filter(Boolean).map((words, at) => (at === 0 ? words : lowerFirst(words))).join(", ");
+  return { headline: first ? told(first) : "", seen: lowerFirst(list(others)), conditions: lowerFirst(list(fields.filter(({ isCondition }) => isCondition))) };
 }
 
 function fieldWords(field: TestField, detail: DescribedDetail, values: readonly ReadingValue[]): string {
   const part = (detail as unknown as Record<string, unknown>)[field.name];
   switch (field.type) {
     case "choice":
-      return typeof part === "string" ? (field.options[part] ?? "") : "";
+      return typeof part === "string" ? withLabel(field, field.options[part] ?? "") : "";
     case "many":
       return Array.isArray(part) ? part.map((code: string) => field.options[code] ?? "").map((word, at) => (at === 0 ? word : lowerFirst(word))).join(", ") : "";
     case "tick":
@@ -33,6 +33,12 @@ function fieldWords(field: TestField, detail: DescribedDetail, values: readonly 
     }
   }
 }
+
+/** "None seen" of what: a choice that would not tell of itself is told with its field's name. */
+function withLabel({ name, label }: TestField, words: string): string {
+  return needsLabel.has(name) ? `${label}: ${lowerFirst(words)}` : words;
+}
+const needsLabel: ReadonlySet<string> = new Set(["doubling", "relief", "lustre"]);
 
 const countWords: Partial<Record<string, (count: number) => string>> = {
   directionsTried: (count) => `${count} ${count === 1 ? "direction" : "directions"}`,

@@ -4,6 +4,10 @@ import {
   type Facet, type InterferenceFigure, type Light, type ObservationKind, type PolariscopeBehaviour, type ReadingQuality, type SpotMethod, type WeighingMethod,
 } from "#app/domain/reading.ts";
 
+/** Fields of a second and third weighing. */
+export const againNames = ["massAirCt2", "massAirCt3", "massLiquidCt2", "massLiquidCt3"] as const;
+type AgainName = (typeof againNames)[number];
+
 type Seen = { facet: Facet; light: Light };
 
 /** A reading while it is being typed: choices as chosen, numbers as text. */
@@ -14,7 +18,7 @@ export type ReadingDraft = Readonly<
     | ({ kind: "overLimit"; limit: string } & Seen)
     | ({ kind: "criticalAngle"; angleDeg: string; prismN: string } & Seen)
     | { kind: "polariscope"; behaviour: PolariscopeBehaviour; directionsTried: string; figure: InterferenceFigure; sign: "+" | "-" | null }
-    | { kind: "density"; method: WeighingMethod; massAirCt: string; massLiquidCt: string; tempC: string }
+    | { kind: "density"; method: WeighingMethod; massAirCt: string; massLiquidCt: string; tempC: string; /** The second and third weighing of each; all may be left out. */ again?: Partial<Record<AgainName, string>> }
     | { kind: "weight"; weightCt: string }
     | { kind: "dimensions"; shape: "round" | "other"; lengthMm: string; widthMm: string; depthMm: string }
     | { kind: "rotation"; light: Light; rows: string }
@@ -58,7 +62,7 @@ export function readingDraftFromForm(form: Pick<FormData, "get" | "getAll">): Re
       return { kind, quality, behaviour: polariscopeBehaviours.find((choice) => choice === form.get("behaviour")) ?? "cannotTell", directionsTried: text("directionsTried"), figure: one("figure", interferenceFigures), sign: sign === "+" || sign === "-" ? sign : null };
     }
     case "density":
-      return { kind, quality, method: one("method", weighingMethods), massAirCt: text("massAirCt"), massLiquidCt: text("massLiquidCt"), tempC: text("tempC") };
+      return { kind, quality, method: one("method", weighingMethods), massAirCt: text("massAirCt"), massLiquidCt: text("massLiquidCt"), tempC: text("tempC"), again: Object.fromEntries(againNames.map((name) => [name, text(name)])) };
     case "weight":
       return { kind, quality, weightCt: text("weightCt") };
     case "dimensions":

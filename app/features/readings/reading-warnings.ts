@@ -1,8 +1,10 @@
 import { parseDecimal } from "#app/domain/decimal.ts";
+import { isOutOfCheck, type InstrumentKind } from "#app/domain/instrument-kind.ts";
 import { massDifference } from "#app/features/custody/mass-difference.ts";
 import type { ComposedReading } from "./compose-reading.ts";
+import { weighingNotes } from "./weighing-notes.ts";
 
-type WarnedInstrument = Readonly<{ name: string; status: "inService" | "restricted" | "outOfService"; statusReason: string; upperLimit: number | null; standardUncertainty: number | null }>;
+type WarnedInstrument = Readonly<{ name: string; kind: InstrumentKind; status: "inService" | "restricted" | "outOfService"; statusReason: string; upperLimit: number | null; standardUncertainty: number | null }>;
 
 /** What a colleague at the next bench would say of a reading that is kept all the same. */
 export function readingWarnings({ reading, instrument, check, today, earlierWeightText }: {
@@ -16,9 +18,9 @@ export function readingWarnings({ reading, instrument, check, today, earlierWeig
 }): string[] {
   if (reading.quality === "noResult") return [];
   const warnings: string[] = [];
-  if (instrument && reading.values.length > 0) {
+  if (instrument && isOutOfCheck({ kind: instrument.kind, nextDueOn: check?.nextDueOn ?? null, today })) {
     if (!check) warnings.push(`${instrument.name} has no passed check on record.`);
-    else if (check.nextDueOn < today) warnings.push(`The check of ${instrument.name} was due on ${check.nextDueOn}.`);
+    else warnings.push(`The check of ${instrument.name} was due on ${check.nextDueOn}.`);
   }
   if (instrument?.status === "restricted") warnings.push(`${instrument.name} is restricted${instrument.statusReason ? `: ${instrument.statusReason}` : ""}.`);
   const limit = instrument?.upperLimit;
@@ -26,6 +28,8 @@ export function readingWarnings({ reading, instrument, check, today, earlierWeig
   if (limit && edge && reading.detail.kind !== "criticalAngle" && Math.abs(edge.value - limit) <= 0.01) {
     warnings.push("This is close to the contact liquid's own edge, which is sharp and stays still while the stone turns.");
   }
+  const drift = weighingNotes(reading)?.drift;
+  if (drift) warnings.push(drift);
   const weight = reading.values.find(({ name }) => name === "weightCt" || name === "massAirCt");
   if (weight && parseDecimal(earlierWeightText) !== undefined) {
     const { differenceCt, isAlarming } = massDifference({

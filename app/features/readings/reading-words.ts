@@ -1,5 +1,6 @@
 import { isDescribed, type DescribedDetail } from "#app/domain/bench-tests/test-forms.ts";
 import { describedWords } from "./described-words.ts";
+import { weighingNotes } from "./weighing-notes.ts";
 import { rotationPositions } from "./rotation-rows.ts";
 import { facetNames, interferenceFigureNames, lightNames, polariscopeBehaviourNames, weighingMethodNames, type Facet, type Light, type ReadingDetail, type ReadingValue, type ReadingValueName } from "#app/domain/reading.ts";
 import { typedDecimal } from "#app/domain/typed-decimal.ts";
@@ -83,7 +84,8 @@ export function readingSeenText({ detail, values }: Told): string {
     }
     case "density": {
       if (values.length === 0) return "";
-      return `${typed("massAirCt")} ct in air, ${typed("massLiquidCt")} ct ${detail.method === "suspended" ? "in water" : "gained by the beaker"}`;
+      const notes = weighingNotes({ detail, values });
+      return [`${typed("massAirCt")} ct in air, ${typed("massLiquidCt")} ct ${detail.method === "suspended" ? "in water" : "gained by the beaker"}`, notes?.spread].filter(Boolean).join("; ");
     }
     case "free":
       return detail.text;

@@ -5,7 +5,7 @@ import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import type { Nature } from "#app/domain/conclusion.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import type { Id } from "#app/domain/ids.ts";
-import type { InstrumentKind } from "#app/domain/instrument-kind.ts";
+import { isOutOfCheck, type InstrumentKind } from "#app/domain/instrument-kind.ts";
 import { isAllowed } from "#app/domain/permissions.ts";
 import { shortRef } from "#app/domain/short-ref.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
@@ -164,6 +164,6 @@ function benchInstrument({ id, check, ...row }: InstrumentRow, { today, timeZone
     upperLimit: number(row.upperLimit),
     prismIndex: number(row.prismIndex),
     check: passed && { referenceMaterial: passed.referenceMaterial, checkedOn: calendarDateIn(new Date(passed.checkedAt), timeZone), nextDueOn: passed.nextDueOn, deviation: Number(passed.deviation) },
-    isOutOfCheck: !passed || passed.nextDueOn < today,
+    isOutOfCheck: isOutOfCheck({ kind: row.kind, nextDueOn: passed?.nextDueOn ?? null, today }),
   };
 }

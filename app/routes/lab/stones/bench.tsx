@@ -2,6 +2,17 @@ import type { SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { useMemo, useState } from "react";
 import { Link, redirect } from "react-router";
+import { uuidv7 } from "uuidv7";
+import { HiddenCandidatesCard, HideCandidatesForm } from "#app/components/bench/hide-candidates-card.tsx";
+import { RankingViewForm } from "#app/components/bench/ranking-view-form.tsx";
+import { BenchQueries } from "#app/components/bench/bench-queries.tsx";
+import { keptPage } from "#app/components/bench/outbox/kept-page.ts";
+import { deedsOf, keepDeed } from "#app/components/bench/outbox/outbox.ts";
+import { useOutbox } from "#app/components/bench/outbox/use-outbox.ts";
+import { useOfflineBench } from "#app/components/bench/outbox/use-offline-bench.ts";
+import { strikesThatWait } from "#app/components/bench/strikes-that-wait.ts";
+import { useWaitingReadings } from "#app/components/bench/use-waiting-readings.ts";
+import { WaitingReadings } from "#app/components/bench/waiting-readings.tsx";
 import { NextTestsCard } from "#app/components/bench/next-tests-card.tsx";
 import { FollowStone } from "#app/components/bench/follow-stone.tsx";
 import { CheckOffer } from "#app/components/bench/check-offer.tsx";
@@ -10,6 +21,7 @@ import { ReadingsTable } from "#app/components/bench/readings-table.tsx";
 import { StoneHeader } from "#app/components/bench/stone-header.tsx";
 import { TestChoice } from "#app/components/bench/test-choice.tsx";
 import { LiveCandidates } from "#app/components/bench/live-candidates.tsx";
+import { isWithoutLine, noteLine } from "#app/components/layout/line-state.ts";
 import { LinkButton } from "#app/components/ui/button.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import { Caution } from "#app/components/ui/caution.tsx";
@@ -19,6 +31,10 @@ import { nextTestsForStone } from "#app/features/identification/next-tests-for-s
 import { absorptionLines } from "#app/features/species/absorption-lines.ts";
 import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
 import { rankStone } from "#app/features/identification/rank-stone.server.ts";
+import { readingsAsOf, type RankingView } from "#app/features/identification/readings-as-of.ts";
+import { planFromSearch, planLeft, planSearch } from "#app/features/readings/reading-plan.ts";
+import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
+import { shortRef } from "#app/domain/short-ref.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
 import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { latestSize } from "#app/features/readings/latest-size.ts";
@@ -35,6 +51,11 @@ import { spectrumViewOf } from "#app/web/spectrum-view.server.ts";
 import type { Route } from "./+types/bench";
 
 const testOf = (url: URL): ObservationKind => observationKinds.find((kind) => kind === url.searchParams.get("test")) ?? "refractometer";
+function viewOf(url: URL): RankingView {
+  const at = Number(url.searchParams.get("at") || Number.NaN);
+  return { atSequence: Number.isSafeInteger(at) ? at : null, areStruckCounted: url.searchParams.get("struck") === "on" };
+}
+const isLookedBack = ({ atSequence, areStruckCounted }: RankingView) => atSequence !== null || areStruckCounted;
 const checkName = (isSolePractice: boolean) => (isSolePractice ? "Self-check" : "Second check");
 
 export async function loader({ request, context, params, url }: Route.LoaderArgs) {
@@ -47,8 +68,12 @@ export async function loader({ request, context, params, url }: Route.LoaderArgs
   const isOffered = mayCheck && !bench.isInvolved && url.searchParams.get("show") !== "examination";
   const shown = isOffered ? null : readings;
   const examined = shown?.filter(({ isOfSecondCheck }) => !isOfSecondCheck) ?? null;
-  const ranking = examined && (await rankStone(ctx, { readings: examined })).bench;
-  const areCandidatesHidden = url.searchParams.get("candidates") === "hidden";
+  const view = viewOf(url);
+  const compare = [...new Set(url.searchParams.getAll("compare").filter(Boolean))].slice(0, 2);
+  const plan = planFromSearch(url.searchParams);
+  const left = planLeft(plan, examined ?? []);
+  const ranking = examined && (await rankStone(ctx, { readings: readingsAsOf(examined, view), compare })).bench;
+  const areCandidatesHidden = url.searchParams.get("candidates") === "hidden" && (plan.kinds.length === 0 || left.length > 0);
   return {
     stone: bench.stone,
     condition: bench.stone.condition,
@@ -61,15 +86,20 @@ export async function loader({ request, context, params, url }: Route.LoaderArgs
     conclusion: isOffered ? null : conclusion && { version: conclusion.version, by: conclusion.by },
     instruments: isOffered ? [] : instruments,
     ranking,
+    view: { ...view, compare, standing: isLookedBack(view) && examined ? readingsAsOf(examined, view).filter(({ strike }) => !strike).map(({ sequence }) => sequence) : null },
     next: examined && nextTestsForStone(examined, loadSpeciesTable().table, { ...bench.stone, consents: bench.consents, instruments }),
     test: testOf(url),
     areCandidatesHidden,
+    plan: { ...plan, left },
     spectrum: {
       view: spectrumViewOf(request),
       candidates: testOf(url) === "spectroscope" && ranking?.hasEvidence && !areCandidatesHidden ? absorptionLines(loadSpeciesTable().table, ranking.candidates.map(({ speciesId }) => speciesId)) : [],
       taken: url.searchParams.getAll("line").join(", ").slice(0, 500),
     },
     requestId: newRequestId(),
+    person: shortRef(ctx.actorId),
+    /** Shown from the device, without the line. */
+    isKept: false,
     can: {
       record: isAllowed(ctx.roles, "readings.record") && bench.stone.goodsState !== "released" && ["received", "examining", "returned"].includes(state),
       conclude: isAllowed(ctx.roles, "conclusions.propose") && ["examining", "returned"].includes(state),
@@ -94,11 +124,49 @@ export async function action({ request, context, params, url }: Route.ActionArgs
   }
 }
 
+/** Without the line, the page as it was last shown, with the test that was asked for. */
+export async function clientLoader({ serverLoader, request, params }: Route.ClientLoaderArgs) {
+  try {
+    const loaded = await serverLoader();
+    noteLine("up");
+    return loaded;
+  } catch (error) {
+    if (isWithoutLine(error)) noteLine("down");
+    const kept = isWithoutLine(error) ? await keptPage<Awaited<ReturnType<typeof serverLoader>>>(params.labSlug, params.stoneCode) : null;
+    if (!kept) throw error;
+    return { ...kept, test: testOf(new URL(request.url)), requestId: uuidv7(), isKept: true };
+  }
+}
+
+/** Sends a reading, or keeps it on the device: without the line, and behind what waits there already. */
+export async function clientAction({ serverAction, request, params }: Route.ClientActionArgs) {
+  const form = await request.clone().formData();
+  const kept = await keptPage<Route.ComponentProps["loaderData"]>(params.labSlug, params.stoneCode);
+  if (!kept) return serverAction();
+  const whose = { person: kept.person, labSlug: params.labSlug };
+  if ((await deedsOf(whose, params.stoneCode)).every(({ refusal }) => refusal !== null)) {
+    try {
+      return await serverAction();
+    } catch (error) {
+      if (!isWithoutLine(error)) throw error;
+      noteLine("down");
+    }
+  }
+  const instrument = kept.instruments.find(({ ref }) => ref === form.get("instrument")) ?? null;
+  const { composeAnyReading } = await import("#app/features/readings/compose-any-reading.ts");
+  const { problems } = composeAnyReading(readingDraftFromForm(form), instrument);
+  const fields = [...form].flatMap(([name, value]): Array<[string, string]> => (typeof value === "string" ? [[name, value]] : []));
+  if (problems) return { result: { status: "error", initialValue: Object.fromEntries(fields), error: problems } as SubmissionResult<string[]> };
+  await keepDeed({ id: String(form.get("requestId")), kind: "reading", ...whose, stoneCode: params.stoneCode, fields, madeAt: new Date().toISOString() });
+  return null;
+}
+
 export const meta: Route.MetaFunction = ({ params, loaderData }) => [{ title: `${params.stoneCode}${loaderData ? `, ${loaderData.stone.description}` : ""} · Isogyre` }];
 
 export default function BenchRoute({ loaderData, actionData, params }: Route.ComponentProps) {
   const { stone, conclusion, check, can, mayCheck, checkName: nameOfCheck } = loaderData;
   const base = `/lab/${params.labSlug}/stones/${stone.code}`;
+  useOfflineBench({ labSlug: params.labSlug, stoneCode: params.stoneCode, person: loaderData.person, loaderData: loaderData.readings && !loaderData.isKept ? loaderData : null });
   return (
     <>
       <StoneHeader
@@ -127,14 +195,17 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
       {loaderData.isOffered ? (
         <CheckOffer base={base} />
       ) : loaderData.readings && loaderData.ranking ? (
+        <BenchQueries>
         <Examination
           {...loaderData}
+          labSlug={params.labSlug}
           readings={loaderData.readings}
           ranking={loaderData.ranking}
           base={base}
           mapHref={`/lab/${params.labSlug}/species/map?stone=${stone.code}${mayCheck ? "&show=examination" : ""}`}
           lastResult={actionData?.result}
         />
+        </BenchQueries>
       ) : (
         <Card title="Readings and conclusions" className="max-w-3xl">
           <CardBody>
@@ -150,28 +221,36 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
 }
 
 type LoaderData = Route.ComponentProps["loaderData"];
-type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
+type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { labSlug: string; readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
-function Examination({ readings, ranking, next, instruments, test, requestId, areCandidatesHidden, spectrum, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
+function Examination({ labSlug, person, isKept, readings, ranking, next, instruments, test, requestId, areCandidatesHidden, plan, view, spectrum, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
   const [typed, setTyped] = useState<ComposedReading | null>(null);
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const struckCount = readings.filter(({ strike }) => strike).length;
-  const hidden = areCandidatesHidden ? "&candidates=hidden" : "";
+  const hidden = areCandidatesHidden ? `&candidates=hidden${planSearch(plan)}` : "";
+  const standing = useMemo(() => (view.standing ? examined.filter(({ sequence }) => view.standing!.includes(sequence)).map((reading) => ({ ...reading, strike: null })) : examined), [examined, view.standing]);
+  const whose = useMemo(() => ({ person, labSlug }), [person, labSlug]);
+  const deeds = useOutbox(whose, stone.code);
+  const waiting = useWaitingReadings(deeds, instruments);
+  const strikesWaiting = useMemo(() => strikesThatWait(deeds), [deeds]);
+  const counted = useMemo(() => [...standing.filter(({ sequence }) => !strikesWaiting.has(sequence)), ...waiting.filter(({ isStruck }) => !isStruck).map(({ reading }) => ({ ...reading, sequence: null }))], [standing, waiting, strikesWaiting]);
   return (
     <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_24rem] xl:grid-cols-[minmax(0,1fr)_30.75rem]">
       <FollowStone base={base} mark={stone.version} />
       <div className="grid min-w-0 gap-5">
+        {isKept ? <Caution>No line. This page is as it was last shown here; what you record waits on this device and is sent, in order, when the line is back.</Caution> : null}
         {can.record ? (
           <Card title="New reading" note="kept as you type it, never overwritten">
             <TestChoice current={test} hrefOf={(kind) => `?test=${kind}${hidden}`} />
             <NewReading
               // One's own saved reading clears the form; a refused one keeps what was typed, and a colleague's leaves it alone.
-              key={`${test}-${readings.filter(({ isOwn }) => isOwn).length}`}
+              key={`${test}-${readings.filter(({ isOwn }) => isOwn).length}-${deeds.length}`}
               {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden, spectrum }}
               onDraft={setTyped}
             />
           </Card>
         ) : null}
+        <WaitingReadings deeds={deeds} readings={waiting} whose={whose} stoneCode={stone.code} />
         <Card
           title="Readings"
           note={`${readings.length - struckCount} kept, ${struckCount} struck`}
@@ -191,6 +270,12 @@ function Examination({ readings, ranking, next, instruments, test, requestId, ar
           <ReadingsTable
             readings={readings}
             strikeHref={(sequence) => `${base}/readings/${sequence}/strike`}
+            strikesWaiting={strikesWaiting}
+            strikeHere={
+              isKept || deeds.length > 0
+                ? (sequence, reason) => keepDeed({ id: uuidv7(), kind: "strike", ...whose, stoneCode: stone.code, fields: [["reason", reason], ["named.sequence", String(sequence)]], madeAt: new Date().toISOString() })
+                : undefined
+            }
             canStrike={({ isOwn, isOfSecondCheck }) => !isOfSecondCheck && (can.strikeAll || (can.strikeOwn && isOwn))}
           />
         </Card>
@@ -203,29 +288,27 @@ function Examination({ readings, ranking, next, instruments, test, requestId, ar
       </div>
       <div className="grid min-w-0 gap-5">
         {areCandidatesHidden ? (
-          <Card title="Candidates" note="hidden while you read">
-            <CardBody>
-              <p className="text-ink-2">Readings made now are marked as made without candidates in view.</p>
-              <p className="mt-3">
-                <Link to={`?test=${test}`} preventScrollReset className="text-link">
-                  Show the candidates
-                </Link>
-              </p>
-            </CardBody>
-          </Card>
+          <HiddenCandidatesCard planLeft={plan.left} showHref={`?test=${test}`} />
         ) : (
           <>
-            <LiveCandidates saved={ranking} readings={examined} typed={can.record ? typed : null} />
+            {view.standing ? <Caution>The ranking {view.atSequence === null ? "with what the struck readings said" : `as it was after reading ${view.atSequence}`}. <Link to={`?test=${test}`} preventScrollReset className="text-link">Back to now</Link></Caution> : null}
+            <LiveCandidates saved={ranking} readings={counted} compare={view.compare} typed={can.record && !view.standing ? typed : null} />
             {next && can.record ? <NextTestsCard next={next} hrefOf={(kind) => `?test=${kind}`} /> : null}
-            <p className="no-print flex flex-wrap gap-x-5 gap-y-1 px-1 text-sm">
+            <RankingViewForm
+              key={`${view.atSequence}-${view.areStruckCounted}-${view.compare.join("-")}`}
+              test={test}
+              moments={examined.map(({ sequence, when, detail }) => ({ sequence, when, kind: detail.kind }))}
+              hasStruck={struckCount > 0}
+              view={view}
+              comparable={ranking.comparable}
+              compare={view.compare}
+              isOpen={view.standing !== null || view.compare.length > 0}
+            />
+            {can.record ? <HideCandidatesForm test={test} lastSequence={readings.at(-1)?.sequence ?? 0} /> : null}
+            <p className="no-print px-1 text-sm">
               <Link to={mapHref} className="text-link">
                 On the index and density map
               </Link>
-              {can.record ? (
-                <Link to={`?test=${test}&candidates=hidden`} preventScrollReset className="text-link">
-                  Hide the candidates while reading
-                </Link>
-              ) : null}
             </p>
           </>
         )}
