@@ -9,8 +9,17 @@ import type { TestField } from "#app/domain/bench-tests/test-form.ts";
 import { testForms, type DescribedKind } from "#app/domain/bench-tests/test-forms.ts";
 import type { SpectrumAround } from "./spectrum/spectrum-around.ts";
 
-/** The drawing comes after the page works; until then, and without script, the words alone are typed. */
-const SpectrumLinesField = lazy(async () => ({ default: (await import("./spectrum/spectrum-lines-field.tsx")).SpectrumLinesField }));
+type SpectrumFieldProps = Parameters<typeof import("./spectrum/spectrum-lines-field.tsx").SpectrumLinesField>[0];
+
+/** The drawing comes after the page works; until then, without script, and where it cannot be fetched for want of a line, the words alone are typed. */
+const SpectrumLinesField = lazy(async () => {
+  const drawn = await import("./spectrum/spectrum-lines-field.tsx").catch(() => null);
+  return { default: drawn?.SpectrumLinesField ?? SpectrumWords };
+});
+
+function SpectrumWords({ id, name, label = "Lines and bands", hint, errors, defaultValue, maxLength, placeholder }: SpectrumFieldProps) {
+  return <TextAreaField {...{ id, name, label, hint, errors, defaultValue, maxLength, placeholder }} isRequired={false} rows={2} />;
+}
 
 type Fields = Readonly<Record<string, FieldMetadata<string, Record<string, string>, string[]>>>;
 const units: Partial<Record<string, string>> = { deg: "°", degC: "°C", x: "×", "1": "" };
@@ -46,7 +55,7 @@ function SpectrumField({ field, metadata, spectrum }: { field: TestField; metada
   const { id, name, errors, defaultValue = spectrum?.taken } = fieldProps(metadata);
   const words = { id, name, errors, defaultValue, label: field.label, hint: field.hint, maxLength: field.type === "words" ? field.most : undefined, placeholder: field.type === "words" ? field.example : undefined };
   return (
-    <Suspense fallback={<TextAreaField {...words} isRequired={false} rows={2} />}>
+    <Suspense fallback={<SpectrumWords {...words} />}>
       <SpectrumLinesField {...words} view={spectrum?.view} candidates={spectrum?.candidates} onView={keepSpectrumView} />
     </Suspense>
   );

@@ -34,7 +34,7 @@ export function SpectrumCard({ spectrum, benchHref, sourceHref, canWithdraw, rea
         {spectrum.notes.map((note) => (
           <Caution key={note}>{note}</Caution>
         ))}
-        <div className="grid items-start gap-x-8 gap-y-4 lg:grid-cols-2">
+        <div className="grid items-start gap-x-8 gap-y-4 xl:grid-cols-2">
           <PeaksForm peaks={spectrum.peaks} xUnit={xUnit} sequence={sequence} benchHref={withdrawal ? null : benchHref} />
           <div className="grid gap-3">
             <Facts

@@ -1,4 +1,4 @@
-import { useId, useRef, useState, type FormEvent } from "react";
+import { useCallback, useId, useRef, useState, type FormEvent } from "react";
 import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 import { DrawnSpectrum } from "#app/components/charts/spectrum/drawn-spectrum.tsx";
 import { TextAreaField } from "#app/components/ui/text-field.tsx";
@@ -42,6 +42,11 @@ export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, 
   const [selected, setSelected] = useState<number | null>(null);
   const [chosenView, setChosenView] = useState<SpectrumView | null>(null);
   const view = chosenView ?? initialView;
+  // Somebody may have typed before script took over.
+  const attach = useCallback((element: HTMLTextAreaElement | null) => {
+    field.current = element;
+    if (element) setText(element.value);
+  }, []);
   const { lines, problem } = readSpectrumLines(text);
 
   const write = (changed: string) => field.current && typeInto(field.current, changed);
@@ -81,7 +86,7 @@ export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, 
         defaultValue={defaultValue}
         hint={hint}
         errors={errors}
-        ref={field}
+        ref={attach}
         spellCheck={false}
         autoComplete="off"
         onInput={(event: FormEvent<HTMLTextAreaElement>) => {
