@@ -28,6 +28,7 @@ import { Caution } from "#app/components/ui/caution.tsx";
 import { isAllowed } from "#app/domain/permissions.ts";
 import { observationKinds, type ObservationKind } from "#app/domain/reading.ts";
 import { nextTestsForStone } from "#app/features/identification/next-tests-for-stone.ts";
+import { absorptionLines } from "#app/features/species/absorption-lines.ts";
 import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
 import { rankStone } from "#app/features/identification/rank-stone.server.ts";
 import { readingsAsOf, type RankingView } from "#app/features/identification/readings-as-of.ts";
@@ -46,6 +47,7 @@ import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
+import { spectrumViewOf } from "#app/web/spectrum-view.server.ts";
 import type { Route } from "./+types/bench";
 
 const testOf = (url: URL): ObservationKind => observationKinds.find((kind) => kind === url.searchParams.get("test")) ?? "refractometer";
@@ -56,7 +58,7 @@ function viewOf(url: URL): RankingView {
 const isLookedBack = ({ atSequence, areStruckCounted }: RankingView) => atSequence !== null || areStruckCounted;
 const checkName = (isSolePractice: boolean) => (isSolePractice ? "Self-check" : "Second check");
 
-export async function loader({ context, params, url }: Route.LoaderArgs) {
+export async function loader({ request, context, params, url }: Route.LoaderArgs) {
   const ctx = context.get(labContext);
   const { readings, conclusion, check, instruments, ...bench } = await orResponse(getBench(ctx, params));
   // A checker works on a page of their own until they compare; nothing of the examination leaves the server before.
@@ -70,6 +72,8 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const compare = [...new Set(url.searchParams.getAll("compare").filter(Boolean))].slice(0, 2);
   const plan = planFromSearch(url.searchParams);
   const left = planLeft(plan, examined ?? []);
+  const ranking = examined && (await rankStone(ctx, { readings: readingsAsOf(examined, view), compare })).bench;
+  const areCandidatesHidden = url.searchParams.get("candidates") === "hidden" && (plan.kinds.length === 0 || left.length > 0);
   return {
     stone: bench.stone,
     condition: bench.stone.condition,
@@ -81,12 +85,17 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
     check: isOffered ? null : check && { kind: check.kind, checker: check.checker, isCompared: check.comparedAt !== null, outcome: check.outcome, reason: check.reason },
     conclusion: isOffered ? null : conclusion && { version: conclusion.version, by: conclusion.by },
     instruments: isOffered ? [] : instruments,
-    ranking: examined && (await rankStone(ctx, { readings: readingsAsOf(examined, view), compare })).bench,
+    ranking,
     view: { ...view, compare, standing: isLookedBack(view) && examined ? readingsAsOf(examined, view).filter(({ strike }) => !strike).map(({ sequence }) => sequence) : null },
     next: examined && nextTestsForStone(examined, loadSpeciesTable().table, { ...bench.stone, consents: bench.consents, instruments }),
     test: testOf(url),
-    areCandidatesHidden: url.searchParams.get("candidates") === "hidden" && (plan.kinds.length === 0 || left.length > 0),
+    areCandidatesHidden,
     plan: { ...plan, left },
+    spectrum: {
+      view: spectrumViewOf(request),
+      candidates: testOf(url) === "spectroscope" && ranking?.hasEvidence && !areCandidatesHidden ? absorptionLines(loadSpeciesTable().table, ranking.candidates.map(({ speciesId }) => speciesId)) : [],
+      taken: url.searchParams.getAll("line").join(", ").slice(0, 500),
+    },
     requestId: newRequestId(),
     person: shortRef(ctx.actorId),
     /** Shown from the device, without the line. */
@@ -108,6 +117,7 @@ export async function action({ request, context, params, url }: Route.ActionArgs
   try {
     const { sequence, warnings } = await recordReading(ctx, { ...submission.value, stoneCode: params.stoneCode });
     const notice = [`Reading ${sequence} is recorded.`, ...warnings].join(" ");
+    url.searchParams.delete("line"); // what was taken from a measured spectrum is recorded now
     return redirect(`${url.pathname}${url.search}`, { headers: { "Set-Cookie": await noticeHeader(notice, warnings.length > 0 ? "caution" : "done") } });
   } catch (error) {
     return formRefused(submission, error);
@@ -213,7 +223,7 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
 type LoaderData = Route.ComponentProps["loaderData"];
 type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { labSlug: string; readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
-function Examination({ labSlug, person, isKept, readings, ranking, next, instruments, test, requestId, areCandidatesHidden, plan, view, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
+function Examination({ labSlug, person, isKept, readings, ranking, next, instruments, test, requestId, areCandidatesHidden, plan, view, spectrum, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const struckCount = readings.filter(({ strike }) => strike).length;
   const hidden = areCandidatesHidden ? `&candidates=hidden${planSearch(plan)}` : "";
@@ -238,7 +248,7 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
             <TestChoice current={test} hrefOf={(kind) => `?test=${kind}${hidden}`} />
             <NewReading
               key={formKey}
-              {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden }}
+              {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden, spectrum }}
               onDraft={onDraft}
             />
           </Card>
@@ -248,11 +258,16 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
           title="Readings"
           note={`${readings.length - struckCount} kept, ${struckCount} struck`}
           aside={
-            readings.length > 0 ? (
-              <Link to={`${base}/sheet`} className="no-print text-sm text-ink-2">
-                Bench sheet
+            <span className="no-print flex flex-wrap gap-x-4 text-sm">
+              <Link to={`${base}/spectra`} className="text-ink-2">
+                Measured spectra
               </Link>
-            ) : null
+              {readings.length > 0 ? (
+                <Link to={`${base}/sheet`} className="text-ink-2">
+                  Bench sheet
+                </Link>
+              ) : null}
+            </span>
           }
         >
           <ReadingsTable
