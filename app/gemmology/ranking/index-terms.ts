@@ -53,7 +53,7 @@ function rotatedEdges(reading: Extract<RefractiveEvidence, { kind: "edges" }>, h
       if (form.lowIndex) return numericScore({ ...common, value: reading.low - offset, range: form.lowIndex, usual: form.usual.lowIndex });
       if (!form.spotIndex) return opaque;
       const score = numericScore({ ...common, value: mean - offset, range: form.spotIndex, usual: form.usual.spotIndex });
-      return { ...score, logLikelihood: score.logLikelihood + Math.log(twoEdgesOnAggregateShare) };
+      return reading.high - reading.low <= 2 * differenceU(u) ? score : { ...score, logLikelihood: score.logLikelihood + Math.log(twoEdgesOnAggregateShare) };
     },
   };
   if (hasBirefringence) return [low];

@@ -3,7 +3,7 @@ import type { SpeciesForm } from "../species/species-table.ts";
 import { birefringenceScore, differenceU } from "./birefringence-term.ts";
 import { blunderShares, defaultU, softness, span } from "./defaults.ts";
 import type { ReadingGrade, RefractiveEvidence, RotationCrystal } from "./evidence.ts";
-import { indexTerm, opaque, twoEdgesOnAggregateShare } from "./index-term.ts";
+import { indexTerm, opaque } from "./index-term.ts";
 import { numericScore } from "./numeric-score.ts";
 import { softUniformDensity } from "./soft-uniform.ts";
 import type { Score, Term } from "./term.ts";
@@ -47,7 +47,7 @@ function crystalScore(form: SpeciesForm, { low, high, beta, u, logWeight: _ }: C
   if (!form.lowIndex) {
     if (!form.spotIndex) return opaque;
     const score = numericScore({ ...numeric, value: (low + high) / 2 - offset, range: form.spotIndex, usual: form.usual.spotIndex });
-    return { ...score, logLikelihood: score.logLikelihood + Math.log((high > low ? twoEdgesOnAggregateShare : 1) / span.birefringence) };
+    return { ...score, logLikelihood: score.logLikelihood + birefringenceScore(form, { value: high - low, u: differenceU(u), quality }).logLikelihood };
   }
   const index = numericScore({ ...numeric, value: low - offset, range: form.lowIndex, usual: form.usual.lowIndex });
   const gap = birefringenceScore(form, { value: high - low, u: differenceU(u), quality });
