@@ -30,14 +30,14 @@ export const aboutTest = (kind: ObservationKind): AboutTest => (isDescribed(kind
 const everyKind = [...(Object.keys(writtenTests) as WrittenKind[]), ...describedKinds];
 
 /** The tests in the order of an examination: what harms least comes first (common practice). */
-export const testGroups: ReadonlyArray<Readonly<{ name: string; kinds: readonly ObservationKind[] }>> = [
+export const testGroups: ReadonlyArray<Readonly<{ name: string; kinds: readonly ObservationKind[]; /** For few stones only. */ isSeldom?: true }>> = [
   { name: "Look", kinds: ["appearance", "magnification", "free"] },
   { name: "Measure", kinds: ["weight", "dimensions", "density"] },
   { name: "Polars", kinds: ["polariscope", "dichroscope"] },
   { name: "Index", kinds: ["refractometer", "rotation", "spot", "overLimit", "criticalAngle"] },
   { name: "Light", kinds: ["spectroscope", "ultraviolet", "colourFilter"] },
-  { name: "Over the limit", kinds: ["reflectivity", "brewster", "realDepth", "thermalProbe", "conductivity"] },
-  { name: "Last", kinds: ["magnet", "immersion", "heavyLiquid"] },
+  { name: "Over the limit", kinds: ["reflectivity", "brewster", "realDepth", "thermalProbe", "conductivity"], isSeldom: true },
+  { name: "Last", kinds: ["magnet", "immersion", "heavyLiquid"], isSeldom: true },
 ];
 export const observationKinds: readonly ObservationKind[] = testGroups.flatMap(({ kinds }) => kinds);
 

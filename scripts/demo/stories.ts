@@ -109,6 +109,7 @@ export const marramStories: readonly Story[] = [
   {
     description: "Dull green oval", photo: { outline: "oval", hue: "green", lengthMm: 9 }, client: "museum", daysAgo: 5, mass: "3.66", statements: "From an old collection, labelled only with a number.",
     readings: [weight("3.662"), edge("1.792", { quality: "fair", note: "soft edge just below the liquid’s" }), polars("anomalous", { note: "patchy, almost dark" }), density("3.662", "2.750"), seen("Cloudy zones, angular growth bands"), told("spectroscope", { lines: "653 weak, 691 faint", scale: "grating", path: "transmitted" }, "S1", "blurred lines")],
+    spectrum: { title: "Dull green oval, transmitted", note: "Through the table, 1 s, mean of 20", bands: [[653, 9, 0.16], [691, 11, 0.07], [589, 14, 0.05], [537, 16, 0.03], [660, 120, 0.06]] },
   },
   {
     description: "Red round, old cut", photo: { outline: "round", hue: "red", lengthMm: 6 }, client: "ferro", daysAgo: 4, mass: "1.12",

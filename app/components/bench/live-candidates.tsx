@@ -1,5 +1,5 @@
-import { QueryClient, QueryClientProvider, useQuery } from "@tanstack/react-query";
-import { lazy, Suspense, useDeferredValue, useMemo, useState } from "react";
+import { useQuery } from "@tanstack/react-query";
+import { lazy, Suspense, useDeferredValue, useMemo } from "react";
 import type { MapSpecies } from "#app/components/charts/index-density-map.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import type { BenchRanking } from "#app/features/identification/bench-ranking.ts";
@@ -24,16 +24,7 @@ type LiveCandidatesProps = {
 };
 
 /** The candidates as digits are typed, before anything is saved: the server's own code, run here. */
-export function LiveCandidates(props: LiveCandidatesProps) {
-  const [queries] = useState(() => new QueryClient());
-  return (
-    <QueryClientProvider client={queries}>
-      <Live {...props} />
-    </QueryClientProvider>
-  );
-}
-
-function Live({ saved, readings, typed, compare }: LiveCandidatesProps) {
+export function LiveCandidates({ saved, readings, typed, compare }: LiveCandidatesProps) {
   const { data: live } = useQuery({
     queryKey: ["species-table", saved.tableVersion],
     // The matcher comes with the table: without it there is nothing to match, and the page works before either is here.

@@ -20,6 +20,7 @@ import { DescribedFields } from "./described-fields.tsx";
 import { moveOnByEnter } from "./move-on-by-enter.ts";
 import { ReadingFields, type ReadingFieldset } from "./reading-fields.tsx";
 import { RotationFields } from "./rotation-fields.tsx";
+import type { SpectrumAround } from "./spectrum/spectrum-around.ts";
 import { useFirstField } from "./use-first-field.ts";
 
 type NewReadingProps = {
@@ -30,10 +31,15 @@ type NewReadingProps = {
   areCandidatesHidden: boolean;
   /** What the typed digits amount to; null while they are no reading. */
   onDraft?: (reading: ComposedReading | null) => void;
+  /** For the spectroscope's form alone. */
+  spectrum?: SpectrumAround;
 };
 
+/** Forms with something to draw in take the whole width. */
+const wide: ReadonlySet<ObservationKind> = new Set(["rotation", "spectroscope"]);
+
 /** The form of one test. It posts without script; with script it says at once what follows from the digits. */
-export function NewReading({ kind, instruments, requestId, lastResult, areCandidatesHidden, onDraft }: NewReadingProps) {
+export function NewReading({ kind, instruments, requestId, lastResult, areCandidatesHidden, onDraft, spectrum }: NewReadingProps) {
   const { instrumentKind: needed, needsInstrument, caution } = aboutTest(kind);
   const fitting = needed ? instruments.filter((instrument) => instrument.kind === needed) : instruments;
   const usual = needed && needsInstrument ? (fitting.find(({ isOutOfCheck, status }) => !isOutOfCheck && status === "inService") ?? fitting[0]) : undefined;
@@ -79,9 +85,9 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
         <FormAlert errors={form.errors} id={form.errorId} />
         {caution ? <Caution>{caution}</Caution> : null}
       </div>
-      <div className={`grid content-start gap-3 ${kind === "rotation" ? "md:col-span-2" : ""}`}>
+      <div className={`grid content-start gap-3 ${wide.has(kind) ? "md:col-span-2" : ""}`}>
         {isDescribed(kind) ? (
-          <DescribedFields kind={kind} fields={fields} />
+          <DescribedFields kind={kind} fields={fields} spectrum={spectrum} />
         ) : kind === "rotation" ? (
           <RotationFields rows={fields.rows} light={fields.light} onReading={show} {...{ instrument, quality }} />
         ) : (

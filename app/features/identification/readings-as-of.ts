@@ -1,4 +1,4 @@
-type Dated = Readonly<{ sequence: number; observedAt: Date; strike: Readonly<{ struckAt: Date }> | null }>;
+type Dated = Readonly<{ sequence: number; recordedAt: Date; strike: Readonly<{ struckAt: Date }> | null }>;
 export type RankingView = Readonly<{ /** Number of the last reading counted; null: all. */ atSequence: number | null; areStruckCounted: boolean }>;
 
 /**
@@ -6,7 +6,7 @@ export type RankingView = Readonly<{ /** Number of the last reading counted; nul
  * there and later strikes had not been made, and, if wished, with those that are struck.
  */
 export function readingsAsOf<Reading extends Dated>(readings: readonly Reading[], { atSequence, areStruckCounted }: RankingView): Reading[] {
-  const moment = atSequence === null ? null : readings.find(({ sequence }) => sequence === atSequence)?.observedAt;
+  const moment = atSequence === null ? null : readings.find(({ sequence }) => sequence === atSequence)?.recordedAt;
   const present = moment ? readings.filter(({ sequence }) => sequence <= atSequence!) : [...readings];
   const standing = (strike: Reading["strike"]) => areStruckCounted || (moment && strike && strike.struckAt > moment);
   return present.map((reading) => (standing(reading.strike) ? { ...reading, strike: null } : reading));

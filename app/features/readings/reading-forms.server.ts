@@ -32,6 +32,8 @@ const common = {
   quality: z.enum(readingQualities, { error: "Choose how good the reading is." }),
   noResultReason: z.enum(noResultReasons, { error: "Choose a reason from the list." }).optional(),
   note: optionalLines(2000),
+  /** By the clock of a device that kept the reading while there was no line. */
+  madeAt: z.iso.datetime({ offset: true, error: "The time of this reading does not read as one." }).transform((text) => new Date(text)).optional(),
   /** The candidates were hidden while the reading was made. */
   areCandidatesHidden: isTicked(),
 };
@@ -83,6 +85,7 @@ export const readingForm = readings
     noResultReason: input.quality === "noResult" ? (input.noResultReason ?? "") : "",
     note: input.note,
     areCandidatesHidden: input.areCandidatesHidden,
+    madeAt: input.madeAt ?? null,
     draft: draftOf(input),
   }));
 
@@ -95,5 +98,11 @@ function draftOf(input: z.output<typeof readings>): ReadingDraft {
   if (input.kind === "polariscope") return { ...input, behaviour: input.behaviour ?? "cannotTell", figure: input.figure ?? "notSought", sign: input.sign ?? null };
   return input;
 }
+
+/** A strike that waited on a device: of a saved reading by its number, of one that waited before it by its form. */
+export const sentStrikeForm = z.object({
+  reason: requiredText(500, "Say why the reading is struck."),
+  named: z.union([z.object({ sequence: z.coerce.number().int().min(1).max(1_000_000) }), z.object({ requestId: requestIdField<"observation">() })], { error: "This strike names no reading." }),
+});
 
 export const strikeForm = z.object({ reason: requiredText(500, "Say why the reading is struck.") });

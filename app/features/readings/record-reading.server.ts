@@ -16,6 +16,7 @@ import { moveExamination } from "#app/features/stones/move-examination.server.ts
 import { composeAnyReading } from "./compose-any-reading.ts";
 import type { ComposedReading } from "./compose-reading.ts";
 import type { ReadingDraft } from "./reading-draft.ts";
+import { observedAt } from "./observed-at.ts";
 import { readingWarnings } from "./reading-warnings.ts";
 
 export type RecordReading = Readonly<{
@@ -27,6 +28,8 @@ export type RecordReading = Readonly<{
   /** The observer had no candidates in view; in a second check they never have. */
   areCandidatesHidden: boolean;
   draft: ReadingDraft;
+  /** When the reading was made by the clock of the device that kept it, where it waited for the line; null: now. */
+  madeAt?: Date | null;
   /** The actor's own second check, begun and not compared yet, instead of the examination. */
   isForSecondCheck?: boolean;
 }>;
@@ -82,7 +85,7 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
       instrumentId: instrument?.id ?? null,
       instrumentCheckId: check?.id ?? null,
       observerId: actorId,
-      observedAt: now,
+      observedAt: observedAt({ madeAt: input.madeAt ?? null, now }),
       recordedAt: now,
       detail: reading.detail,
       quality: reading.quality,
