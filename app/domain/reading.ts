@@ -1,6 +1,7 @@
 import type { ConsentCode } from "./consent-code.ts";
 import { describedKinds, isDescribed, testForms, type DescribedDetail, type DescribedKind, type DescribedNumber } from "./bench-tests/test-forms.ts";
 import type { TestForm } from "./bench-tests/test-form.ts";
+import type { RotationCrystal } from "#app/gemmology/ranking/evidence.ts";
 import type { InstrumentKind } from "./instrument-kind.ts";
 
 /** Tests whose forms are written out; the others are described in bench-tests/. */
@@ -131,7 +132,7 @@ export type ReadingDetail =
   | { kind: "spot"; method: SpotMethod; facet: Facet; light: Light }
   | { kind: "overLimit"; facet: Facet; light: Light }
   | { kind: "criticalAngle"; facet: Facet; light: Light }
-  | { kind: "rotation"; light: Light; /** As it was typed, a position a line. */ rows: string; character: RotationCharacter; sign: "+" | "-" | null }
+  | { kind: "rotation"; light: Light; /** As it was typed, a position a line. */ rows: string; character: RotationCharacter; sign: "+" | "-" | null; /** Every crystal that the run allows, with its weight. */ solutions: readonly RotationCrystal[] }
   | { kind: "polariscope"; behaviour: PolariscopeBehaviour; directionsTried: number; figure: InterferenceFigure; sign: "+" | "-" | null }
   | { kind: "density"; method: WeighingMethod }
   | { kind: "weight" }

@@ -96,12 +96,12 @@ test("what every described test saw is evidence that the ranking takes", () => {
     colour: ["purplish red"], transparency: "transparent", lustre: "vitreous", phenomena: ["asterism"],
     pleochroism: { strength: "strong", colours: ["purplish red", "orangish red"] },
     fluorescence: { longWave: { strength: "strong", colour: "red" } },
-    absorption: [{ nm: 560, kind: "band" }],
+    absorption: [{ nm: 560, kind: "band", u: 1.7 }],
     colourFilter: "strong red", thermal: "diamond-like", magnetic: "moderate", features: ["curved striae", "gas bubbles"],
-    sg: { value: 3.32, u: 0.01 },
+    heavyLiquids: [{ behaviour: "suspended", liquidSg: 3.32, uLiquidSg: 0.01 }],
   });
   // Above diiodomethane is over 1.74; the three coarse indices come with their own uncertainty.
-  expect(evidence.ri).toEqual(expect.arrayContaining([{ kind: "overLimit", limit: 1.74 }, expect.objectContaining({ kind: "spot", n: expect.closeTo(2.417, 2) })]));
+  expect(evidence.ri).toEqual(expect.arrayContaining([{ kind: "overLimit", limit: 1.74 }, expect.objectContaining({ kind: "estimate", by: "reflectance", n: expect.closeTo(2.417, 2) })]));
 });
 
 test("a struck or empty reading of a described test is no evidence", () => {

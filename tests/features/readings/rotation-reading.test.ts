@@ -23,7 +23,7 @@ test("a uniaxial run is decided, and its indices are those of the crystal", () =
   expect(value(reading, "omega")!.value).toBeCloseTo(1.7689, 3);
   expect(value(reading, "epsilon")!.value).toBeCloseTo(1.7604, 3);
   expect(readingValueText(reading!)).toBe("nω 1.7689 ± 0.0012, nε 1.7604 ± 0.0012");
-  expect(evidenceFromReadings([reading!])).toMatchObject({ ri: [{ kind: "edges", rotated: true }], opticCharacter: "uniaxial", opticSign: "-" });
+  expect(evidenceFromReadings([reading!])).toMatchObject({ ri: [{ kind: "rotation", solutions: [{ indices: { omega: expect.closeTo(1.7689, 3), epsilon: expect.closeTo(1.7604, 3) } }] }] });
 });
 
 test("one facet of a biaxial crystal leaves the middle index open, and says so; both ends are evidence", () => {
@@ -33,6 +33,11 @@ test("one facet of a biaxial crystal leaves the middle index open, and says so; 
   expect(value(reading, "low")!.value).toBeCloseTo(1.654, 3);
   expect(value(reading, "high")!.value).toBeCloseTo(1.69, 3);
   expect(readingValueText(reading!)).toMatch(/ to /);
+  // Both crystals go to the ranking, alike.
+  const [run] = evidenceFromReadings([reading!]).ri!;
+  const betas = run!.kind === "rotation" ? run!.solutions.flatMap(({ indices, weight }) => ("beta" in indices ? [[indices.beta, weight]] : [])) : [];
+  expect(betas).toHaveLength(2);
+  expect(betas.some(([beta]) => Math.abs(beta! - 1.671) < 0.001)).toBe(true);
   expect(readingSeenText(reading!)).toMatch(/biaxial.*; 12 positions$/);
 });
 

@@ -25,6 +25,16 @@ test("a reading that waited on a device keeps both clocks", async () => {
   expect(presentReadings(readings, "UTC")[0]!.sentWhen).toMatch(/^\d\d:\d\d$/);
 });
 
+test("another reading under the id of one that is kept is refused, not taken for it", async () => {
+  const ctx = await gemmologist();
+  const bench = await aBench(ctx);
+  const first = aReading(bench, corundum.weight);
+  await recordReading(ctx, first);
+  expect(await recordReading(ctx, first)).toMatchObject({ sequence: 1 });
+  await expect(recordReading(ctx, { ...first, draft: { ...corundum.weight, weightCt: "2.150" } })).rejects.toMatchObject({ code: "conflict" });
+  await expect(recordReading(ctx, { ...aReading(bench, corundum.refractometer), requestId: first.requestId })).rejects.toMatchObject({ code: "conflict" });
+});
+
 test("a device's clock that cannot be right is refused, one that is a little fast is not", () => {
   const now = new Date("2026-12-01T12:00:00Z");
   const after = (ms: number) => new Date(now.getTime() + ms);

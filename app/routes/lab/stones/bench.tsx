@@ -70,9 +70,10 @@ export async function loader({ request, context, params, url }: Route.LoaderArgs
   const examined = shown?.filter(({ isOfSecondCheck }) => !isOfSecondCheck) ?? null;
   const view = viewOf(url);
   const compare = [...new Set(url.searchParams.getAll("compare").filter(Boolean))].slice(0, 2);
+  const prior = url.searchParams.get("prior") === "even" ? ("even" as const) : ("prevalence" as const);
   const plan = planFromSearch(url.searchParams);
   const left = planLeft(plan, examined ?? []);
-  const ranking = examined && (await rankStone(ctx, { readings: readingsAsOf(examined, view), compare })).bench;
+  const ranking = examined && (await rankStone(ctx, { readings: readingsAsOf(examined, view), compare, prior })).bench;
   const areCandidatesHidden = url.searchParams.get("candidates") === "hidden" && (plan.kinds.length === 0 || left.length > 0);
   return {
     stone: bench.stone,
@@ -86,7 +87,7 @@ export async function loader({ request, context, params, url }: Route.LoaderArgs
     conclusion: isOffered ? null : conclusion && { version: conclusion.version, by: conclusion.by },
     instruments: isOffered ? [] : instruments,
     ranking,
-    view: { ...view, compare, standing: isLookedBack(view) && examined ? readingsAsOf(examined, view).filter(({ strike }) => !strike).map(({ sequence }) => sequence) : null },
+    view: { ...view, compare, prior, standing: isLookedBack(view) && examined ? readingsAsOf(examined, view).filter(({ strike }) => !strike).map(({ sequence }) => sequence) : null },
     next: examined && nextTestsForStone(examined, loadSpeciesTable().table, { ...bench.stone, consents: bench.consents, instruments }),
     test: testOf(url),
     areCandidatesHidden,
@@ -295,17 +296,18 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
         ) : (
           <>
             {view.standing ? <Caution>The ranking {view.atSequence === null ? "with what the struck readings said" : `as it was after reading ${view.atSequence}`}. <Link to={`?test=${test}`} preventScrollReset className="text-link">Back to now</Link></Caution> : null}
-            <LiveCandidates saved={ranking} readings={counted} compare={view.compare} typed={can.record && !view.standing ? typed : null} />
+            <LiveCandidates saved={ranking} readings={counted} compare={view.compare} prior={view.prior} typed={can.record && !view.standing ? typed : null} />
             {next && can.record ? <NextTestsCard next={next} hrefOf={(kind) => `?test=${kind}`} /> : null}
             <RankingViewForm
-              key={`${view.atSequence}-${view.areStruckCounted}-${view.compare.join("-")}`}
+              key={`${view.prior}-${view.atSequence}-${view.areStruckCounted}-${view.compare.join("-")}`}
               test={test}
               moments={examined.map(({ sequence, when, detail }) => ({ sequence, when, kind: detail.kind }))}
               hasStruck={struckCount > 0}
               view={view}
               comparable={ranking.comparable}
               compare={view.compare}
-              isOpen={view.standing !== null || view.compare.length > 0}
+              prior={view.prior}
+              isOpen={view.standing !== null || view.compare.length > 0 || view.prior === "even"}
             />
             {can.record ? <HideCandidatesForm test={test} lastSequence={readings.at(-1)?.sequence ?? 0} /> : null}
             <p className="no-print px-1 text-sm">
