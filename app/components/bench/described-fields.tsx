@@ -8,8 +8,7 @@ import { TextAreaField, TextField } from "#app/components/ui/text-field.tsx";
 import type { TestField } from "#app/domain/bench-tests/test-form.ts";
 import { testForms, type DescribedKind } from "#app/domain/bench-tests/test-forms.ts";
 import type { SpectrumAround } from "./spectrum/spectrum-around.ts";
-
-type SpectrumFieldProps = Parameters<typeof import("./spectrum/spectrum-lines-field.tsx").SpectrumLinesField>[0];
+import type { SpectrumLinesFieldProps } from "./spectrum/spectrum-lines-field.tsx";
 
 /** The drawing comes after the page works; until then, without script, and where it cannot be fetched for want of a line, the words alone are typed. */
 const SpectrumLinesField = lazy(async () => {
@@ -17,7 +16,7 @@ const SpectrumLinesField = lazy(async () => {
   return { default: drawn?.SpectrumLinesField ?? SpectrumWords };
 });
 
-function SpectrumWords({ id, name, label = "Lines and bands", hint, errors, defaultValue, maxLength, placeholder }: SpectrumFieldProps) {
+function SpectrumWords({ id, name, label = "Lines and bands", hint, errors, defaultValue, maxLength, placeholder }: SpectrumLinesFieldProps) {
   return <TextAreaField {...{ id, name, label, hint, errors, defaultValue, maxLength, placeholder }} isRequired={false} rows={2} />;
 }
 
