@@ -9,7 +9,7 @@ export function clockWords({ x, y }: Place): string {
   const reach = Math.hypot(right, up);
   if (reach < 0.15) return "in the centre";
   const hour = Math.round(((Math.atan2(right, up) * 180) / Math.PI + 360) / 30) % 12 || 12;
-  return `at ${hour} o'clock, ${reach < 0.5 ? "inside" : reach < 0.85 ? "half way out" : "at the girdle"}`;
+  return `at ${hour} o'clock, ${reach < 0.5 ? "inside" : reach < 0.8 ? "half way out" : "at the girdle"}`;
 }
 
 /** A place on a photograph in words: "upper left", "middle". */

@@ -8,7 +8,7 @@ export function OutlineForm({ outline }: { outline: CutOutlineCode }) {
   return (
     <Form method="post" preventScrollReset className="flex flex-wrap items-end gap-2">
       <input type="hidden" name="intent" value="outline" />
-      <SelectField key={outline} id="outline" name="outline" label="Outline" defaultValue={outline} options={Object.entries(cutOutlineNames).map(([value, label]) => ({ value, label }))} />
+      <SelectField key={outline} id="outline" name="outline" label="Drawn as" defaultValue={outline} options={Object.entries(cutOutlineNames).map(([value, label]) => ({ value, label }))} />
       <Button look="quiet">Draw it</Button>
     </Form>
   );
