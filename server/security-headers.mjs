@@ -22,7 +22,6 @@ export function securityHeaders({ isSecure, uploadOrigins, payOrigin }) {
     [
       "default-src 'none'",
       `script-src 'self' 'nonce-${nonce}' 'strict-dynamic'`,
-      "worker-src 'self'",
       "style-src 'self'",
       "style-src-attr 'unsafe-inline'", // bars and charts set lengths in style attributes; no sheet can be injected
       "img-src 'self' data: blob:",

@@ -1,6 +1,7 @@
 import type { ConsentCode } from "./consent-code.ts";
 import { describedKinds, isDescribed, testForms, type DescribedDetail, type DescribedKind, type DescribedNumber } from "./bench-tests/test-forms.ts";
 import type { TestForm } from "./bench-tests/test-form.ts";
+import type { RotationCrystal } from "#app/gemmology/ranking/evidence.ts";
 import type { InstrumentKind } from "./instrument-kind.ts";
 
 /** Tests whose forms are written out; the others are described in bench-tests/. */
@@ -30,14 +31,14 @@ export const aboutTest = (kind: ObservationKind): AboutTest => (isDescribed(kind
 const everyKind = [...(Object.keys(writtenTests) as WrittenKind[]), ...describedKinds];
 
 /** The tests in the order of an examination: what harms least comes first (common practice). */
-export const testGroups: ReadonlyArray<Readonly<{ name: string; kinds: readonly ObservationKind[] }>> = [
+export const testGroups: ReadonlyArray<Readonly<{ name: string; kinds: readonly ObservationKind[]; /** For few stones only. */ isSeldom?: true }>> = [
   { name: "Look", kinds: ["appearance", "magnification", "free"] },
   { name: "Measure", kinds: ["weight", "dimensions", "density"] },
   { name: "Polars", kinds: ["polariscope", "dichroscope"] },
   { name: "Index", kinds: ["refractometer", "rotation", "spot", "overLimit", "criticalAngle"] },
   { name: "Light", kinds: ["spectroscope", "ultraviolet", "colourFilter"] },
-  { name: "Over the limit", kinds: ["reflectivity", "brewster", "realDepth", "thermalProbe", "conductivity"] },
-  { name: "Last", kinds: ["magnet", "immersion", "heavyLiquid"] },
+  { name: "Over the limit", kinds: ["reflectivity", "brewster", "realDepth", "thermalProbe", "conductivity"], isSeldom: true },
+  { name: "Last", kinds: ["magnet", "immersion", "heavyLiquid"], isSeldom: true },
 ];
 export const observationKinds: readonly ObservationKind[] = testGroups.flatMap(({ kinds }) => kinds);
 
@@ -131,7 +132,7 @@ export type ReadingDetail =
   | { kind: "spot"; method: SpotMethod; facet: Facet; light: Light }
   | { kind: "overLimit"; facet: Facet; light: Light }
   | { kind: "criticalAngle"; facet: Facet; light: Light }
-  | { kind: "rotation"; light: Light; /** As it was typed, a position a line. */ rows: string; character: RotationCharacter; sign: "+" | "-" | null }
+  | { kind: "rotation"; light: Light; /** As it was typed, a position a line. */ rows: string; character: RotationCharacter; sign: "+" | "-" | null; /** Every crystal that the run allows, with its weight. */ solutions: readonly RotationCrystal[] }
   | { kind: "polariscope"; behaviour: PolariscopeBehaviour; directionsTried: number; figure: InterferenceFigure; sign: "+" | "-" | null }
   | { kind: "density"; method: WeighingMethod }
   | { kind: "weight" }

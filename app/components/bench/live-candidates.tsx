@@ -21,10 +21,11 @@ type LiveCandidatesProps = {
   typed: ComposedReading | null;
   /** Ids of two candidates that are set side by side. */
   compare: readonly string[];
+  prior: "prevalence" | "even";
 };
 
 /** The candidates as digits are typed, before anything is saved: the server's own code, run here. */
-export function LiveCandidates({ saved, readings, typed, compare }: LiveCandidatesProps) {
+export function LiveCandidates({ saved, readings, typed, compare, prior }: LiveCandidatesProps) {
   const { data: live } = useQuery({
     queryKey: ["species-table", saved.tableVersion],
     // The matcher comes with the table: without it there is nothing to match, and the page works before either is here.
@@ -43,11 +44,11 @@ export function LiveCandidates({ saved, readings, typed, compare }: LiveCandidat
   const latest = useDeferredValue(typed);
   const ranking = useMemo(() => {
     if (!live) return saved;
-    return live.rankReadings(latest ? [...readings, { ...latest, sequence: null }] : readings, live.table, { compare });
-  }, [live, saved, readings, latest, compare]);
+    return live.rankReadings(latest ? [...readings, { ...latest, sequence: null }] : readings, live.table, { compare, prior });
+  }, [live, saved, readings, latest, compare, prior]);
   return (
     <>
-      <CandidatesCard ranking={ranking} isWithTyped={Boolean(live && latest && live.saysAnything(latest))} />
+      <CandidatesCard ranking={ranking} prior={prior} isWithTyped={Boolean(live && latest && live.saysAnything(latest))} />
       <CompareCandidatesCard compared={ranking.compared} />
       {live && (ranking.index || ranking.density) ? <StandingMap table={live.table} ranking={ranking} /> : null}
     </>

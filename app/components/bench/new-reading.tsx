@@ -2,6 +2,8 @@ import { getFormProps, useForm, type SubmissionResult } from "@conform-to/react"
 import { useCallback, useRef, useState, type FormEvent } from "react";
 import { Form, useNavigation } from "react-router";
 import { formatCalendarDate } from "#app/domain/calendar-date.ts";
+import { uuidv7 } from "uuidv7";
+import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 import { Button } from "#app/components/ui/button.tsx";
 import { fieldProps } from "#app/components/ui/field-props.ts";
 import { FormAlert } from "#app/components/ui/form-alert.tsx";
@@ -43,12 +45,15 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
   const { instrumentKind: needed, needsInstrument, caution } = aboutTest(kind);
   const fitting = needed ? instruments.filter((instrument) => instrument.kind === needed) : instruments;
   const usual = needed && needsInstrument ? (fitting.find(({ isOutOfCheck, status }) => !isOutOfCheck && status === "inService") ?? fitting[0]) : undefined;
+  // A form that script puts up is a new one, whatever the page's loader last said: two readings of one id would be kept as one.
+  const isPutUpByScript = useIsHydrated();
+  const [ownRequestId] = useState(() => (isPutUpByScript ? uuidv7() : requestId));
   const [form, fields] = useForm<ReadingFieldset>({
     id: `reading-${kind}`,
     lastResult,
     shouldValidate: "onSubmit",
     // What a number is, is never filled in for anybody; the prism's index and the liquid's limit belong to the instrument.
-    defaultValue: { requestId, instrument: usual?.ref, quality: "good", facet: "table", light: "sodium", limit: usual?.upperLimit ? String(usual.upperLimit) : undefined, prismN: usual?.prismIndex ? String(usual.prismIndex) : undefined },
+    defaultValue: { requestId: ownRequestId, instrument: usual?.ref, quality: "good", facet: "table", light: "sodium", limit: usual?.upperLimit ? String(usual.upperLimit) : undefined, prismN: usual?.prismIndex ? String(usual.prismIndex) : undefined },
   });
   const [preview, setPreview] = useState<ComposedReading | null>(null);
   const [instrumentRef, setInstrumentRef] = useState(usual?.ref ?? "");

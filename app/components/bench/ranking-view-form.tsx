@@ -7,14 +7,14 @@ import type { RankingView } from "#app/features/identification/readings-as-of.ts
 import { observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
 
 type Moment = Readonly<{ sequence: number; when: string; kind: ObservationKind }>;
-type RankingViewFormProps = { test: ObservationKind; moments: readonly Moment[]; hasStruck: boolean; view: RankingView; comparable: BenchRanking["comparable"]; compare: readonly string[]; isOpen: boolean };
+type RankingViewFormProps = { test: ObservationKind; moments: readonly Moment[]; hasStruck: boolean; view: RankingView; comparable: BenchRanking["comparable"]; compare: readonly string[]; isOpen: boolean; prior: "prevalence" | "even" };
 
 /** How else the ranking can be looked at: at an earlier moment, with what was struck, two candidates lane by lane. */
-export function RankingViewForm({ test, moments, hasStruck, view, comparable, compare, isOpen }: RankingViewFormProps) {
+export function RankingViewForm({ test, moments, hasStruck, view, comparable, compare, isOpen, prior }: RankingViewFormProps) {
   const species = comparable.map(({ speciesId, name }) => ({ value: speciesId, label: name }));
   return (
     <details open={isOpen} className="no-print rounded-lg border border-rule bg-sheet px-4.5 py-2.5">
-      <summary className="flex min-h-6 cursor-pointer items-center text-sm text-tint pointer-coarse:min-h-11">Compare two, or look back</summary>
+      <summary className="flex min-h-6 cursor-pointer items-center text-sm text-tint pointer-coarse:min-h-11">Compare two, look back, or weigh all alike</summary>
       <Form method="get" preventScrollReset className="mt-2 grid gap-3">
         <input type="hidden" name="test" value={test} />
         {species.length > 1 ? (
@@ -31,6 +31,16 @@ export function RankingViewForm({ test, moments, hasStruck, view, comparable, co
           emptyLabel="Now"
           options={moments.map(({ sequence, when, kind }) => ({ value: String(sequence), label: `After no. ${sequence}, ${observationKindNames[kind].toLowerCase()}, ${when}` }))}
           defaultValue={view.atSequence === null ? "" : String(view.atSequence)}
+        />
+        <SelectField
+          id="ranking-prior"
+          name="prior"
+          label="Before any reading"
+          options={[
+            { value: "prevalence", label: "Species weigh by how common they are" },
+            { value: "even", label: "All species weigh alike" },
+          ]}
+          defaultValue={prior}
         />
         {hasStruck ? <CheckboxField id="ranking-struck" name="struck" label="With what the struck readings said" defaultChecked={view.areStruckCounted} /> : null}
         <div className="flex items-center gap-4">

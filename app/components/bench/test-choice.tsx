@@ -15,24 +15,38 @@ export function TestChoice({ current, hrefOf }: TestChoiceProps) {
   useEscapeToTests();
   return (
     <nav aria-label="Test" className="no-print border-b border-rule px-4.5 pb-3.5">
-      <ul className="flex flex-wrap items-center gap-x-5 gap-y-1.5">
-        {testGroups.map(({ name, kinds }) => (
-          <li key={name} className="flex min-w-0 flex-wrap items-center gap-1">
-            <span className="mr-1 text-xs text-ink-3">{name}</span>
-            <ul className="flex flex-wrap gap-1">
-              {kinds.map((kind) => (
-                <li key={kind}>
-                  <TestLink kind={kind} isCurrent={kind === current} to={hrefOf(kind)} />
-                </li>
-              ))}
-            </ul>
-          </li>
-        ))}
-        <li>
-          <KeysHelp />
-        </li>
-      </ul>
+      <TestGroups groups={testGroups.filter(({ isSeldom }) => !isSeldom)} {...{ current, hrefOf }} />
+      <div className="mt-1 flex flex-wrap items-start gap-x-6">
+        <details open={seldom.some(({ kinds }) => kinds.includes(current))} className="min-w-0">
+          <summary className="inline-flex min-h-6 cursor-pointer items-center text-sm text-tint pointer-coarse:min-h-11">Seldom made: over the limit, and last</summary>
+          <div className="mt-1.5">
+            <TestGroups groups={seldom} {...{ current, hrefOf }} />
+          </div>
+        </details>
+        <KeysHelp />
+      </div>
     </nav>
+  );
+}
+
+const seldom = testGroups.filter(({ isSeldom }) => isSeldom);
+
+function TestGroups({ groups, current, hrefOf }: TestChoiceProps & { groups: typeof testGroups }) {
+  return (
+    <ul className="flex flex-wrap items-center gap-x-5 gap-y-1.5">
+      {groups.map(({ name, kinds }) => (
+        <li key={name} className="flex min-w-0 flex-wrap items-center gap-1">
+          <span className="mr-1 text-xs text-ink-3">{name}</span>
+          <ul className="flex flex-wrap gap-1">
+            {kinds.map((kind) => (
+              <li key={kind}>
+                <TestLink kind={kind} isCurrent={kind === current} to={hrefOf(kind)} />
+              </li>
+            ))}
+          </ul>
+        </li>
+      ))}
+    </ul>
   );
 }
 

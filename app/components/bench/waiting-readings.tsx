@@ -2,14 +2,14 @@ import { uuidv7 } from "uuidv7";
 import { Button } from "#app/components/ui/button.tsx";
 import { Card } from "#app/components/ui/card.tsx";
 import { Chip } from "#app/components/ui/chip.tsx";
-import { observationKindNames } from "#app/domain/reading.ts";
+import { observationKindNames, observationKinds } from "#app/domain/reading.ts";
 import { readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
 import { dropDeed, keepDeed, type Whose } from "./outbox/outbox.ts";
 import type { KeptDeed } from "./outbox/outbox-store.ts";
 import { StrikeForm } from "./strike-form.tsx";
 import type { WaitingReading } from "./waiting-reading.ts";
 
-type WaitingReadingsProps = { deeds: readonly KeptDeed[]; readings: readonly WaitingReading[]; whose: Whose; stoneCode: string; isSignedOut?: boolean };
+type WaitingReadingsProps = { deeds: readonly KeptDeed[]; readings: readonly WaitingReading[]; whose: Whose; stoneCode: string };
 
 /** What was recorded without the line and waits on this device; what the server refused stays until a person decides. */
 export function WaitingReadings({ deeds, readings, whose, stoneCode }: WaitingReadingsProps) {
@@ -26,8 +26,8 @@ export function WaitingReadings({ deeds, readings, whose, stoneCode }: WaitingRe
             <li key={deed.place} className="grid gap-1.5 border-t border-rule px-4.5 py-3 text-sm">
               <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1">
                 <span className="whitespace-nowrap">{clockOf(deed.madeAt)}</span>
-                <strong className="font-semibold">{made ? observationKindNames[made.reading.detail.kind] : "Strike"}</strong>
-                <span className={`font-mono ${strike ? "line-through decoration-red" : ""}`}>{made ? (made.reading.quality === "noResult" ? `no reading: ${made.noResultReason}` : readingValueText(made.reading)) : strikeWords(deed)}</span>
+                <strong className="font-semibold">{deed.kind === "strike" ? "Strike" : nameOf(deed)}</strong>
+                <span className={`font-mono ${strike ? "line-through decoration-red" : ""}`}>{made ? (made.reading.quality === "noResult" ? `no reading: ${made.noResultReason}` : readingValueText(made.reading)) : deed.kind === "strike" ? strikeWords(deed) : ""}</span>
                 <span className="text-ink-2">{made ? readingSeenText(made.reading) : ""}</span>
                 <span className="ml-auto">{deed.refusal === null ? <Chip tone="blue">waiting</Chip> : <Chip tone="red">refused</Chip>}</span>
               </div>
@@ -55,6 +55,11 @@ export function WaitingReadings({ deeds, readings, whose, stoneCode }: WaitingRe
 }
 
 const fieldOf = ({ fields }: KeptDeed, name: string) => fields.find(([key]) => key === name)?.[1] ?? "";
+
+function nameOf(deed: KeptDeed): string {
+  const kind = observationKinds.find((one) => one === fieldOf(deed, "kind"));
+  return kind ? observationKindNames[kind] : "Reading";
+}
 
 function strikeWords(deed: KeptDeed): string {
   const sequence = fieldOf(deed, "named.sequence");

@@ -11,7 +11,7 @@ export function natureOfStone(readings: readonly (NumberedReading & { note: stri
   const first = candidates[0] && candidates[0].probability > 0.5 ? candidates[0] : null;
   const texts = readings.filter(({ strike, quality }) => !strike && quality !== "noResult").flatMap(({ detail, note }) => [...seenTexts(detail), note].filter(Boolean));
   const evidence = natureEvidence({ speciesId: first?.speciesId ?? null, texts });
-  return { ...evidence, speciesName: first?.name ?? null, beyondBench: beyondBench(first?.speciesId ?? null), referral: referralReasons({ speciesId: first?.speciesId ?? null, variety: "", hasConflict: evidence.conflicts.length > 0 }) };
+  return { ...evidence, speciesName: first?.name ?? null, beyondBench: beyondBench(first?.speciesId ?? null), referral: referralReasons({ speciesId: first?.speciesId ?? null, variety: null, hasConflict: evidence.conflicts.length > 0 }) };
 }
 
 /** What an observer wrote or ticked; a tick says what its label says. */

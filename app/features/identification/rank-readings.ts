@@ -1,5 +1,5 @@
 import type { Evidence } from "#app/gemmology/ranking/evidence.ts";
-import { rankSpecies } from "#app/gemmology/ranking/rank-species.ts";
+import { rankSpecies, type RankOptions } from "#app/gemmology/ranking/rank-species.ts";
 import type { EvidenceLine, Ranking } from "#app/gemmology/ranking/ranking.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
 import { evidenceFromReadings, type RankedReading } from "#app/features/readings/evidence-from-readings.ts";
@@ -14,9 +14,13 @@ const mostComparable = 12;
 const negligible = 0.001;
 
 /** Everything that the bench shows of a ranking, by one and the same code in the browser and on the server. */
-export function rankReadings(readings: readonly NumberedReading[], table: SpeciesTable, { mostReasons = Infinity, compare = [] }: { mostReasons?: number; /** Ids of two candidates. */ compare?: readonly string[] } = {}): BenchRanking {
+export function rankReadings(
+  readings: readonly NumberedReading[],
+  table: SpeciesTable,
+  { mostReasons = Infinity, compare = [], prior = "prevalence" }: RankOptions & { mostReasons?: number; /** Ids of two candidates. */ compare?: readonly string[] } = {},
+): BenchRanking {
   const evidence = evidenceFromReadings(readings);
-  const ranking = rankSpecies(evidence, table);
+  const ranking = rankSpecies(evidence, table, { prior });
   const names = new Map(table.nodes.map(({ id, name }) => [id, name]));
   const against = contradictingReadings(readings, table);
   // One contradiction does not take a species from the ranking, but what it leaves unlikely is told with its reason.
@@ -101,6 +105,15 @@ function measuredIndex({ ri = [] }: Evidence): Measured | null {
         return [{ value: reading.n, u: reading.u ?? usualUncertainty.edge }];
       case "criticalAngle":
         return [{ value: reading.prismN * Math.sin((reading.angleDeg * Math.PI) / 180), u: usualUncertainty.criticalAngleIndex }];
+      case "interval":
+        return [{ value: (reading.low + reading.high) / 2, u: Math.max((reading.high - reading.low) / Math.sqrt(12), reading.u ?? usualUncertainty.edge) }];
+      case "estimate":
+        return [{ value: reading.n, u: reading.u }];
+      case "rotation":
+        return reading.solutions.slice(0, 1).map(({ indices, u }) => {
+          const values = Object.values(indices);
+          return { value: (Math.min(...values) + Math.max(...values)) / 2, u: u ?? usualUncertainty.edge };
+        });
       case "overLimit":
         return [];
     }
@@ -109,7 +122,7 @@ function measuredIndex({ ri = [] }: Evidence): Measured | null {
 }
 
 /** The ranking as it is kept with a conclusion: whole, with what it was made from. */
-export function rankingSnapshot(readings: readonly NumberedReading[], table: SpeciesTable): { evidence: Evidence; ranking: Ranking } {
+export function rankingSnapshot(readings: readonly NumberedReading[], table: SpeciesTable, options: RankOptions = {}): { evidence: Evidence; ranking: Ranking } {
   const evidence = evidenceFromReadings(readings);
-  return { evidence, ranking: rankSpecies(evidence, table) };
+  return { evidence, ranking: rankSpecies(evidence, table, options) };
 }

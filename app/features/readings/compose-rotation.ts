@@ -1,6 +1,7 @@
 import type { ReadingValue } from "#app/domain/reading.ts";
 import { plainText } from "#app/domain/plain-text.ts";
 import { fitRotation } from "#app/gemmology/rotation/fit-rotation.ts";
+import { rotationEvidence } from "#app/gemmology/ranking/rotation-evidence.ts";
 import type { RotationFit, RotationSolution } from "#app/gemmology/rotation/rotation-fit.ts";
 import type { Composed } from "./compose-reading.ts";
 import { derived } from "./derived-values.ts";
@@ -18,7 +19,7 @@ export function composeRotation(draft: Extract<ReadingDraft, { kind: "rotation" 
   const { kind, quality, light } = draft;
   const rows = plainText(draft.rows);
   if (rows.length > mostText) return { problems: { rows: [`At most ${mostText} characters; this is ${rows.length}.`] } };
-  if (quality === "noResult") return { reading: { detail: { kind, light, rows: "", character: "undetermined", sign: null }, quality, values: [] } };
+  if (quality === "noResult") return { reading: { detail: { kind, light, rows: "", character: "undetermined", sign: null, solutions: [] }, quality, values: [] } };
   const { run, problem } = readRotationRows(rows, edgeUncertainty({ instrument, light, quality }));
   if (problem !== null) return { problems: { rows: [problem] } };
   const limit = instrument?.upperLimit;
@@ -26,7 +27,12 @@ export function composeRotation(draft: Extract<ReadingDraft, { kind: "rotation" 
   if (beyond) return { problems: { rows: [`${Math.max(beyond.upper ?? 0, beyond.lower ?? 0).toFixed(3)} at ${beyond.angleDeg}° lies above ${limit}, the limit of this refractometer's contact liquid: write a dash for an edge beyond it.`] } };
   const fit = fitRotation(run);
   const { character, sign } = rotationFinding(fit);
-  return { reading: { detail: { kind, light, rows, character, sign }, quality, values: valuesOf(fit) } };
+  return { reading: { detail: { kind, light, rows, character, sign, solutions: solutionsOf(fit) }, quality, values: valuesOf(fit) } };
+}
+
+function solutionsOf(fit: RotationFit) {
+  const evidence = rotationEvidence(fit);
+  return evidence?.kind === "rotation" ? evidence.solutions : [];
 }
 
 /** What the run decides of the crystal; what several solutions within reach share, where none is alone. */

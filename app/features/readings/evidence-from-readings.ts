@@ -2,7 +2,7 @@ import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } fr
 import type { Evidence, RefractiveEvidence } from "#app/gemmology/ranking/evidence.ts";
 import { immersionIndex } from "./derived-from-described.ts";
 import { seenEvidence } from "./seen-evidence.ts";
-import { characterOf, type SeenCharacter } from "./optic-character.ts";
+import { characterOf } from "./optic-character.ts";
 
 /** A reading as the ranking takes it: one that was saved, or the one that is being typed. */
 export type RankedReading = Readonly<{ detail: ReadingDetail; quality: ReadingQuality; values: readonly ReadingValue[]; strike?: unknown }>;
@@ -15,9 +15,11 @@ export function evidenceFromReadings(readings: readonly RankedReading[]): Eviden
   const standing = readings.filter(({ quality, strike }) => quality !== "noResult" && !strike);
   const ri = standing.flatMap((reading) => riOf(reading) ?? []);
   const polariscope = bestPolariscope(standing);
-  const { character, sign } = characterAndSign(polariscope, bestRotation(standing));
-  const sg = meanDensity(standing) ?? suspendedIn(standing);
-  return { ...seenEvidence(standing), ...(ri.length > 0 && { ri }), ...(character && { opticCharacter: character }), ...(sign && { opticSign: sign }), ...(sg && { sg }) };
+  const character = polariscope && characterOf(polariscope);
+  const sign = character === "uniaxial" || character === "biaxial" ? polariscope?.sign : null;
+  const sg = meanDensity(standing);
+  const heavyLiquids = standing.flatMap((reading) => heavyLiquidOf(reading) ?? []);
+  return { ...seenEvidence(standing), ...(heavyLiquids.length > 0 && { heavyLiquids }), ...(ri.length > 0 && { ri }), ...(character && { opticCharacter: character }), ...(sign && { opticSign: sign }), ...(sg && { sg }) };
 }
 
 /** Poor readings say less: their uncertainty is widened, so that one of them cannot outweigh a good one. */
@@ -45,17 +47,17 @@ function riOf({ detail, quality, values }: RankedReading): RefractiveEvidence | 
       return limit && { kind: "overLimit", limit: limit.value };
     }
     case "rotation": {
-      const [low, high, alpha] = [get("low"), get("high"), get("alpha") ?? get("gamma") ?? get("n")];
-      if (low && high) return { kind: "edges", low: low.value, high: high.value, u: Math.max(u(low), u(high)), rotated: true };
-      return alpha && { kind: "single", n: alpha.value, u: u(alpha) };
+      // Its crystals hold what it says of character and sign as well.
+      if (detail.solutions.length > 0) return { kind: "rotation", solutions: detail.solutions.map((crystal) => ({ ...crystal, u: (crystal.u ?? 0.0015) * widening[quality] })) };
+      const edge = get("alpha") ?? get("gamma");
+      return edge && { kind: "single", n: edge.value, u: u(edge) };
     }
     case "reflectivity":
     case "brewster":
     case "realDepth":
     case "immersion": {
-      // As coarse as a spot reading, and as little able to show two edges.
       const n = get("n");
-      if (n) return { kind: "spot", n: n.value, u: u(n) };
+      if (n) return { kind: "estimate", n: n.value, u: u(n), by: ({ reflectivity: "reflectance", brewster: "brewster", realDepth: "depth", immersion: "immersion" } as const)[detail.kind] };
       return detail.kind === "immersion" && detail.comparison === "higher" && detail.liquid ? { kind: "overLimit", limit: immersionIndex(detail.liquid) } : undefined;
     }
     default:
@@ -63,31 +65,12 @@ function riOf({ detail, quality, values }: RankedReading): RefractiveEvidence | 
   }
 }
 
-type Rotation = Extract<ReadingDetail, { kind: "rotation" }>;
-type Polariscope = Extract<ReadingDetail, { kind: "polariscope" }>;
-
-/** Crossed polars and a rotation run answer one question: whichever says more is heard, the polariscope first. */
-function characterAndSign(polariscope: Polariscope | undefined, rotation: Rotation | undefined): { character: SeenCharacter | undefined; sign: "+" | "-" | null } {
-  const character = polariscope && characterOf(polariscope);
-  const isFull = character === "uniaxial" || character === "biaxial";
-  if (rotation && rotation.character !== "undetermined" && !isFull && (character === undefined || character === "anisotropic")) {
-    // One constant edge is no proof of single refraction: the other may hide or lie beyond the limit.
-    if (rotation.character !== "isotropic") return { character: rotation.character, sign: rotation.sign };
-  }
-  const sign = isFull ? (polariscope?.sign ?? (rotation?.character === character ? rotation.sign : null)) : null;
-  return { character, sign };
-}
-
-function bestRotation(readings: readonly RankedReading[]): Rotation | undefined {
-  return readings
-    .flatMap(({ detail, quality }, at) => (detail.kind === "rotation" ? [{ detail, quality: qualityOrder.indexOf(quality), at }] : []))
-    .sort((a, b) => b.quality - a.quality || b.at - a.at)[0]?.detail;
-}
-
-/** Where nothing was weighed, a liquid that the stone hung in gives its density; floating and sinking give none. */
-function suspendedIn(readings: readonly RankedReading[]): { value: number; u: number } | undefined {
-  const liquid = readings.findLast(({ detail }) => detail.kind === "heavyLiquid" && detail.behaviour === "suspended")?.values.find(({ name }) => name === "liquidSg");
-  return liquid && { value: liquid.value, u: liquid.standardUncertainty ?? 0.01 };
+/** What the stone did in a liquid of known density; a suspended one has that density. */
+function heavyLiquidOf({ detail, values }: RankedReading): NonNullable<Evidence["heavyLiquids"]>[number] | undefined {
+  if (detail.kind !== "heavyLiquid" || !detail.behaviour) return undefined;
+  const liquid = values.find(({ name }) => name === "liquidSg");
+  const behaviour = ({ floats: "floats", suspended: "suspended", sinksSlowly: "sinks", sinks: "sinks" } as const)[detail.behaviour];
+  return liquid && { behaviour, liquidSg: liquid.value, uLiquidSg: liquid.standardUncertainty ?? 0.01 };
 }
 
 const qualityOrder: readonly ReadingQuality[] = ["poor", "fair", "good"];

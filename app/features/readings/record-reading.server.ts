@@ -3,6 +3,7 @@ import { inTransaction } from "#app/db/in-transaction.server.ts";
 import { instrumentChecks, instruments, itemConsents, items, observations, observationValues, secondChecks, stones } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
+import { impliedIndex } from "#app/domain/implied-index.ts";
 import type { Id, InstrumentId, ObservationId, SecondCheckId } from "#app/domain/ids.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import { aboutTest, consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
@@ -53,11 +54,11 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     if (!stone) throw new AppError("not_found", "There is no such stone.");
 
     const [repeat] = await tx
-      .select({ sequence: observations.sequence, stoneId: observations.stoneId, observerId: observations.observerId })
+      .select({ id: observations.id, sequence: observations.sequence, stoneId: observations.stoneId, observerId: observations.observerId, kind: observations.kind })
       .from(observations)
       .where(and(eq(observations.laboratoryId, laboratoryId), eq(observations.requestId, requestId)));
     if (repeat) {
-      if (repeat.stoneId === stone.id && repeat.observerId === actorId) return { sequence: repeat.sequence, warnings: [] };
+      if (repeat.stoneId === stone.id && repeat.observerId === actorId && (await saysTheSame(scope, repeat, draft))) return { sequence: repeat.sequence, warnings: [] };
       throw new AppError("conflict", "This form was sent for another reading before. Open the page anew and send it again.");
     }
 
@@ -98,6 +99,22 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     await recordAudit(scope, { action: "reading.recorded", subject: { kind: "stone", id: stone.id }, detail: { sequence, kind: reading.detail.kind } });
     return { sequence, warnings: readingWarnings({ reading, instrument, check, today: calendarDateIn(now, ctx.laboratory.timeZone), earlierWeightText: secondCheckId === null ? stone.weightText : "" }) };
   });
+}
+
+/** The same form once more, not another reading under its id: by its test and the digits as typed. */
+async function saysTheSame({ db, laboratoryId }: LabContext, { id, kind }: { id: ObservationId; kind: ObservationKind }, draft: ReadingDraft): Promise<boolean> {
+  if (kind !== draft.kind) return false;
+  const kept = await db
+    .select({ typedText: observationValues.typedText })
+    .from(observationValues)
+    .where(and(eq(observationValues.laboratoryId, laboratoryId), eq(observationValues.observationId, id), isNull(observationValues.formula)));
+  const typed = new Set(textsOf(draft).flatMap((text) => [text.trim(), impliedIndex(text.trim())]));
+  return kept.every(({ typedText }) => typed.has(typedText));
+}
+
+function textsOf(value: unknown): string[] {
+  if (typeof value === "string") return [value];
+  return value !== null && typeof value === "object" ? Object.values(value).flatMap(textsOf) : [];
 }
 
 type LockedStone = { id: Id<"stone">; state: keyof typeof examinationStateNames; examinerId: Id<"user"> | null };

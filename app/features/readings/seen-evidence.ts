@@ -76,10 +76,18 @@ function fluorescenceOf(longWave: Detail<"ultraviolet"> | undefined, shortWave: 
   return long || short ? { fluorescence: { ...(long && { longWave: long }), ...(short && { shortWave: short }) } } : {};
 }
 
-/** What shines is no absorption; no spectrum seen says nothing. */
+/** Dark lines alone: what shines is no absorption. Looked for and not seen is told as well. */
 function absorptionOf(detail: Detail<"spectroscope"> | undefined): Evidence {
-  const dark = detail ? readSpectrumLines(detail.lines).lines.filter(({ isEmission, nm }) => !isEmission && nm >= 350 && nm <= 800) : [];
-  return dark.length > 0 ? { absorption: dark.map(({ nm, kind }) => ({ nm, kind })) } : {};
+  if (!detail) return {};
+  const dark = readSpectrumLines(detail.lines).lines.filter(({ isEmission }) => !isEmission);
+  return { absorption: dark.map(({ nm, kind }) => ({ nm, kind, u: wavelengthU(detail.scale, nm) })) };
+}
+
+/** Standard uncertainty of a line's place, nm (instruments 2.6): a prism's red is crowded, a grating's scale even. */
+function wavelengthU(scale: Detail<"spectroscope">["scale"], nm: number): number {
+  if (scale === "digital") return 0.6;
+  if (scale === "grating") return 1.7;
+  return nm > 600 ? 2.9 : 1.2;
 }
 
 function filterOf(detail: Detail<"colourFilter"> | undefined): Evidence {

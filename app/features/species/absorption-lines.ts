@@ -13,7 +13,7 @@ export function absorptionLines(table: SpeciesTable, speciesIds: readonly string
   return speciesIds.flatMap((speciesId) => {
     const node = table.nodes.find(({ id }) => id === speciesId);
     const strongest = new Map<string, AbsorbingSpecies["lines"][number]>();
-    for (const [nm, halfWidthNm, strength] of (node?.forms ?? []).flatMap(({ absorption }) => absorption).toSorted((a, b) => a[2] - b[2])) {
+    for (const [nm, halfWidthNm, strength] of (node?.forms ?? []).flatMap(({ absorption }) => absorption.flatMap(({ lines }) => lines)).toSorted((a, b) => a[2] - b[2])) {
       const drawnHalfNm = halfWidthNm <= widestLineHalfNm ? 0 : halfWidthNm;
       strongest.set(`${nm}/${drawnHalfNm}`, { nm, halfWidthNm: drawnHalfNm, strength: strengths[strength as 1 | 2 | 3] ?? "weak", isEmission: false });
     }

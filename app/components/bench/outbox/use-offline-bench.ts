@@ -21,6 +21,7 @@ export function useOfflineBench({ labSlug, stoneCode, person, loaderData }: { la
 const warmParts = () =>
   Promise.all([
     import("../rotation-editor.tsx"),
+    import("../waiting-reading.ts"),
     import("#app/components/charts/index-density-map.tsx"),
     import("#app/features/identification/rank-readings.ts"),
     import("#app/features/readings/evidence-from-readings.ts"),

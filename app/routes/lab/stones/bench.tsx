@@ -1,6 +1,6 @@
 import type { SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
-import { useMemo, useState } from "react";
+import { useCallback, useMemo, useState } from "react";
 import { Link, redirect } from "react-router";
 import { uuidv7 } from "uuidv7";
 import { HiddenCandidatesCard, HideCandidatesForm } from "#app/components/bench/hide-candidates-card.tsx";
@@ -70,9 +70,10 @@ export async function loader({ request, context, params, url }: Route.LoaderArgs
   const examined = shown?.filter(({ isOfSecondCheck }) => !isOfSecondCheck) ?? null;
   const view = viewOf(url);
   const compare = [...new Set(url.searchParams.getAll("compare").filter(Boolean))].slice(0, 2);
+  const prior = url.searchParams.get("prior") === "even" ? ("even" as const) : ("prevalence" as const);
   const plan = planFromSearch(url.searchParams);
   const left = planLeft(plan, examined ?? []);
-  const ranking = examined && (await rankStone(ctx, { readings: readingsAsOf(examined, view), compare })).bench;
+  const ranking = examined && (await rankStone(ctx, { readings: readingsAsOf(examined, view), compare, prior })).bench;
   const areCandidatesHidden = url.searchParams.get("candidates") === "hidden" && (plan.kinds.length === 0 || left.length > 0);
   return {
     stone: bench.stone,
@@ -86,7 +87,7 @@ export async function loader({ request, context, params, url }: Route.LoaderArgs
     conclusion: isOffered ? null : conclusion && { version: conclusion.version, by: conclusion.by },
     instruments: isOffered ? [] : instruments,
     ranking,
-    view: { ...view, compare, standing: isLookedBack(view) && examined ? readingsAsOf(examined, view).filter(({ strike }) => !strike).map(({ sequence }) => sequence) : null },
+    view: { ...view, compare, prior, standing: isLookedBack(view) && examined ? readingsAsOf(examined, view).filter(({ strike }) => !strike).map(({ sequence }) => sequence) : null },
     next: examined && nextTestsForStone(examined, loadSpeciesTable().table, { ...bench.stone, consents: bench.consents, instruments }),
     test: testOf(url),
     areCandidatesHidden,
@@ -224,7 +225,6 @@ type LoaderData = Route.ComponentProps["loaderData"];
 type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { labSlug: string; readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
 function Examination({ labSlug, person, isKept, readings, ranking, next, instruments, test, requestId, areCandidatesHidden, plan, view, spectrum, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
-  const [typed, setTyped] = useState<ComposedReading | null>(null);
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const struckCount = readings.filter(({ strike }) => strike).length;
   const hidden = areCandidatesHidden ? `&candidates=hidden${planSearch(plan)}` : "";
@@ -232,6 +232,11 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
   const whose = useMemo(() => ({ person, labSlug }), [person, labSlug]);
   const deeds = useOutbox(whose, stone.code);
   const waiting = useWaitingReadings(deeds, instruments);
+  // One's own saved reading clears the form; a refused one keeps what was typed, and a colleague's leaves it alone.
+  const formKey = `${test}-${readings.filter(({ isOwn }) => isOwn).length}-${deeds.length}`;
+  const [draft, setDraft] = useState<{ formKey: string; reading: ComposedReading | null }>({ formKey: "", reading: null });
+  const onDraft = useCallback((reading: ComposedReading | null) => setDraft({ formKey, reading }), [formKey]);
+  const typed = draft.formKey === formKey ? draft.reading : null;
   const strikesWaiting = useMemo(() => strikesThatWait(deeds), [deeds]);
   const counted = useMemo(() => [...standing.filter(({ sequence }) => !strikesWaiting.has(sequence)), ...waiting.filter(({ isStruck }) => !isStruck).map(({ reading }) => ({ ...reading, sequence: null }))], [standing, waiting, strikesWaiting]);
   return (
@@ -243,10 +248,9 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
           <Card title="New reading" note="kept as you type it, never overwritten">
             <TestChoice current={test} hrefOf={(kind) => `?test=${kind}${hidden}`} />
             <NewReading
-              // One's own saved reading clears the form; a refused one keeps what was typed, and a colleague's leaves it alone.
-              key={`${test}-${readings.filter(({ isOwn }) => isOwn).length}-${deeds.length}`}
+              key={formKey}
               {...{ kind: test, instruments, requestId, lastResult, areCandidatesHidden, spectrum }}
-              onDraft={setTyped}
+              onDraft={onDraft}
             />
           </Card>
         ) : null}
@@ -295,17 +299,18 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
         ) : (
           <>
             {view.standing ? <Caution>The ranking {view.atSequence === null ? "with what the struck readings said" : `as it was after reading ${view.atSequence}`}. <Link to={`?test=${test}`} preventScrollReset className="text-link">Back to now</Link></Caution> : null}
-            <LiveCandidates saved={ranking} readings={counted} compare={view.compare} typed={can.record && !view.standing ? typed : null} />
+            <LiveCandidates saved={ranking} readings={counted} compare={view.compare} prior={view.prior} typed={can.record && !view.standing ? typed : null} />
             {next && can.record ? <NextTestsCard next={next} hrefOf={(kind) => `?test=${kind}`} /> : null}
             <RankingViewForm
-              key={`${view.atSequence}-${view.areStruckCounted}-${view.compare.join("-")}`}
+              key={`${view.prior}-${view.atSequence}-${view.areStruckCounted}-${view.compare.join("-")}`}
               test={test}
               moments={examined.map(({ sequence, when, detail }) => ({ sequence, when, kind: detail.kind }))}
               hasStruck={struckCount > 0}
               view={view}
               comparable={ranking.comparable}
               compare={view.compare}
-              isOpen={view.standing !== null || view.compare.length > 0}
+              prior={view.prior}
+              isOpen={view.standing !== null || view.compare.length > 0 || view.prior === "even"}
             />
             {can.record ? <HideCandidatesForm test={test} lastSequence={readings.at(-1)?.sequence ?? 0} /> : null}
             <p className="no-print px-1 text-sm">
