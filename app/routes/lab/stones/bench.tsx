@@ -264,6 +264,9 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
           note={`${readings.length - struckCount} kept, ${struckCount} struck`}
           aside={
             <span className="no-print flex flex-wrap gap-x-4 text-sm">
+              <Link to={`${base}/inclusions`} className="text-ink-2">
+                Inclusions
+              </Link>
               <Link to={`${base}/spectra`} className="text-ink-2">
                 Measured spectra
               </Link>
