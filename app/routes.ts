@@ -67,7 +67,13 @@ export default [
       route("clients/:clientRef", "routes/lab/clients/detail.tsx"),
       route("instruments", "routes/lab/instruments/list.tsx"),
       route("instruments/new", "routes/lab/instruments/new.tsx"),
+      route("instruments.csv", "routes/lab/instruments/list-csv.ts"),
+      route("instruments/recall", "routes/lab/instruments/recall.tsx"),
+      route("instruments/recall.csv", "routes/lab/instruments/recall-csv.ts"),
+      route("instruments/references", "routes/lab/instruments/references.tsx"),
+      route("instruments/references/:referenceRef", "routes/lab/instruments/reference.tsx"),
       route("instruments/:instrumentRef", "routes/lab/instruments/detail.tsx"),
+      route("instruments/:instrumentRef/correction", "routes/lab/instruments/correction.tsx"),
 
       // species
       route("species", "routes/lab/species/list.tsx"),

@@ -26,6 +26,8 @@ test.each([
   ["/stones?q=oval", 3],
   ["/clients", 3],
   ["/instruments", 3],
+  ["/instruments/recall", 3],
+  ["/instruments/references", 3],
   ["/invoices", 3],
   ["/reports", 3],
   ["/stones/MQ-26-0015-1", 3],

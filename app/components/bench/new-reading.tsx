@@ -13,6 +13,7 @@ import { composeReading, type ComposedReading } from "#app/features/readings/com
 import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
 import { withUncertainty } from "#app/features/readings/reading-words.ts";
 import type { BenchInstrument } from "#app/features/stones/get-bench.server.ts";
+import { correctionWords } from "#app/components/instruments/correction-words.ts";
 import { ReadingFields, type ReadingFieldset } from "./reading-fields.tsx";
 
 type NewReadingProps = {
@@ -79,7 +80,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
             label="Instrument"
             isRequired={needed !== null}
             emptyLabel={needed ? "Choose" : "By eye"}
-            options={fitting.map(({ ref, name, description, isOutOfCheck }) => ({ value: ref, label: `${name}${description ? `, ${description}` : ""}${isOutOfCheck ? " (check overdue)" : ""}` }))}
+            options={fitting.map(({ ref, name, description, isOutOfCheck }) => ({ value: ref, label: `${name}${description ? `, ${description}` : ""}${isOutOfCheck ? " (out of check)" : ""}` }))}
           />
         ) : needed ? (
           <p className="text-sm text-straw">No instrument of this kind is in service. Enter it under Instruments, or record “No reading”.</p>
@@ -130,7 +131,8 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
           <dd>
             {instrument.name}
             {instrument.check ? `, checked ${formatCalendarDate(instrument.check.checkedOn)} on ${instrument.check.referenceMaterial}` : ", no check on record"}
-            {instrument.isOutOfCheck && instrument.check ? <span className="text-straw">; the next one is overdue</span> : null}
+            {instrument.outOfCheck ? <span className="block font-medium text-red">{instrument.outOfCheck} A reading on it is marked, and cannot carry “identified” until it is checked.</span> : null}
+            {instrument.correction ? <span className="block text-ink-3">its correction is added: {correctionWords(instrument.correction.correction, instrument.correction.unit)}</span> : null}
             {instrument.status === "restricted" ? <span className="text-straw">; restricted</span> : null}
           </dd>
         </div>

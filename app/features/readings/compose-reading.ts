@@ -1,16 +1,17 @@
 import type { FieldErrors } from "#app/domain/app-error.ts";
 import { decimalPlaces, parseDecimal } from "#app/domain/decimal.ts";
+import { applyCorrection, type AppliedCorrection } from "#app/features/instruments/apply-correction.ts";
 import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
 import { derivedDensity, derivedIndex, differenceOfEdges } from "./derived-values.ts";
 import type { ReadingDraft } from "./reading-draft.ts";
 import { angleUncertaintyDeg, edgeUncertainty, gaugeUncertaintyMm, spotUncertainty, usualUncertainty, waterWeighingUncertaintyCt, weighingUncertaintyCt } from "./usual-uncertainty.ts";
 
 /** What a reading needs to know of the instrument that it was made on. */
-export type ReadingInstrument = Readonly<{ resolution: number | null; standardUncertainty: number | null; upperLimit: number | null; prismIndex: number | null }>;
+export type ReadingInstrument = Readonly<{ resolution: number | null; standardUncertainty: number | null; upperLimit: number | null; prismIndex: number | null; correction?: AppliedCorrection | null }>;
 export type ComposedReading = Readonly<{ detail: ReadingDetail; quality: ReadingQuality; values: readonly ReadingValue[] }>;
 export type Composed = { reading: ComposedReading; problems?: undefined } | { reading?: undefined; problems: FieldErrors };
 
-type NumberRule = Readonly<{ name: ReadingValueName; what: string; unit: ReadingValue["unit"]; example: string; min: number; max: number; mostDecimals: number; isReadOnInstrument?: boolean; u: number | null }>;
+type NumberRule = Readonly<{ name: ReadingValueName; what: string; unit: ReadingValue["unit"]; example: string; min: number; max: number; mostDecimals: number; isReadOnInstrument?: boolean; /** Two readings taken from each other. */ isDifference?: boolean; u: number | null }>;
 
 /**
  * A reading as it was typed, turned into its numbers with their uncertainties and what follows from them, or into what
@@ -26,9 +27,18 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
       refuse(field, read);
       return undefined;
     }
-    values.push({ name: rule.name, value: read, typedText: text.trim(), unit: rule.unit, standardUncertainty: rule.u, formula: null });
-    return read;
+    const typed = { name: rule.name, typedText: text.trim(), unit: rule.unit, formula: null };
+    // The liquid's limit is the liquid's own; everything else that is read on the scale shares the scale's error.
+    const corrected = rule.isReadOnInstrument && rule.name !== "limit" ? applyCorrection(instrument?.correction, { value: read, unit: rule.unit, isDifference: rule.isDifference }) : undefined;
+    if (!corrected) {
+      values.push({ ...typed, value: read, standardUncertainty: rule.u });
+      return read;
+    }
+    const value = inColumn(corrected.value);
+    values.push({ ...typed, value, rawValue: read, standardUncertainty: rule.u === null ? null : inColumn(Math.hypot(rule.u, corrected.u)) });
+    return value;
   };
+  const uOf = (name: ReadingValueName, usual: number) => values.find((value) => value.name === name)?.standardUncertainty ?? usual;
   const { quality } = draft;
   const isEmpty = quality === "noResult";
 
@@ -74,7 +84,7 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
           const angleDeg = number("angleDeg", draft.angleDeg, { name: "angleDeg", what: "the angle", unit: "deg", example: "55.23", min: 30, max: 89.9, mostDecimals: 3, isReadOnInstrument: true, u: uAngle });
           const prismN = number("prismN", draft.prismN, { ...indexRule, name: "prismN", what: "the prism's index", example: "1.880", min: 1.4, max: 2.7, mostDecimals: 5, isReadOnInstrument: false, u: usualUncertainty.prismIndex });
           if (angleDeg !== undefined && prismN !== undefined) {
-            const derived = derivedIndex({ angleDeg, prismN, uAngleDeg: uAngle, uPrismN: usualUncertainty.prismIndex });
+            const derived = derivedIndex({ angleDeg, prismN, uAngleDeg: uOf("angleDeg", uAngle), uPrismN: usualUncertainty.prismIndex });
             if (derived.value < 1.3) refuse("angleDeg", `This angle gives an index of ${derived.value.toFixed(3)}, below that of any stone. Does the scale show the complement?`);
             else values.push(derived);
           }
@@ -129,7 +139,7 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
     const uLiquid = waterWeighingUncertaintyCt(instrument);
     const isHung = method === "suspended";
     const air = number("massAirCt", massAirCt, { ...massRule, name: "massAirCt", what: "the weight in air", example: "2.143", u: uAir });
-    const liquid = number("massLiquidCt", massLiquidCt, { ...massRule, name: "massLiquidCt", what: isHung ? "the weight in water" : "what the beaker gained", example: isHung ? "1.606" : "0.537", u: uLiquid });
+    const liquid = number("massLiquidCt", massLiquidCt, { ...massRule, name: "massLiquidCt", what: isHung ? "the weight in water" : "what the beaker gained", example: isHung ? "1.606" : "0.537", isDifference: !isHung, u: uLiquid });
     const temp = number("tempC", tempC, { name: "tempC", what: "the water's temperature", unit: "degC", example: "21.4", min: 0, max: 40, mostDecimals: 2, u: usualUncertainty.waterTempC });
     if (air === undefined || liquid === undefined) return;
     if (liquid >= air) {
@@ -138,7 +148,7 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
     }
     if (!isHung && liquid === 0) return refuse("massLiquidCt", "The beaker gains more than nothing when a stone hangs in it.");
     if (temp === undefined) return;
-    const sg = derivedDensity({ method, massAirCt: air, massLiquidCt: liquid, tempC: temp, uAirCt: uAir, uLiquidCt: uLiquid });
+    const sg = derivedDensity({ method, massAirCt: air, massLiquidCt: liquid, tempC: temp, uAirCt: uOf("massAirCt", uAir), uLiquidCt: uOf("massLiquidCt", uLiquid) });
     if (sg.value < 0.8 || sg.value > 25) return refuse("massLiquidCt", `These weights give a density of ${sg.value.toPrecision(3)}, which no stone has. Is a digit wrong, or the method another?`);
     values.push(sg);
   }
@@ -176,5 +186,8 @@ function outside(what: string, unit: ReadingValue["unit"], min: number, max: num
 function decimalsOf(step: number): number {
   return /\.(\d+)$/.exec(step.toFixed(6).replace(/0+$/, ""))?.[1]?.length ?? 0;
 }
+
+/** At the precision that the database keeps. */
+const inColumn = (value: number) => Number(value.toFixed(7));
 
 const sentence = (text: string) => text[0]!.toUpperCase() + text.slice(1);

@@ -1,3 +1,4 @@
+import { decimalPlaces } from "#app/domain/decimal.ts";
 import { formatWithUncertainty } from "#app/domain/format-uncertainty.ts";
 import { lightNames, type ReadingDetail, type ReadingValueName } from "#app/domain/reading.ts";
 import type { ReportRow } from "#app/reports/report-view.ts";
@@ -56,7 +57,7 @@ function critical(reading: ReportedReading | undefined): Parts | undefined {
 
 function spot(reading: ReportedReading | undefined): Parts | undefined {
   const n = reading?.values.get("n");
-  return n && [{ text: `n ≈ ${n.typedText.replace(",", ".") || n.value}`, isMono: true }, { text: "spot reading" }];
+  return n && [{ text: `n ≈ ${n.typedText ? n.value.toFixed(decimalPlaces(n.typedText)) : n.value}`, isMono: true }, { text: "spot reading" }];
 }
 
 function overLimit(reading: ReportedReading | undefined): Parts | undefined {
