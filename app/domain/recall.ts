@@ -7,3 +7,6 @@ export const recallDeedNames: Readonly<Record<RecallDeed, string>> = {
   accepted: "Accepted with a reason",
   reportWithdrawn: "Report withdrawn",
 };
+
+/** More are never shown at once: the oldest failures first, so that the list works itself down. */
+export const mostRecalled = 300;

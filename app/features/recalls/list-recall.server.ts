@@ -1,7 +1,7 @@
 import { sql, type SQL } from "drizzle-orm";
 import { observations } from "#app/db/schema/index.ts";
 import type { ObservationKind } from "#app/domain/reading.ts";
-import type { RecallDeed } from "#app/domain/recall.ts";
+import { mostRecalled, type RecallDeed } from "#app/domain/recall.ts";
 import type { ReportState } from "#app/domain/report-state.ts";
 import type { ExaminationState } from "#app/domain/stone-state.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
@@ -28,9 +28,6 @@ export type RecalledReading = Readonly<{
   remeasured: readonly number[];
   done: Readonly<{ deed: RecallDeed; reason: string; at: Date; by: string }> | null;
 }>;
-
-/** More are never shown at once: the oldest failures first, so that the list works itself down. */
-export const mostRecalled = 300;
 
 type Row = Omit<RecalledReading, "reports" | "remeasured" | "isStruck" | "observedAt" | "failedAt" | "done"> & {
   id: string; observedAt: string; failedAt: string; isStruck: number; reports: string | null; remeasured: string | null; deed: RecallDeed | null; reason: string | null; doneAt: string | null; doneBy: string | null;

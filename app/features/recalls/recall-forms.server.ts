@@ -1,7 +1,6 @@
 import { z } from "zod";
-import { recallDeeds } from "#app/domain/recall.ts";
+import { mostRecalled, recallDeeds } from "#app/domain/recall.ts";
 import { optionalLines } from "#app/features/form-fields.server.ts";
-import { mostRecalled } from "./list-recall.server.ts";
 
 const oneItem = z.string().transform((text, issues) => {
   const parts = /^([A-Z0-9-]{3,28})\/(\d{1,6})$/.exec(text);

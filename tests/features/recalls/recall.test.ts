@@ -74,7 +74,7 @@ test("the last good check is the last with the same reference; without one, the 
   expect((await listRecall(ctx)).filter(({ stoneCode }) => stoneCode === never.stoneCode).map(({ sequence }) => sequence)).toEqual([1, 2]);
 });
 
-test("a second failure calls back no reading twice, and calls back what was answered for before the first one's deed only if it is newer", async () => {
+test("a second failure calls back no reading twice, and none that was made before the first one and answered for", async () => {
   const ctx = await aLab();
   const bench = await aRecalledReading(ctx);
   await failCheck(later(ctx, 2 * 60 * minuteMs), bench.instruments.refractometer);

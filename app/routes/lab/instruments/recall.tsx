@@ -16,11 +16,11 @@ import { TextAreaField } from "#app/components/ui/text-field.tsx";
 import { formatInstant } from "#app/domain/calendar-date.ts";
 import { isAllowed } from "#app/domain/permissions.ts";
 import { observationKindNames } from "#app/domain/reading.ts";
-import { recallDeedNames, recallDeeds, type RecallDeed } from "#app/domain/recall.ts";
+import { mostRecalled, recallDeedNames, recallDeeds, type RecallDeed } from "#app/domain/recall.ts";
 import { reportStateNames } from "#app/domain/report-state.ts";
 import { examinationStateNames } from "#app/domain/stone-state.ts";
 import { formatStoneCode } from "#app/domain/take-in.ts";
-import { listRecall, mostRecalled } from "#app/features/recalls/list-recall.server.ts";
+import { listRecall } from "#app/features/recalls/list-recall.server.ts";
 import { recallForm } from "#app/features/recalls/recall-forms.server.ts";
 import { workRecall } from "#app/features/recalls/work-recall.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
@@ -123,7 +123,7 @@ function Work({ lab, lastResult, ...loaderData }: LoaderData & { lab: string; la
           />
           <TextAreaField key={fields.reason.key} {...fieldProps(fields.reason)} label="Reason" isRequired={false} rows={3} maxLength={1000} hint="Needed where readings are accepted." />
           <Button>Record it</Button>
-          <p className="text-[12.5px] text-ink-3">Kept with your name and the time. A reading leaves the list in no other way, and comes back when its instrument fails again.</p>
+          <p className="text-[12.5px] text-ink-3">Kept with your name and the time. A reading leaves the list in no other way.</p>
         </CardBody>
       </Card>
     </Form>
