@@ -28,6 +28,7 @@ test.each([
   ["/instruments", 3],
   ["/instruments/recall", 3],
   ["/instruments/references", 3],
+  ["/parcels", 3],
   ["/invoices", 3],
   ["/reports", 3],
   ["/stones/MQ-26-0015-1", 3],

@@ -42,6 +42,11 @@ import { recordDeskPayment } from "#app/features/invoices/record-desk-payment.se
 import { refundInvoice } from "#app/features/invoices/refund-invoice.server.ts";
 import { sendInvoice } from "#app/features/invoices/send-invoice.server.ts";
 import { voidInvoice } from "#app/features/invoices/void-invoice.server.ts";
+import { getParcel } from "#app/features/parcels/get-parcel.server.ts";
+import { listParcels } from "#app/features/parcels/list-parcels.server.ts";
+import { nameParcelItem } from "#app/features/parcels/name-parcel-item.server.ts";
+import { openParcelStone } from "#app/features/parcels/open-parcel-stone.server.ts";
+import { saveParcel } from "#app/features/parcels/save-parcel.server.ts";
 import { addPhoto } from "#app/features/photos/add-photo.server.ts";
 import { findItemForPhoto } from "#app/features/photos/find-item-for-photo.server.ts";
 import { getPhoto } from "#app/features/photos/get-photo.server.ts";
@@ -84,6 +89,7 @@ import { signValuation } from "#app/features/valuations/sign-valuation.server.ts
 import type { ValuationInput } from "#app/features/valuations/valuation-forms.server.ts";
 import { aRequestId } from "../setup/an-app.ts";
 import { aBench, aReading, corundum } from "../setup/bench-factory.ts";
+import { aParcel, aParcelDraft, howRead } from "../setup/parcel-factory.ts";
 import { aConcludedStone, aConclusion } from "../setup/conclusion-factory.ts";
 import { anInvoice } from "../setup/an-invoice.ts";
 import { aCorrectedInstrument, aRecalledReading, aReference, referenceDetails } from "../setup/instrument-factory.ts";
@@ -257,6 +263,13 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
     call: (ctx, stoneCode) => decideSecondCheck(ctx, { stoneCode, outcome: "agreed", reason: "" }),
     mayBeRefused: "absent",
   }),
+
+  // parcels
+  entry({ name: "listParcels", operation: "readings.read", rows: nothing, call: (ctx) => listParcels(ctx), hasNoIds: true }),
+  entry({ name: "saveParcel", operation: "readings.record", rows: nothing, call: (ctx) => saveParcel(ctx, aParcelDraft()), hasNoIds: true }),
+  entry({ name: "getParcel", operation: "readings.read", rows: (lab) => aParcel(lab), call: (ctx, { parcelId }) => getParcel(ctx, parcelId) }),
+  entry({ name: "nameParcelItem", operation: "readings.record", rows: async (lab) => ({ ...(await aParcel(lab, { itemNumber: "" })), ...(await anItem(lab)) }), call: (ctx, { parcelId, itemNumber }) => nameParcelItem(ctx, parcelId, { itemNumber }) }),
+  entry({ name: "openParcelStone", operation: "readings.record", rows: (lab) => aParcel(lab), call: (ctx, { parcelId, instruments }) => openParcelStone(ctx, parcelId, { ...howRead(instruments), position: 1 }) }),
 
   // photographs
   entry({ name: "findItemForPhoto", operation: "photos.add", rows: anItem, call: (ctx, { itemNumber }) => findItemForPhoto(ctx, itemNumber) }),

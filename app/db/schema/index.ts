@@ -12,3 +12,4 @@ export * from "./species.ts";
 export * from "./stone.ts";
 export * from "./take-in.ts";
 export * from "./valuation.ts";
+export * from "./parcel.ts";
