@@ -1,4 +1,4 @@
-import { useDeferredValue, useMemo, useState, type ClipboardEvent, type FormEvent, type KeyboardEvent } from "react";
+import { startTransition, useMemo, useState, type ClipboardEvent, type FormEvent, type KeyboardEvent } from "react";
 import { Form, useNavigation } from "react-router";
 import { Button } from "#app/components/ui/button.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
@@ -8,6 +8,7 @@ import { mostParcelRows, mostParcelText, parcelColumnNames, type ParcelColumn } 
 import { judgeParcel } from "#app/features/parcels/judge-parcel.ts";
 import { readPasted, type ParcelDraft, type ParcelProblems } from "#app/features/parcels/parcel-draft.ts";
 import { readDraft } from "#app/features/parcels/read-draft.ts";
+import { rowEvidence, type ReadRow } from "#app/features/parcels/row-evidence.ts";
 import { ParcelHead, ParcelRow } from "./parcel-rows.tsx";
 import { HowApart, ParcelSummary } from "./parcel-summary.tsx";
 import { useRankedRows } from "./use-ranked-rows.ts";
@@ -23,8 +24,8 @@ export function ParcelEditor({ draft, problems: sent, notes: notesSent, tableVer
   const [table, setTable] = useState({ key: 0, columns: draft.columns, rows: draft.rows, notes: notesSent });
   const [waterTempC, setWaterTempC] = useState(draft.waterTempC);
   const navigation = useNavigation();
-  const shown = useDeferredValue(table);
-  const { rows: read, problems } = useMemo(() => readDraft({ ...draft, name: "named", waterTempC, columns: shown.columns, rows: shown.rows }), [draft, waterTempC, shown]);
+  const readRow = useMemo(() => onceARow([table.columns, waterTempC]), [table.columns, waterTempC]);
+  const { rows: read, problems } = useMemo(() => readDraft({ ...draft, name: "named", waterTempC, columns: table.columns, rows: table.rows }, readRow), [draft, waterTempC, table, readRow]);
   const { ranked, isBusy } = useRankedRows(read, tableVersion);
   const judged = useMemo(() => judgeParcel(read, ranked.map((row) => row ?? null)), [read, ranked]);
   const [widths, setWidths] = useState(() => widthsOf(draft.rows));
@@ -47,7 +48,8 @@ export function ParcelEditor({ draft, problems: sent, notes: notesSent, tableVer
   function onType({ target }: FormEvent<HTMLElement>) {
     if (!(target instanceof HTMLInputElement) || target.dataset.row === undefined) return;
     const [row, column, typed] = [Number(target.dataset.row), Number(target.dataset.column), target.value];
-    setTable((before) => ({ ...before, rows: before.rows.map((cells, at) => (at === row ? cells.map((cell, index) => (index === column ? typed : cell)) : cells)) }));
+    // The input has its text already: what follows from it may come when there is time.
+    startTransition(() => setTable((before) => ({ ...before, rows: before.rows.map((cells, at) => (at === row ? cells.map((cell, index) => (index === column ? typed : cell)) : cells)) })));
   }
 
   function onColumn(at: number, column: ParcelColumn | null) {
@@ -111,7 +113,7 @@ export function ParcelEditor({ draft, problems: sent, notes: notesSent, tableVer
         <Card title="The parcel" note="every cell as it was typed; mend it here">
           <CardBody className="grid gap-3">
             <ParcelSummary main={judged.main} rowCount={table.rows.length} oddRows={judged.rows.flatMap(({ odd }, at) => (odd.length > 0 ? [at + 1] : []))} isBusy={isBusy} />
-            <CellProblems problems={cellProblems} columns={shown.columns} />
+            <CellProblems problems={cellProblems} columns={table.columns} />
           </CardBody>
           <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Table of the parcel" onInput={onType} onKeyDown={moveByKeys}>
             <table key={table.key} className="w-full border-collapse text-left">
@@ -119,7 +121,7 @@ export function ParcelEditor({ draft, problems: sent, notes: notesSent, tableVer
               <ParcelHead columns={table.columns} problems={problems.columns} onColumn={onColumn} />
               <tbody>
                 {table.rows.map((cells, at) => (
-                  <ParcelRow key={at} at={at} columns={shown.columns} cells={cells} widths={widths} problems={cellsOf.get(at) ?? {}} ranking={ranked[at] === undefined ? undefined : judged.rows[at]} />
+                  <ParcelRow key={at} at={at} columns={table.columns} cells={cells} widths={widths} problems={cellsOf.get(at) ?? {}} ranking={ranked[at] === undefined ? undefined : judged.rows[at]} />
                 ))}
               </tbody>
             </table>
@@ -136,6 +138,16 @@ export function ParcelEditor({ draft, problems: sent, notes: notesSent, tableVer
       ) : null}
     </Form>
   );
+}
+
+/** Reads a row once for as long as it is the same one, under the same columns: a key pressed reads one row anew, not all. */
+function onceARow(_under: readonly unknown[]): typeof rowEvidence {
+  const known = new WeakMap<readonly string[], ReadRow>();
+  return (cells, setting) => {
+    const read = known.get(cells) ?? rowEvidence(cells, setting);
+    known.set(cells, read);
+    return read;
+  };
 }
 
 function CellProblems({ problems, columns }: { problems: ReadonlyArray<readonly [string, string]>; columns: ReadonlyArray<ParcelColumn | null> }) {

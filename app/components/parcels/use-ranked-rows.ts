@@ -1,4 +1,4 @@
-import { useEffect, useState } from "react";
+import { startTransition, useEffect, useState } from "react";
 import { rankedRow, saysNothing, type RankedRow } from "#app/features/parcels/judge-parcel.ts";
 import type { ReadRow } from "#app/features/parcels/row-evidence.ts";
 import type { Ranking } from "#app/gemmology/ranking/ranking.ts";
@@ -50,13 +50,13 @@ export function useRankedRows(rows: readonly ReadRow[], tableVersion: string): {
         if (performance.now() < sliceEndsAt) continue;
         if (performance.now() - shownAt > 300) {
           shownAt = performance.now();
-          setFinished((times) => times + 1);
+          startTransition(() => setFinished((times) => times + 1));
           return;
         }
         await new Promise((resolve) => setTimeout(resolve));
         sliceEndsAt = performance.now() + sliceMs;
       }
-      if (isCurrent) setFinished((times) => times + 1);
+      if (isCurrent) startTransition(() => setFinished((times) => times + 1));
     };
     // The server ranks all the same when it saves.
     const timer = setTimeout(() => void work().catch(() => undefined), 60);

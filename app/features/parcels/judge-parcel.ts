@@ -48,7 +48,7 @@ export function judgeParcel(rows: readonly ReadRow[], ranked: ReadonlyArray<Rank
     }
     for (const { column, outliers } of apart) {
       const outlier = outliers[at];
-      if (outlier) odd.push(`${parcelColumnNames[column].split(",")[0]} ${rows[at]!.figures[column]!.value.toFixed(decimalsOf[column])} stands far from the parcel’s median ${outlier.median.toFixed(decimalsOf[column])} (modified z ${outlier.z.toFixed(1)}).`);
+      if (outlier) odd.push(`${parcelColumnNames[column].split(",")[0]} ${rows[at]!.figures[column]!.value.toFixed(decimalsOf[column])} stands far from the parcel’s median ${outlier.median.toFixed(decimalsOf[column])} (modified z ${outlier.z < 0 ? "−" : "+"}${Math.abs(outlier.z).toFixed(1)}).`);
     }
     return { top: (row?.candidates ?? []).slice(0, 3), main, odd };
   });

@@ -3,9 +3,9 @@ import { waterTempOf, type ParcelDraft, type ParcelProblems } from "./parcel-dra
 import { rowEvidence, type ReadRow } from "./row-evidence.ts";
 
 /** The rows of a table as the ranking takes them, and what is wrong, each at its place. The browser runs it as cells are typed, the server before it saves. */
-export function readDraft({ name, waterTempC, columns, rows }: ParcelDraft): { rows: ReadRow[]; problems: ParcelProblems } {
+export function readDraft({ name, waterTempC, columns, rows }: ParcelDraft, readRow: typeof rowEvidence = rowEvidence): { rows: ReadRow[]; problems: ParcelProblems } {
   const temp = waterTempOf(waterTempC);
-  const read = rows.map((row) => rowEvidence(row, { columns, waterTempC: temp }));
+  const read = rows.map((row) => readRow(row, { columns, waterTempC: temp }));
   const twice = columns.flatMap((column, at) => (column !== null && columns.indexOf(column) !== at ? [[at, `${parcelColumnNames[column]} is chosen for another column already.`] as const] : []));
   return {
     rows: read,

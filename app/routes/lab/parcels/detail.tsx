@@ -207,7 +207,7 @@ function Rows({ parcel: { columns, rows }, lab, canOpen }: { parcel: LoaderData[
           <tr key={position} id={`row-${position}`} className={ranking.odd.length > 0 ? "bg-straw-bg/60" : ""}>
             <Cell className="text-right font-mono text-xs text-ink-3">{position}</Cell>
             {columns.map((column, at) => (
-              <Cell key={at} className={`font-mono ${column === null ? "text-ink-3" : ""}`}>
+              <Cell key={at} className={`font-mono ${column === null ? "text-ink-3" : ""} ${(cells[at]?.length ?? 0) <= 24 ? "whitespace-nowrap" : ""}`}>
                 {cells[at]}
               </Cell>
             ))}
