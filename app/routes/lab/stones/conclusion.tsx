@@ -138,6 +138,7 @@ function Propose({ form: { requestId, speciesNames, ranking, nature, readings, s
                     <span className="text-ink-3">no. {reading.sequence} </span>
                     {observationKindNames[reading.detail.kind]}{" "}
                     <span className={reading.quality !== "noResult" && isFigures(readingValueText(reading)) ? "font-mono" : ""}>{reading.quality === "noResult" ? `no reading: ${reading.noResultReason}` : readingValueText(reading)}</span> <span className="text-ink-2">{readingSeenText(reading)}</span>
+                    {reading.doubt ? <span className="block text-xs font-medium text-red">{reading.doubt.text} It cannot carry “identified”.</span> : null}
                   </li>
                 ))}
               </ul>
