@@ -14,6 +14,8 @@ export async function loader({ request }: Route.LoaderArgs) {
   return data({ room: roomOf(request), notice }, header ? { headers: { "Set-Cookie": header } } : {});
 }
 
+export { keepsLayout as shouldRevalidate } from "#app/components/layout/line-state.ts";
+
 export const meta: Route.MetaFunction = () => [{ title: "Isogyre" }];
 
 export const links: Route.LinksFunction = () => [...documentFonts, { rel: "icon", href: "/favicon.ico", sizes: "32x32" }, { rel: "icon", href: "/favicon.svg", type: "image/svg+xml" }];

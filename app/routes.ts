@@ -4,6 +4,7 @@ export default [
   index("routes/home.tsx"),
   route("healthz", "routes/healthz.ts"),
   route("room", "routes/room.ts"),
+  route("spectrum-view", "routes/spectrum-view.ts"),
 
   route("species-table/:fileName", "routes/species-table.ts"),
   route("species-names/:fileName", "routes/species-names.ts"),
@@ -89,7 +90,10 @@ export default [
       // bench
       route("stones/:stoneCode", "routes/lab/stones/bench.tsx"),
       route("stones/:stoneCode/mark.json", "routes/lab/stones/mark.ts"),
+      route("stones/:stoneCode/sent-readings", "routes/lab/stones/sent-readings.ts"),
       route("stones/:stoneCode/sheet", "routes/lab/stones/sheet.tsx"),
+      route("stones/:stoneCode/spectra", "routes/lab/stones/spectra.tsx"),
+      route("stones/:stoneCode/spectra/:sequence/file", "routes/lab/stones/spectrum-file.ts"),
       route("stones/:stoneCode/readings/:sequence/strike", "routes/lab/stones/strike.tsx"),
       route("stones/:stoneCode/conclusion", "routes/lab/stones/conclusion.tsx"),
       route("stones/:stoneCode/second-check", "routes/lab/stones/second-check.tsx"),

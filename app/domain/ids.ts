@@ -15,6 +15,7 @@ export type InstrumentCorrectionId = Id<"instrumentCorrection">;
 export type ReferenceMaterialId = Id<"referenceMaterial">;
 export type ObservationId = Id<"observation">;
 export type AttachmentId = Id<"attachment">;
+export type SpectrumId = Id<"spectrum">;
 export type ConclusionId = Id<"conclusion">;
 export type SecondCheckId = Id<"secondCheck">;
 export type ValuationId = Id<"valuation">;

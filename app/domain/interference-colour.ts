@@ -7,9 +7,9 @@
  */
 const lobe = (x: number, height: number, centre: number, below: number, above: number) =>
   height * Math.exp(-0.5 * ((x - centre) / (x < centre ? below : above)) ** 2);
-const xBar = (nm: number) => lobe(nm, 1.056, 599.8, 37.9, 31.0) + lobe(nm, 0.362, 442.0, 16.0, 26.7) + lobe(nm, -0.065, 501.1, 20.4, 26.2);
-const yBar = (nm: number) => lobe(nm, 0.821, 568.8, 46.9, 40.5) + lobe(nm, 0.286, 530.9, 16.3, 31.1);
-const zBar = (nm: number) => lobe(nm, 1.217, 437.0, 11.8, 36.0) + lobe(nm, 0.681, 459.0, 26.0, 13.8);
+export const xBar = (nm: number) => lobe(nm, 1.056, 599.8, 37.9, 31.0) + lobe(nm, 0.362, 442.0, 16.0, 26.7) + lobe(nm, -0.065, 501.1, 20.4, 26.2);
+export const yBar = (nm: number) => lobe(nm, 0.821, 568.8, 46.9, 40.5) + lobe(nm, 0.286, 530.9, 16.3, 31.1);
+export const zBar = (nm: number) => lobe(nm, 1.217, 437.0, 11.8, 36.0) + lobe(nm, 0.681, 459.0, 26.0, 13.8);
 
 const colourTempK = 6504;
 /** Second radiation constant, nm·K (CODATA). */
@@ -54,7 +54,7 @@ export function interferenceGradient({ stepNm = 50, mostNm = 1800 } = {}): strin
   return `linear-gradient(90deg,${stops.join(",")})`;
 }
 
-function toSrgb(linear: number): number {
+export function toSrgb(linear: number): number {
   const clipped = Math.min(1, Math.max(0, linear));
   return clipped <= 0.0031308 ? 12.92 * clipped : 1.055 * clipped ** (1 / 2.4) - 0.055;
 }

@@ -1,69 +1,55 @@
 import type { ConsentCode } from "./consent-code.ts";
+import { describedKinds, isDescribed, testForms, type DescribedDetail, type DescribedKind, type DescribedNumber } from "./bench-tests/test-forms.ts";
+import type { TestForm } from "./bench-tests/test-form.ts";
+import type { RotationCrystal } from "#app/gemmology/ranking/evidence.ts";
+import type { InstrumentKind } from "./instrument-kind.ts";
 
+/** Tests whose forms are written out; the others are described in bench-tests/. */
+export type WrittenKind = "refractometer" | "spot" | "overLimit" | "criticalAngle" | "rotation" | "polariscope" | "density" | "weight" | "dimensions" | "free";
 /** The tests whose readings can be recorded, by what the instrument shows. */
-export const observationKinds = [
-  "refractometer",
-  "spot",
-  "overLimit",
-  "criticalAngle",
-  "polariscope",
-  "density",
-  "weight",
-  "dimensions",
-  "free",
-] as const;
-export type ObservationKind = (typeof observationKinds)[number];
+export type ObservationKind = WrittenKind | DescribedKind;
 
-export const observationKindNames: Readonly<Record<ObservationKind, string>> = {
-  refractometer: "Refractometer",
-  spot: "Spot reading",
-  overLimit: "Over the limit",
-  criticalAngle: "Critical angle",
-  polariscope: "Polariscope",
-  density: "Density",
-  weight: "Weight",
-  dimensions: "Dimensions",
-  free: "Observation",
+type AboutTest = Pick<TestForm, "name" | "hotkey" | "instrumentKind" | "needsInstrument" | "evidenceClass" | "consent" | "caution">;
+const contactLiquid = "The contact liquid is toxic and stains: a drop the size of a pinhead, gloves, air, and wash stone and hands after. Never on porous, organic, glued, foiled or lead-glass-filled stones.";
+const onRefractometer = { instrumentKind: "refractometer", needsInstrument: true, evidenceClass: "index", consent: "contactLiquid", caution: contactLiquid } as const;
+
+const writtenTests: Readonly<Record<WrittenKind, AboutTest>> = {
+  refractometer: { name: "Refractometer", hotkey: "1", ...onRefractometer },
+  spot: { name: "Spot reading", hotkey: "2", ...onRefractometer },
+  overLimit: { name: "Over the limit", hotkey: "3", ...onRefractometer },
+  criticalAngle: { name: "Critical angle", hotkey: "4", ...onRefractometer, instrumentKind: "angleRefractometer" },
+  rotation: { name: "Rotation run", hotkey: "0", ...onRefractometer },
+  polariscope: { name: "Polariscope", hotkey: "5", instrumentKind: "polariscope", needsInstrument: true, evidenceClass: "character", consent: null, caution: null },
+  density: { name: "Density", hotkey: "6", instrumentKind: "balance", needsInstrument: true, evidenceClass: "density", consent: "hydrostatic", caution: "Not porous, strung, foil-backed or water-soluble stones." },
+  weight: { name: "Weight", hotkey: "7", instrumentKind: "balance", needsInstrument: true, evidenceClass: null, consent: null, caution: null },
+  dimensions: { name: "Dimensions", hotkey: "8", instrumentKind: "gauge", needsInstrument: true, evidenceClass: null, consent: null, caution: "Jaws chip girdles and opals: close them slowly." },
+  free: { name: "Observation", hotkey: "9", instrumentKind: null, needsInstrument: false, evidenceClass: "seen", consent: null, caution: null },
 };
 
+/** Name, key, instrument, consent and caution of each test. */
+export const aboutTest = (kind: ObservationKind): AboutTest => (isDescribed(kind) ? testForms[kind] : writtenTests[kind]);
+const everyKind = [...(Object.keys(writtenTests) as WrittenKind[]), ...describedKinds];
+
+/** The tests in the order of an examination: what harms least comes first (common practice). */
+export const testGroups: ReadonlyArray<Readonly<{ name: string; kinds: readonly ObservationKind[]; /** For few stones only. */ isSeldom?: true }>> = [
+  { name: "Look", kinds: ["appearance", "magnification", "free"] },
+  { name: "Measure", kinds: ["weight", "dimensions", "density"] },
+  { name: "Polars", kinds: ["polariscope", "dichroscope"] },
+  { name: "Index", kinds: ["refractometer", "rotation", "spot", "overLimit", "criticalAngle"] },
+  { name: "Light", kinds: ["spectroscope", "ultraviolet", "colourFilter"] },
+  { name: "Over the limit", kinds: ["reflectivity", "brewster", "realDepth", "thermalProbe", "conductivity"], isSeldom: true },
+  { name: "Last", kinds: ["magnet", "immersion", "heavyLiquid"], isSeldom: true },
+];
+export const observationKinds: readonly ObservationKind[] = testGroups.flatMap(({ kinds }) => kinds);
+
+const byKind = <Value>(of: (about: AboutTest) => Value) => Object.fromEntries(everyKind.map((kind) => [kind, of(aboutTest(kind))])) as Readonly<Record<ObservationKind, Value>>;
+export const observationKindNames = byKind(({ name }) => name);
 /** Kinds whose evidence is independent of each other: a conclusion needs two of these classes (workflow 1.6). */
-export const evidenceClassOf: Readonly<Record<ObservationKind, "index" | "character" | "density" | "seen" | null>> = {
-  refractometer: "index",
-  spot: "index",
-  overLimit: "index",
-  criticalAngle: "index",
-  polariscope: "character",
-  density: "density",
-  weight: null,
-  dimensions: null,
-  free: "seen",
-};
-
+export const evidenceClassOf = byKind(({ evidenceClass }) => evidenceClass);
 /** The kind of instrument that a test is read on; null where the eye is enough. */
-export const instrumentKindFor = {
-  refractometer: "refractometer",
-  spot: "refractometer",
-  overLimit: "refractometer",
-  criticalAngle: "angleRefractometer",
-  polariscope: "polariscope",
-  density: "balance",
-  weight: "balance",
-  dimensions: "gauge",
-  free: null,
-} as const satisfies Record<ObservationKind, string | null>;
-
+export const instrumentKindFor: Readonly<Record<ObservationKind, InstrumentKind | null>> = byKind(({ instrumentKind }) => instrumentKind);
 /** What the client must have agreed to before a test touches the stone (workflow 1.2, 1.4). */
-export const consentNeededFor: Readonly<Record<ObservationKind, ConsentCode | null>> = {
-  refractometer: "contactLiquid",
-  spot: "contactLiquid",
-  overLimit: "contactLiquid",
-  criticalAngle: "contactLiquid",
-  polariscope: null,
-  density: "hydrostatic",
-  weight: null,
-  dimensions: null,
-  free: null,
-};
+export const consentNeededFor: Readonly<Record<ObservationKind, ConsentCode | null>> = byKind(({ consent }) => consent);
 
 export const readingQualities = ["good", "fair", "poor", "noResult"] as const;
 export type ReadingQuality = (typeof readingQualities)[number];
@@ -146,11 +132,17 @@ export type ReadingDetail =
   | { kind: "spot"; method: SpotMethod; facet: Facet; light: Light }
   | { kind: "overLimit"; facet: Facet; light: Light }
   | { kind: "criticalAngle"; facet: Facet; light: Light }
+  | { kind: "rotation"; light: Light; /** As it was typed, a position a line. */ rows: string; character: RotationCharacter; sign: "+" | "-" | null; /** Every crystal that the run allows, with its weight. */ solutions: readonly RotationCrystal[] }
   | { kind: "polariscope"; behaviour: PolariscopeBehaviour; directionsTried: number; figure: InterferenceFigure; sign: "+" | "-" | null }
   | { kind: "density"; method: WeighingMethod }
   | { kind: "weight" }
   | { kind: "dimensions"; shape: "round" | "other" }
-  | { kind: "free"; text: string };
+  | { kind: "free"; text: string }
+  | DescribedDetail;
+
+/** What a run of edges decides of the crystal; undetermined where one facet leaves several. */
+export const rotationCharacters = ["isotropic", "uniaxial", "biaxial", "undetermined"] as const;
+export type RotationCharacter = (typeof rotationCharacters)[number];
 
 /**
  * One number of a reading. `value` is what was typed, read as a decimal, with the instrument's correction where one was
@@ -161,7 +153,7 @@ export type ReadingValue = Readonly<{
   value: number;
   rawValue?: number | null;
   typedText: string;
-  unit: "n" | "deg" | "ct" | "g" | "mm" | "degC" | "kg/m3" | "1";
+  unit: "n" | "deg" | "ct" | "g" | "mm" | "degC" | "kg/m3" | "cm" | "s" | "x" | "%" | "1";
   standardUncertainty: number | null;
   formula: string | null;
 }>;
@@ -176,9 +168,19 @@ export type ReadingValueName =
   | "birefringence"
   | "massAirCt"
   | "massLiquidCt"
+  | "massAirCt2"
+  | "massAirCt3"
+  | "massLiquidCt2"
+  | "massLiquidCt3"
   | "tempC"
   | "sg"
   | "weightCt"
   | "lengthMm"
   | "widthMm"
-  | "depthMm";
+  | "depthMm"
+  | "omega"
+  | "epsilon"
+  | "alpha"
+  | "beta"
+  | "gamma"
+  | DescribedNumber;

@@ -46,3 +46,8 @@ export const size = (lengthMm: string, widthMm: string, depthMm: string, shape: 
 });
 export const seen = (text: string, instrument: string | null = "M1"): Reading => ({ draft: { kind: "free", text, quality: "good" }, instrument });
 export const struck = (reading: Reading, struckBecause: string): Reading => ({ ...reading, struckBecause });
+type Typed = Extract<Reading["draft"], { typed: unknown }>;
+/** A reading of a described test; what is left out of its form is left empty. */
+export const told = (kind: Typed["kind"], typed: Typed["typed"], instrument: string | null = null, note?: string): Reading => ({ draft: { kind, typed, quality: "good" }, instrument, note });
+/** Over a half turn on the table, in steps of 15°. */
+export const rotation = (rows: readonly string[], instrument = "R2"): Reading => ({ draft: { kind: "rotation", light: "sodium", rows: rows.join("\n"), quality: "good" }, instrument });

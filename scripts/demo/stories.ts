@@ -1,10 +1,13 @@
 import type { LimitCode, TreatmentCode, TreatmentFinding, TreatmentStatus } from "#app/domain/conclusion.ts";
-import { criticalAngle, density, edge, edges, overLimit, polars, seen, size, spot, struck, weight } from "./readings.ts";
+import { criticalAngle, density, edge, edges, overLimit, polars, rotation, seen, size, spot, struck, told, weight } from "./readings.ts";
 import type { Story } from "./story.ts";
 
 const finding = (code: TreatmentCode, status: TreatmentStatus, evidence = ""): TreatmentFinding => ({ code, status, extent: null, evidence });
 const heatingOpen = [finding("heating", "notDeterminable"), finding("glassFilling", "notDetected", "no flash, no bubbles in fissures")];
 const bench: LimitCode[] = ["benchOnly", "treatmentNotDeterminable", "originNotExamined"];
+
+/** Two edges of a zoisite, a hair apart, over a half turn. */
+const tanzaniteRun = ["0 1.694 1.698", "15 1.693 1.698", "30 1.693 1.698", "45 1.693 1.699", "60 1.693 1.700", "75 1.693 1.700", "90 1.692 1.700", "105 1.692 1.700", "120 1.692 1.699", "135 1.692 1.699", "150 1.692 1.698", "165 1.692 1.698", "180 1.693 1.697"];
 
 /**
  * Two dozen invented stones at every stage. The readings are those of real materials (fixtures/species), with the scatter of
@@ -84,7 +87,7 @@ export const marramStories: readonly Story[] = [
   },
   {
     description: "Transparent purplish red oval", photo: { outline: "oval", hue: "purplish red", lengthMm: 8 }, client: "ardenne", daysAgo: 3, mass: "2.14", declared: 6500, statements: "Bought abroad in the 1960s.",
-    readings: [weight("2.143"), size("8.41", "6.90", "4.52"), seen("Short needles in three directions, partly dissolved; healed fissures"), density("2.143", "1.608"), polars("blinks", { figure: "uniaxial", sign: "-", note: "figure through the pavilion, clear cross" }), struck(edge("1.790", { light: "white", quality: "fair" }), "contact liquid edge, stone not seated"), edges("1.762", "1.770", { note: "two sharp edges, high edge fixed" })],
+    readings: [weight("2.143"), size("8.41", "6.90", "4.52"), seen("Short needles in three directions, partly dissolved; healed fissures"), density("2.143", "1.608"), polars("blinks", { figure: "uniaxial", sign: "-", note: "figure through the pavilion, clear cross" }), struck(edge("1.790", { light: "white", quality: "fair" }), "contact liquid edge, stone not seated"), edges("1.762", "1.770", { note: "two sharp edges, high edge fixed" }), told("dichroscope", { strength: "strong", colours: "purplish red, orangish red", directionsTried: "3", polarisers: "calcite" }, "D1"), told("spectroscope", { lines: "694 e, 668 weak, 540-580 band, 476, 468", scale: "grating", path: "transmitted", direction: "through table and pavilion" }, "S1"), told("ultraviolet", { wave: "longWave", strength: "strong", colour: "red", evenness: "even", distanceCm: "5", exposureS: "30" }, "L1")],
   },
   {
     description: "Blue cushion", photo: { outline: "cushion", hue: "blue", lengthMm: 9 }, client: "ardenne", daysAgo: 3, mass: "3.02",
@@ -97,7 +100,7 @@ export const marramStories: readonly Story[] = [
   },
   {
     description: "Colourless round", photo: { outline: "round", hue: "colourless", lengthMm: 5 }, client: "castellan", daysAgo: 6, mass: "0.512",
-    readings: [weight("0.512"), size("5.17", "5.14", "3.16", "round"), overLimit({ note: "only the liquid’s edge on two facets" }), polars("anomalous", { note: "faint strain at the girdle" })],
+    readings: [weight("0.512"), size("5.17", "5.14", "3.16", "round"), overLimit({ note: "only the liquid’s edge on two facets" }), polars("anomalous", { note: "faint strain at the girdle" }), told("magnification", { features: ["crystal", "fissureInternal"], doubling: "none", magnificationX: "40", illumination: "darkField" }, "M1")],
   },
   {
     description: "Brownish red round", photo: { outline: "round", hue: "red", lengthMm: 7 }, client: "holm", daysAgo: 5, mass: "1.88",
@@ -105,7 +108,8 @@ export const marramStories: readonly Story[] = [
   },
   {
     description: "Dull green oval", photo: { outline: "oval", hue: "green", lengthMm: 9 }, client: "museum", daysAgo: 5, mass: "3.66", statements: "From an old collection, labelled only with a number.",
-    readings: [weight("3.662"), edge("1.792", { quality: "fair", note: "soft edge just below the liquid’s" }), polars("anomalous", { note: "patchy, almost dark" }), density("3.662", "2.750"), seen("Cloudy zones, angular growth bands")],
+    readings: [weight("3.662"), edge("1.792", { quality: "fair", note: "soft edge just below the liquid’s" }), polars("anomalous", { note: "patchy, almost dark" }), density("3.662", "2.750"), seen("Cloudy zones, angular growth bands"), told("spectroscope", { lines: "653 weak, 691 faint", scale: "grating", path: "transmitted" }, "S1", "blurred lines")],
+    spectrum: { title: "Dull green oval, transmitted", note: "Through the table, 1 s, mean of 20", bands: [[653, 9, 0.16], [691, 11, 0.07], [589, 14, 0.05], [537, 16, 0.03], [660, 120, 0.06]] },
   },
   {
     description: "Red round, old cut", photo: { outline: "round", hue: "red", lengthMm: 6 }, client: "ferro", daysAgo: 4, mass: "1.12",
@@ -144,7 +148,10 @@ export const marramStories: readonly Story[] = [
     valuation: "draft",
   },
   { description: "Light blue round", photo: { outline: "round", hue: "greenish blue", lengthMm: 9 }, client: "castellan", daysAgo: 1, mass: "3.90" },
-  { description: "Bluish violet oval", photo: { outline: "oval", hue: "violet", lengthMm: 10 }, client: "holm", daysAgo: 1, mass: "3.24" },
+  {
+    description: "Bluish violet oval", photo: { outline: "oval", hue: "violet", lengthMm: 10 }, client: "holm", daysAgo: 1, mass: "3.24",
+    readings: [told("appearance", { colour: "bluish violet, medium", transparency: "transparent", lustre: "vitreous", light: "daylight 5500 K" }), weight("3.241"), rotation(tanzaniteRun)],
+  },
   { description: "Yellow-green cabochon with a moving band of light", photo: { outline: "cabochon", hue: "yellow-green", lengthMm: 9 }, client: "museum", daysAgo: 1, mass: "4.02" },
   { description: "Pink cushion", photo: { outline: "cushion", hue: "pink", lengthMm: 8 }, client: "ferro", daysAgo: 0, mass: "2.71" },
   { description: "White translucent bangle", photo: null, client: "museum", daysAgo: 0, mass: "52.40", massUnit: "g", mount: "loose" },

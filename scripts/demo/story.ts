@@ -2,6 +2,7 @@ import type { Confidence, ConclusionDescription, LimitCode, Nature, RejectedAlte
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import type { ReadingDraft } from "#app/features/readings/reading-draft.ts";
 import type { GemOutline } from "../draw-gem-photo.ts";
+import type { InventedBand } from "./invented-spectrum.ts";
 
 export type ClientKey = "ardenne" | "ferro" | "castellan" | "holm" | "museum";
 export type Reading = { draft: ReadingDraft; instrument: string | null; note?: string; struckBecause?: string };
@@ -37,6 +38,8 @@ export type Story = {
   statements?: string;
   consents?: ConsentCode[];
   readings?: Reading[];
+  /** A measured spectrum, invented from its bands. */
+  spectrum?: { title: string; note: string; bands: readonly InventedBand[] };
   conclusion?: Conclusion;
   check?: { readings: Reading[]; outcome?: "agreed" | "returned"; reason?: string };
   valuation?: "draft" | "signed";

@@ -20,10 +20,12 @@ import { withdrawReport } from "#app/features/reports/withdraw-report.server.ts"
 import { compareSecondCheck } from "#app/features/second-checks/compare-second-check.server.ts";
 import { decideSecondCheck } from "#app/features/second-checks/decide-second-check.server.ts";
 import { startSecondCheck } from "#app/features/second-checks/start-second-check.server.ts";
+import { addSpectrum } from "#app/features/spectra/add-spectrum.server.ts";
 import { takeInItems } from "#app/features/take-ins/take-in-items.server.ts";
 import { saveAndSignValuation } from "#app/features/valuations/save-and-sign-valuation.server.ts";
 import { saveValuation } from "#app/features/valuations/save-valuation.server.ts";
 import type { ValuationInput } from "#app/features/valuations/valuation-forms.server.ts";
+import { inventedSpectrum } from "./invented-spectrum.ts";
 import type { Laboratory } from "./open-laboratories.ts";
 import { photoFile } from "./photo-file.ts";
 import type { Conclusion, Reading, Story } from "./story.ts";
@@ -68,6 +70,11 @@ export async function tellStory(lab: Laboratory, story: Story, { now, cast }: { 
   later();
   await recordHandOver(lab.as(cast.examiner, clock), { requestId: newId<"custodyEvent">(), itemNumber: item!.number, purpose: "toBench", toPlace: "Bench 2", holder: undefined, massText: story.mass, massUnit: story.massUnit ?? "ct", seal: "", remark: "" });
   await readAll(cast.examiner, story.readings);
+  if (story.spectrum) {
+    later();
+    const { title, note, bands } = story.spectrum;
+    await addSpectrum(lab.as(cast.examiner, clock), { requestId: newId<"spectrum">(), stoneCode, bytes: inventedSpectrum({ title, bands }), fileName: "table.jdx", note, assumed: { xUnit: "nm", yUnit: "absorbance" } });
+  }
   if (!story.conclusion) return;
   await conclude(story.conclusion);
   if (!story.check) return;

@@ -32,6 +32,7 @@ export async function routeLines(): Promise<RouteLine[]> {
   const asRef = async (table: string, where?: string) => shortRef((await ref(table, where)).replace(/^(.{8})(.{4})(.{4})(.{4})(.{12})$/, "$1-$2-$3-$4-$5") as never);
   const photo = { photoRef: await asRef("attachments") };
   const examined = { stoneCode: "MQ-26-0015-1" };
+  const measured = { stoneCode: "MQ-26-0013-1" };
   const issued = { number: "MQ-R-26-00005" };
   const code = { code: await one(`select code value from reports where number = '${issued.number}'`) };
   const invoice = { number: "MQ-I-26-00008" };
@@ -40,6 +41,7 @@ export async function routeLines(): Promise<RouteLine[]> {
     { path: "", get: "anyone" },
     { path: "healthz", get: "anyone" },
     { path: "room", post: "anyone" },
+    { path: "spectrum-view", post: "anyone" },
     { path: "species-table/:fileName", params: { fileName: "none.json" }, get: "anyone", getStatus: 404 },
     { path: "species-names/:fileName", params: { fileName: "none.json" }, get: "anyone", getStatus: 404 },
     { path: "sign-in", get: "anyone", post: "anyone" },
@@ -99,7 +101,10 @@ export async function routeLines(): Promise<RouteLine[]> {
     lab("species/:speciesId", { params: { speciesId: "corundum" }, get: all, isShared: true }),
     lab("stones/:stoneCode", { params: examined, get: all, post: ["gemmologist"] }),
     lab("stones/:stoneCode/mark.json", { params: examined, get: all }),
+    lab("stones/:stoneCode/sent-readings", { params: examined, post: ["gemmologist"] }),
     lab("stones/:stoneCode/sheet", { params: examined, get: all }),
+    lab("stones/:stoneCode/spectra", { params: measured, get: examine, post: ["gemmologist"] }),
+    lab("stones/:stoneCode/spectra/:sequence/file", { params: { ...measured, sequence: "1" }, get: examine }),
     lab("stones/:stoneCode/readings/:sequence/strike", { params: { ...examined, sequence: "1" }, get: examine, post: ["gemmologist"] }),
     lab("stones/:stoneCode/conclusion", { params: examined, get: examine, post: ["gemmologist"] }),
     lab("stones/:stoneCode/second-check", { params: { stoneCode: "MQ-26-0016-1" }, get: examine, post: ["gemmologist"] }),

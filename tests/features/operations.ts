@@ -79,6 +79,10 @@ import { startSecondCheck } from "#app/features/second-checks/start-second-check
 import { getBench } from "#app/features/stones/get-bench.server.ts";
 import { getStoneMark } from "#app/features/stones/get-stone-mark.server.ts";
 import { listOfferedServices } from "#app/features/take-ins/list-offered-services.server.ts";
+import { addSpectrum } from "#app/features/spectra/add-spectrum.server.ts";
+import { listSpectra } from "#app/features/spectra/list-spectra.server.ts";
+import { readSpectrumSource } from "#app/features/spectra/read-spectrum-source.server.ts";
+import { withdrawSpectrum } from "#app/features/spectra/withdraw-spectrum.server.ts";
 import { listStones } from "#app/features/stones/list-stones.server.ts";
 import { getLetterhead } from "#app/features/take-ins/get-letterhead.server.ts";
 import { getTakeIn } from "#app/features/take-ins/get-take-in.server.ts";
@@ -134,6 +138,14 @@ const valuation: ValuationInput = {
 
 async function aPicture(): Promise<Buffer> {
   return sharp({ create: { width: 32, height: 32, channels: 3, background: "#b3154a" } }).jpeg().toBuffer();
+}
+
+const aSpectrum = (stoneCode: string) => ({ requestId: newId<"spectrum">(), stoneCode, bytes: Buffer.from("400;1\n401;2\n402;4\n403;2\n404;1"), fileName: "a.csv", note: "", assumed: { xUnit: "nm", yUnit: "absorbance" } }) as const;
+
+async function aMeasuredStone(lab: LabContext): Promise<string> {
+  const stoneCode = await aStoneCode(lab);
+  await addSpectrum(lab, aSpectrum(stoneCode));
+  return stoneCode;
 }
 
 async function aPhoto(lab: LabContext) {
@@ -270,6 +282,12 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
   entry({ name: "getParcel", operation: "readings.read", rows: (lab) => aParcel(lab), call: (ctx, { parcelId }) => getParcel(ctx, parcelId) }),
   entry({ name: "nameParcelItem", operation: "readings.record", rows: async (lab) => ({ ...(await aParcel(lab, { itemNumber: "" })), ...(await anItem(lab)) }), call: (ctx, { parcelId, itemNumber }) => nameParcelItem(ctx, parcelId, { itemNumber }) }),
   entry({ name: "openParcelStone", operation: "readings.record", rows: (lab) => aParcel(lab), call: (ctx, { parcelId, instruments }) => openParcelStone(ctx, parcelId, { ...howRead(instruments), position: 1 }) }),
+
+  // measured spectra
+  entry({ name: "addSpectrum", operation: "readings.record", rows: aStoneCode, call: (ctx, stoneCode) => addSpectrum(ctx, aSpectrum(stoneCode)) }),
+  entry({ name: "listSpectra", operation: "readings.read", rows: aMeasuredStone, call: (ctx, stoneCode) => listSpectra(ctx, { stoneCode }), isEmptyElsewhere: "list" }),
+  entry({ name: "readSpectrumSource", operation: "readings.read", rows: aMeasuredStone, call: (ctx, stoneCode) => readSpectrumSource(ctx, { stoneCode, sequence: 1 }) }),
+  entry({ name: "withdrawSpectrum", operation: "readings.record", rows: aMeasuredStone, call: (ctx, stoneCode) => withdrawSpectrum(ctx, { stoneCode, sequence: 1, reason: "of another stone" }) }),
 
   // photographs
   entry({ name: "findItemForPhoto", operation: "photos.add", rows: anItem, call: (ctx, { itemNumber }) => findItemForPhoto(ctx, itemNumber) }),

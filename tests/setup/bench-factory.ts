@@ -3,6 +3,7 @@ import { newId } from "#app/db/new-id.server.ts";
 import { instrumentChecks, stones } from "#app/db/schema/index.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import type { InstrumentId, StoneId } from "#app/domain/ids.ts";
+import { instrumentKindFor } from "#app/domain/reading.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import type { ReadingDraft } from "#app/features/readings/reading-draft.ts";
 import type { RecordReading } from "#app/features/readings/record-reading.server.ts";
@@ -39,11 +40,23 @@ export async function aBench(ctx: LabContext, fields: Partial<TakeInItem> = {}):
   };
 }
 
-const onInstrument = { refractometer: "refractometer", spot: "refractometer", overLimit: "refractometer", criticalAngle: "angleRefractometer", polariscope: "polariscope", density: "balance", weight: "balance", dimensions: "gauge" } as const;
+/** Those that the bench has one of; for other tests an instrument is added by the test itself. */
+function instrumentOf({ instruments }: TestBench, { kind, quality }: ReadingDraft): InstrumentId | null {
+  const needed = instrumentKindFor[kind];
+  if (needed === null || (quality === "noResult" && !(needed in instruments))) return null;
+  return instruments[needed as keyof TestBench["instruments"]] ?? null;
+}
+
+/** What a form sends, a text a name; a list for boxes that share one. */
+export function aForm(fields: Readonly<Record<string, string | readonly string[]>>): FormData {
+  const form = new FormData();
+  for (const [name, value] of Object.entries(fields)) for (const one of typeof value === "string" ? [value] : value) form.append(name, one);
+  return form;
+}
 
 /** One reading as the form would send it. */
-export function aReading({ stoneCode, instruments }: TestBench, draft: ReadingDraft, fields: Partial<RecordReading> = {}): RecordReading {
-  return { requestId: newId<"observation">(), stoneCode, instrumentId: draft.kind === "free" ? null : instruments[onInstrument[draft.kind]], noResultReason: "", note: "", areCandidatesHidden: false, draft, ...fields };
+export function aReading(bench: TestBench, draft: ReadingDraft, fields: Partial<RecordReading> = {}): RecordReading {
+  return { requestId: newId<"observation">(), stoneCode: bench.stoneCode, instrumentId: instrumentOf(bench, draft), noResultReason: "", note: "", areCandidatesHidden: false, draft, ...fields };
 }
 
 /** What a corundum shows. */

@@ -1,7 +1,7 @@
 import { useState } from "react";
 import { CheckboxField } from "#app/components/ui/choice-field.tsx";
 import { TextField } from "#app/components/ui/text-field.tsx";
-import { useIsHydrated } from "./use-is-hydrated.ts";
+import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 
 type PasswordFieldProps = { id: string; name: string; label: string; errors?: string[]; autoComplete: "current-password" | "new-password"; hint?: React.ReactNode };
 

@@ -5,10 +5,10 @@ import type { BenchCandidate, BenchRanking } from "#app/features/identification/
 import { EvidenceLanes } from "./evidence-lanes.tsx";
 
 /** What the readings leave possible, best first. It proposes; it never concludes. */
-export function CandidatesCard({ ranking, isWithTyped = false }: { ranking: BenchRanking; /** The reading that is being typed is counted in. */ isWithTyped?: boolean }) {
+export function CandidatesCard({ ranking, prior = "prevalence", isWithTyped = false }: { ranking: BenchRanking; prior?: "prevalence" | "even"; /** The reading that is being typed is counted in. */ isWithTyped?: boolean }) {
   const { candidates, hasEvidence, speciesCount } = ranking;
   return (
-    <Card title="Candidates" note={`of ${speciesCount}, by prevalence`} aside={<>{isWithTyped ? <Chip tone="blue">with what you type</Chip> : null}<Chip tone="tint">Table {ranking.tableVersion.slice(0, 8)}</Chip></>}>
+    <Card title="Candidates" note={`of ${speciesCount}, ${prior === "even" ? "all weighing alike" : "by prevalence"}`} aside={<>{isWithTyped ? <Chip tone="blue">with what you type</Chip> : null}<Chip tone="tint">Table {ranking.tableVersion.slice(0, 8)}</Chip></>}>
       {hasEvidence ? (
         <div aria-live="polite" aria-atomic="false">
           <ol>

@@ -1,20 +1,11 @@
-import { QueryClient, QueryClientProvider, useQuery } from "@tanstack/react-query";
-import { useEffect, useState } from "react";
+import { useQuery } from "@tanstack/react-query";
+import { useEffect } from "react";
 import { useRevalidator } from "react-router";
 
 const everyMs = 3_000;
 
 /** Brings in what a colleague records on the same stone within seconds, without touching what is being typed. */
-export function FollowStone(props: { base: string; mark: number }) {
-  const [queries] = useState(() => new QueryClient());
-  return (
-    <QueryClientProvider client={queries}>
-      <Follow {...props} />
-    </QueryClientProvider>
-  );
-}
-
-function Follow({ base, mark }: { base: string; mark: number }) {
+export function FollowStone({ base, mark }: { base: string; mark: number }) {
   const { revalidate, state } = useRevalidator();
   const { data: latest } = useQuery({
     queryKey: ["stone-mark", base],

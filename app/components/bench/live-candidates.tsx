@@ -1,5 +1,5 @@
-import { QueryClient, QueryClientProvider, useQuery } from "@tanstack/react-query";
-import { lazy, Suspense, useDeferredValue, useMemo, useState } from "react";
+import { useQuery } from "@tanstack/react-query";
+import { lazy, Suspense, useDeferredValue, useMemo } from "react";
 import type { MapSpecies } from "#app/components/charts/index-density-map.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import type { BenchRanking } from "#app/features/identification/bench-ranking.ts";
@@ -7,6 +7,7 @@ import type { NumberedReading } from "#app/features/identification/rank-readings
 import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { speciesBoxes } from "#app/features/species/species-boxes.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
+import { CompareCandidatesCard } from "./compare-candidates-card.tsx";
 import { CandidatesCard } from "./candidates-card.tsx";
 
 /** Charts come after the page works, as the species table does. */
@@ -18,26 +19,24 @@ type LiveCandidatesProps = {
   readings: readonly NumberedReading[];
   /** The reading that is being typed; null while it is none. */
   typed: ComposedReading | null;
+  /** Ids of two candidates that are set side by side. */
+  compare: readonly string[];
+  prior: "prevalence" | "even";
 };
 
 /** The candidates as digits are typed, before anything is saved: the server's own code, run here. */
-export function LiveCandidates(props: LiveCandidatesProps) {
-  const [queries] = useState(() => new QueryClient());
-  return (
-    <QueryClientProvider client={queries}>
-      <Live {...props} />
-    </QueryClientProvider>
-  );
-}
-
-function Live({ saved, readings, typed }: LiveCandidatesProps) {
+export function LiveCandidates({ saved, readings, typed, compare, prior }: LiveCandidatesProps) {
   const { data: live } = useQuery({
     queryKey: ["species-table", saved.tableVersion],
     // The matcher comes with the table: without it there is nothing to match, and the page works before either is here.
     queryFn: async ({ signal }) => {
-      const [response, { rankReadings }] = await Promise.all([fetch(`/species-table/${saved.tableVersion}.json`, { signal }), import("#app/features/identification/rank-readings.ts")]);
+      const [response, { rankReadings }, { evidenceFromReadings }] = await Promise.all([
+        fetch(`/species-table/${saved.tableVersion}.json`, { signal }),
+        import("#app/features/identification/rank-readings.ts"),
+        import("#app/features/readings/evidence-from-readings.ts"),
+      ]);
       if (!response.ok) throw new Error(`species table: ${response.status}`);
-      return { table: (await response.json()) as SpeciesTable, rankReadings };
+      return { table: (await response.json()) as SpeciesTable, rankReadings, saysAnything: (reading: ComposedReading) => Object.keys(evidenceFromReadings([reading])).length > 0 };
     },
     staleTime: Infinity,
     gcTime: Infinity,
@@ -45,11 +44,12 @@ function Live({ saved, readings, typed }: LiveCandidatesProps) {
   const latest = useDeferredValue(typed);
   const ranking = useMemo(() => {
     if (!live) return saved;
-    return live.rankReadings(latest ? [...readings, { ...latest, sequence: null }] : readings, live.table);
-  }, [live, saved, readings, latest]);
+    return live.rankReadings(latest ? [...readings, { ...latest, sequence: null }] : readings, live.table, { compare, prior });
+  }, [live, saved, readings, latest, compare, prior]);
   return (
     <>
-      <CandidatesCard ranking={ranking} isWithTyped={Boolean(live && latest && latest.values.length + (latest.detail.kind === "polariscope" ? 1 : 0) > 0)} />
+      <CandidatesCard ranking={ranking} prior={prior} isWithTyped={Boolean(live && latest && live.saysAnything(latest))} />
+      <CompareCandidatesCard compared={ranking.compared} />
       {live && (ranking.index || ranking.density) ? <StandingMap table={live.table} ranking={ranking} /> : null}
     </>
   );

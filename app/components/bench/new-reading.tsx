@@ -1,20 +1,30 @@
 import { getFormProps, useForm, type SubmissionResult } from "@conform-to/react";
-import { useState, type FormEvent } from "react";
+import { useCallback, useRef, useState, type FormEvent } from "react";
 import { Form, useNavigation } from "react-router";
 import { formatCalendarDate } from "#app/domain/calendar-date.ts";
+import { uuidv7 } from "uuidv7";
+import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 import { Button } from "#app/components/ui/button.tsx";
 import { fieldProps } from "#app/components/ui/field-props.ts";
 import { FormAlert } from "#app/components/ui/form-alert.tsx";
 import { RadioGroupField } from "#app/components/ui/choice-field.tsx";
 import { SelectField } from "#app/components/ui/select-field.tsx";
 import { TextAreaField } from "#app/components/ui/text-field.tsx";
-import { instrumentKindFor, noResultReasons, readingQualities, readingQualityNames, type ObservationKind } from "#app/domain/reading.ts";
+import { Caution } from "#app/components/ui/caution.tsx";
+import { isDescribed } from "#app/domain/bench-tests/test-forms.ts";
+import { aboutTest, noResultReasons, readingQualities, readingQualityNames, type ObservationKind, type ReadingQuality } from "#app/domain/reading.ts";
 import { composeReading, type ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
 import { withUncertainty } from "#app/features/readings/reading-words.ts";
+import { weighingNotes } from "#app/features/readings/weighing-notes.ts";
 import type { BenchInstrument } from "#app/features/stones/get-bench.server.ts";
+import { DescribedFields } from "./described-fields.tsx";
+import { moveOnByEnter } from "./move-on-by-enter.ts";
 import { correctionWords } from "#app/components/instruments/correction-words.ts";
 import { ReadingFields, type ReadingFieldset } from "./reading-fields.tsx";
+import { RotationFields } from "./rotation-fields.tsx";
+import type { SpectrumAround } from "./spectrum/spectrum-around.ts";
+import { useFirstField } from "./use-first-field.ts";
 
 type NewReadingProps = {
   kind: ObservationKind;
@@ -24,23 +34,33 @@ type NewReadingProps = {
   areCandidatesHidden: boolean;
   /** What the typed digits amount to; null while they are no reading. */
   onDraft?: (reading: ComposedReading | null) => void;
-  caution?: string;
+  /** For the spectroscope's form alone. */
+  spectrum?: SpectrumAround;
 };
 
+/** Forms with something to draw in take the whole width. */
+const wide: ReadonlySet<ObservationKind> = new Set(["rotation", "spectroscope"]);
+
 /** The form of one test. It posts without script; with script it says at once what follows from the digits. */
-export function NewReading({ kind, instruments, requestId, lastResult, areCandidatesHidden, onDraft, caution }: NewReadingProps) {
-  const needed = instrumentKindFor[kind];
+export function NewReading({ kind, instruments, requestId, lastResult, areCandidatesHidden, onDraft, spectrum }: NewReadingProps) {
+  const { instrumentKind: needed, needsInstrument, caution } = aboutTest(kind);
   const fitting = needed ? instruments.filter((instrument) => instrument.kind === needed) : instruments;
-  const usual = needed ? (fitting.find(({ isOutOfCheck, status }) => !isOutOfCheck && status === "inService") ?? fitting[0]) : undefined;
+  const usual = needed && needsInstrument ? (fitting.find(({ isOutOfCheck, status }) => !isOutOfCheck && status === "inService") ?? fitting[0]) : undefined;
+  // A form that script puts up is a new one, whatever the page's loader last said: two readings of one id would be kept as one.
+  const isPutUpByScript = useIsHydrated();
+  const [ownRequestId] = useState(() => (isPutUpByScript ? uuidv7() : requestId));
   const [form, fields] = useForm<ReadingFieldset>({
     id: `reading-${kind}`,
     lastResult,
     shouldValidate: "onSubmit",
     // What a number is, is never filled in for anybody; the prism's index and the liquid's limit belong to the instrument.
-    defaultValue: { requestId, instrument: usual?.ref, quality: "good", facet: "table", light: "sodium", limit: usual?.upperLimit ? String(usual.upperLimit) : undefined, prismN: usual?.prismIndex ? String(usual.prismIndex) : undefined },
+    defaultValue: { requestId: ownRequestId, instrument: usual?.ref, quality: "good", facet: "table", light: "sodium", limit: usual?.upperLimit ? String(usual.upperLimit) : undefined, prismN: usual?.prismIndex ? String(usual.prismIndex) : undefined },
   });
   const [preview, setPreview] = useState<ComposedReading | null>(null);
   const [instrumentRef, setInstrumentRef] = useState(usual?.ref ?? "");
+  const [quality, setQuality] = useState<ReadingQuality>("good");
+  const element = useRef<HTMLFormElement>(null);
+  useFirstField(element);
   const navigation = useNavigation();
   const isSaving = navigation.state === "submitting";
   const instrument = fitting.find(({ ref }) => ref === instrumentRef) ?? null;
@@ -49,22 +69,36 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
     const typed = new FormData(event.currentTarget);
     const chosen = fitting.find(({ ref }) => ref === typed.get("instrument")) ?? null;
     setInstrumentRef(chosen?.ref ?? "");
-    const reading = composeReading(readingDraftFromForm(typed), chosen).reading ?? null;
-    setPreview(reading);
-    onDraft?.(reading);
+    const draft = readingDraftFromForm(typed);
+    setQuality(draft.quality);
+    // A run is fitted where its curves are drawn.
+    if (draft.kind !== "rotation") show(composeReading(draft, chosen).reading ?? null);
   }
+  const show = useCallback(
+    (reading: ComposedReading | null) => {
+      setPreview(reading);
+      onDraft?.(reading);
+    },
+    [onDraft],
+  );
 
   return (
-    <Form method="post" preventScrollReset {...getFormProps(form)} onChange={onType} className="group/reading grid gap-x-7 gap-y-4 px-4.5 py-4 md:grid-cols-[minmax(0,19rem)_minmax(0,1fr)]">
+    <Form method="post" preventScrollReset {...getFormProps(form)} ref={element} onChange={onType} onKeyDown={moveOnByEnter} className="group/reading grid gap-x-7 gap-y-4 px-4.5 py-4 md:grid-cols-[minmax(0,19rem)_minmax(0,1fr)]">
       <input type="hidden" name="kind" value={kind} />
       <input type="hidden" name={fields.requestId.name} defaultValue={fields.requestId.initialValue} key={fields.requestId.key} />
       {areCandidatesHidden ? <input type="hidden" name="areCandidatesHidden" value="on" /> : null}
       <div className="md:col-span-2 empty:hidden">
         <FormAlert errors={form.errors} id={form.errorId} />
-        {caution ? <p className="text-sm text-straw">{caution}</p> : null}
+        {caution ? <Caution>{caution}</Caution> : null}
       </div>
-      <div className="grid content-start gap-3">
-        <ReadingFields kind={kind} fields={fields} />
+      <div className={`grid content-start gap-3 ${wide.has(kind) ? "md:col-span-2" : ""}`}>
+        {isDescribed(kind) ? (
+          <DescribedFields kind={kind} fields={fields} spectrum={spectrum} />
+        ) : kind === "rotation" ? (
+          <RotationFields rows={fields.rows} light={fields.light} onReading={show} {...{ instrument, quality }} />
+        ) : (
+          <ReadingFields kind={kind} fields={fields} />
+        )}
         <div className="mt-1 flex flex-wrap gap-2.5">
           <Button size="bench" busyLabel={isSaving && "Recording"}>
             Record
@@ -72,17 +106,17 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
         </div>
         <Preview reading={preview} instrument={instrument} />
       </div>
-      <div className="grid content-start gap-3">
+      <div className={`grid content-start gap-3 ${kind === "rotation" ? "md:col-span-2 md:grid-cols-2" : ""}`}>
         {fitting.length > 0 ? (
           <SelectField
             key={fields.instrument.key}
             {...fieldProps(fields.instrument)}
             label="Instrument"
-            isRequired={needed !== null}
-            emptyLabel={needed ? "Choose" : "By eye"}
+            isRequired={needsInstrument}
+            emptyLabel={needsInstrument ? "Choose" : "None, or by eye"}
             options={fitting.map(({ ref, name, description, isOutOfCheck }) => ({ value: ref, label: `${name}${description ? `, ${description}` : ""}${isOutOfCheck ? " (out of check)" : ""}` }))}
           />
-        ) : needed ? (
+        ) : needsInstrument ? (
           <p className="text-sm text-straw">No instrument of this kind is in service. Enter it under Instruments, or record “No reading”.</p>
         ) : null}
         <RadioGroupField
@@ -103,7 +137,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
           emptyLabel="Choose"
           options={noResultReasons.map((value) => ({ value, label: value[0]!.toUpperCase() + value.slice(1) }))}
         />
-        {kind === "free" ? null : (
+        {hasOwnText.has(kind) ? null : (
           <TextAreaField key={fields.note.key} {...fieldProps(fields.note)} label="Note" isRequired={false} rows={2} maxLength={2000} />
         )}
       </div>
@@ -111,11 +145,14 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
   );
 }
 
+/** Forms whose own text is where a note would go. */
+const hasOwnText: ReadonlySet<ObservationKind> = new Set(["free", "magnification", "immersion"]);
 const pick = ({ id, errors }: { id: string; errors?: string[] }) => ({ id, errors });
 
 /** What follows from the digits, before they are saved. */
 function Preview({ reading, instrument }: { reading: ComposedReading | null; instrument: BenchInstrument | null }) {
   const derived = reading?.values.filter(({ formula }) => formula !== null) ?? [];
+  const notes = reading && weighingNotes(reading);
   if (derived.length === 0 && !instrument) return null;
   return (
     <dl className="grid grid-cols-[auto_1fr] gap-x-3.5 gap-y-1 border-t border-dashed border-rule-2 pt-2.5 text-sm" aria-live="polite">
@@ -125,6 +162,15 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
           <dd className="font-mono">{withUncertainty(value, value.name === "sg" ? 3 : 4)}</dd>
         </div>
       ))}
+      {notes ? (
+        <div className="contents">
+          <dt className="text-ink-3">Weighings</dt>
+          <dd>
+            {notes.spread}
+            {notes.drift ? <span className="block text-straw">{notes.drift}</span> : null}
+          </dd>
+        </div>
+      ) : null}
       {instrument ? (
         <div className="contents">
           <dt className="text-ink-3">Instrument</dt>
@@ -141,4 +187,4 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
   );
 }
 
-const derivedNames: Partial<Record<string, string>> = { birefringence: "Birefringence", sg: "Density", n: "Index" };
+const derivedNames: Partial<Record<string, string>> = { birefringence: "Birefringence", sg: "Density", n: "Index", low: "Lowest index", high: "Highest index", omega: "nω", epsilon: "nε", alpha: "nα", beta: "nβ", gamma: "nγ" };

@@ -1,4 +1,5 @@
 import { Link } from "react-router";
+import { StrikeForm } from "./strike-form.tsx";
 import { Chip } from "#app/components/ui/chip.tsx";
 import { EmptyState } from "#app/components/ui/empty-state.tsx";
 import { Cell, HeaderCell, Table } from "#app/components/ui/table.tsx";
@@ -11,10 +12,16 @@ type ReadingsTableProps = {
   /** Empty where nothing may be struck. */
   strikeHref: ((sequence: number) => string) | null;
   canStrike: (reading: TimedReading) => boolean;
+  /** Strikes without the line: the page of its own cannot be fetched then. */
+  strikeHere?: (sequence: number, reason: string) => Promise<void>;
+  /** Readings whose strike waits on this device. */
+  strikesWaiting?: ReadonlySet<number>;
 };
 
+const noneWaiting: ReadonlySet<number> = new Set();
+
 /** The newest first. A struck reading stays in its place, crossed through, with its reason in its own words. */
-export function ReadingsTable({ readings, strikeHref, canStrike }: ReadingsTableProps) {
+export function ReadingsTable({ readings, strikeHref, canStrike, strikeHere, strikesWaiting = noneWaiting }: ReadingsTableProps) {
   if (readings.length === 0) return <EmptyState title="No readings yet">Begin with what harms least: look, weigh, measure, then the polariscope and the refractometer.</EmptyState>;
   return (
     <Table caption="Readings, latest first">
@@ -31,14 +38,20 @@ export function ReadingsTable({ readings, strikeHref, canStrike }: ReadingsTable
       </thead>
       <tbody>
         {[...readings].reverse().map((reading) => (
-          <ReadingRow key={reading.sequence} reading={reading} strikeTo={strikeHref && !reading.strike && canStrike(reading) ? strikeHref(reading.sequence) : null} />
+          <ReadingRow
+            key={reading.sequence}
+            reading={reading}
+            isStrikeWaiting={strikesWaiting.has(reading.sequence)}
+            strikeTo={strikeHref && !reading.strike && !strikesWaiting.has(reading.sequence) && canStrike(reading) ? strikeHref(reading.sequence) : null}
+            strikeHere={strikeHere}
+          />
         ))}
       </tbody>
     </Table>
   );
 }
 
-function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: string | null }) {
+function ReadingRow({ reading, strikeTo, strikeHere, isStrikeWaiting }: { reading: TimedReading; strikeTo: string | null; strikeHere: ReadingsTableProps["strikeHere"]; isStrikeWaiting: boolean }) {
   const { strike, quality, values } = reading;
   const isStruck = strike !== null;
   const valueText = readingValueText(reading);
@@ -48,6 +61,7 @@ function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: st
     <tr id={`reading-${reading.sequence}`}>
       <Cell isStruck={isStruck} className="whitespace-nowrap">
         <span title={reading.day}>{reading.when}</span>
+        {reading.sentWhen ? <span className={small}>came {reading.sentWhen}</span> : null}
         <span className="hidden text-xs text-ink-3 print:block">{reading.day}</span>
         <span className={small}>
           {initials(reading.observer)} · no. {reading.sequence}
@@ -80,9 +94,12 @@ function ReadingRow({ reading, strikeTo }: { reading: TimedReading; strikeTo: st
       </Cell>
       <Cell className="text-right">
         <span className="flex flex-wrap items-center justify-end gap-x-3 gap-y-1">
-          {reading.isOfSecondCheck ? <Chip tone="blue">check</Chip> : null}
+          {reading.isOfSecondCheck ? <Chip tone="blue">check</Chip> : reading.isBlind ? <Chip>before candidates</Chip> : null}
           {gap && !isStruck ? <Chip tone="green">δ {gap.value.toFixed(3)}</Chip> : null}
-          {strikeTo ? (
+          {isStrikeWaiting ? <Chip tone="blue">strike waits</Chip> : null}
+          {strikeTo && strikeHere ? (
+            <StrikeForm onStrike={(reason) => strikeHere(reading.sequence, reason)} />
+          ) : strikeTo ? (
             <Link to={strikeTo} className="no-print inline-flex min-h-6 items-center text-xs text-ink-3 underline decoration-rule-2 hover:text-red hover:decoration-red" aria-label={`Strike reading ${reading.sequence}`}>
               Strike
             </Link>

@@ -1,6 +1,6 @@
 import { useEffect, useId, useState, type MouseEvent } from "react";
 import { Link, useNavigate } from "react-router";
-import { useIsHydrated } from "#app/components/accounts/use-is-hydrated.ts";
+import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 import { refractometerView, viewAround, wholeView, writeMapView, zoomView, type MapView } from "#app/components/charts/species-map/map-view.ts";
 import { SpeciesMap, type MapReading, type Standing } from "#app/components/charts/species-map/species-map.tsx";
 import { buttonLook } from "#app/components/ui/button.tsx";

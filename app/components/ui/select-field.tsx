@@ -23,7 +23,7 @@ export function SelectField({ id, label, unit, hint, errors, isRequired = true, 
   return (
     <FieldFrame {...{ id, label, unit, hint, errors, isRequired, className }}>
       <span className="relative block">
-        <select id={id} {...select} {...describedBy({ id, hint, errors })} className={`${inputLook} appearance-none truncate pr-9 ${size === "bench" ? "min-h-11" : ""}`}>
+        <select id={id} aria-required={isRequired || undefined} {...select} {...describedBy({ id, hint, errors })} className={`${inputLook} appearance-none truncate pr-9 ${size === "bench" ? "min-h-11" : ""}`}>
           {emptyLabel === undefined ? null : <option value="">{emptyLabel}</option>}
           {options.map((option) =>
             "group" in option ? (

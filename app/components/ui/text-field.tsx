@@ -18,6 +18,7 @@ export function TextField({ id, label, unit, hint, errors, isRequired = true, is
         id={id}
         type="text"
         {...(isNumber ? { autoComplete: "off", spellCheck: false } : {})}
+        aria-required={isRequired || undefined}
         {...input}
         {...describedBy({ id, hint, errors })}
         className={`${size === "bench" ? benchInputLook : inputLook} ${isMono ? "font-mono" : ""}`}
@@ -31,7 +32,7 @@ type TextAreaProps = FieldFrameProps & Omit<ComponentProps<"textarea">, "id" | "
 export function TextAreaField({ id, label, unit, hint, errors, isRequired = true, className, ...input }: TextAreaProps) {
   return (
     <FieldFrame {...{ id, label, unit, hint, errors, isRequired, className }}>
-      <textarea id={id} rows={3} {...input} {...describedBy({ id, hint, errors })} className={inputLook} />
+      <textarea id={id} rows={3} aria-required={isRequired || undefined} {...input} {...describedBy({ id, hint, errors })} className={inputLook} />
     </FieldFrame>
   );
 }

@@ -9,6 +9,7 @@ export * from "./observation.ts";
 export * from "./record.ts";
 export * from "./report.ts";
 export * from "./species.ts";
+export * from "./spectrum.ts";
 export * from "./stone.ts";
 export * from "./take-in.ts";
 export * from "./valuation.ts";

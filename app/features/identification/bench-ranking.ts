@@ -6,6 +6,8 @@ export type Lane = Readonly<{
   label: string;
   verdict: "agrees" | "strained" | "contradicts";
   because: string;
+  /** Natural logarithm of how likely the species would show what was observed. */
+  logLikelihood: number;
   /** In words: "1.757–1.779". */
   reference: string;
   observed: string;
@@ -31,6 +33,9 @@ export type BenchRanking = Readonly<{
   candidates: readonly BenchCandidate[];
   /** Candidates beyond those shown. */
   otherCount: number;
+  /** The likeliest ones by name, to choose two of; and the two that were chosen. */
+  comparable: ReadonlyArray<Readonly<{ speciesId: string; name: string }>>;
+  compared: readonly BenchCandidate[];
   unlisted: number;
   /** The likeliest of them first; on the server not all. */
   ruledOut: readonly RuledOut[];

@@ -19,7 +19,7 @@ type GatedDraft = Readonly<{
 export type Contradiction = Readonly<{ sequence: number; because: string }>;
 
 /** The kinds of evidence that stand, independent of each other; poor readings alone make none. */
-export function evidenceClasses(readings: readonly GatedReading[]): Set<"index" | "character" | "density" | "seen"> {
+export function evidenceClasses(readings: readonly GatedReading[]): Set<"index" | "character" | "density" | "spectrum" | "seen"> {
   const counted = readings.filter(({ quality, strike, detail }) => (quality === "good" || quality === "fair") && !strike && !(detail.kind === "polariscope" && !characterOf(detail)));
   return new Set(counted.flatMap(({ detail }) => evidenceClassOf[detail.kind] ?? []));
 }
@@ -69,4 +69,4 @@ export function conclusionGate(readings: readonly GatedReading[], contradictions
 }
 
 const needsNatureEvidence: ReadonlySet<Nature> = new Set(["natural", "synthetic", "composite", "reconstituted", "cultured"]);
-const classWords = { index: "the refractive index", character: "the optic character", density: "the density", seen: "what was seen" } as const;
+const classWords = { index: "the refractive index", character: "the optic character", density: "the density", spectrum: "the spectrum", seen: "what was seen" } as const;

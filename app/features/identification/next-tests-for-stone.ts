@@ -3,7 +3,7 @@ import { parseDecimal } from "#app/domain/decimal.ts";
 import type { ObservationKind } from "#app/domain/reading.ts";
 import type { BenchTestId } from "#app/gemmology/next-test/bench-test.ts";
 import { nextTests, type NextTest, type Vetoed } from "#app/gemmology/next-test/next-tests.ts";
-import { rankSpecies } from "#app/gemmology/ranking/rank-species.ts";
+import { rankSpecies, type RankOptions } from "#app/gemmology/ranking/rank-species.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
 import { evidenceFromReadings } from "#app/features/readings/evidence-from-readings.ts";
 import { waterWeighingUncertaintyCt, weighingUncertaintyCt } from "#app/features/readings/usual-uncertainty.ts";
@@ -15,20 +15,21 @@ type StoneToTest = Readonly<{ weightText: string; isMounted: boolean; mount: str
 export type NextTests = Readonly<{ recommended: ReadonlyArray<NextTest & { kind: ObservationKind }>; vetoed: readonly Vetoed[] }>;
 
 /** The tests that the bench has a form for. */
-const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refractometer", spot: "spot", polariscope: "polariscope", figure: "polariscope", density: "density" };
+const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refractometer", spot: "spot", polariscope: "polariscope", figure: "polariscope", density: "density", dichroscope: "dichroscope", longWave: "ultraviolet", shortWave: "ultraviolet", colourFilter: "colourFilter", thermalProbe: "thermalProbe", spectroscope: "spectroscope", magnet: "magnet", brewster: "brewster", depth: "realDepth" };
 const mostShown = 3;
 
 /** What to test next, from the readings that stand, this stone's weight, its consents and the instruments at hand. */
-export function nextTestsForStone(readings: readonly NumberedReading[], table: SpeciesTable, stone: StoneToTest): NextTests {
+export function nextTestsForStone(readings: readonly NumberedReading[], table: SpeciesTable, stone: StoneToTest, options: RankOptions = {}): NextTests {
   const evidence = evidenceFromReadings(readings);
   if (Object.keys(evidence).length === 0) return { recommended: [], vetoed: [] };
   const { done, poor } = testsMade(readings);
   const balance = stone.instruments.find(({ kind }) => kind === "balance") ?? null;
-  const { recommended, vetoed } = nextTests(rankSpecies(evidence, table).candidates, table, {
+  const { recommended, vetoed } = nextTests(rankSpecies(evidence, table, options).candidates, table, {
     massCt: stone.isMounted ? null : (parseDecimal(stone.weightText) ?? null),
     uAirCt: weighingUncertaintyCt(balance),
     uWaterCt: waterWeighingUncertaintyCt(balance),
     isPolished: true,
+    isOverLimit: evidence.ri?.some(({ kind }) => kind === "overLimit") ?? false,
     offered: new Set(Object.keys(kindOf) as BenchTestId[]),
     done,
     poor,
@@ -49,6 +50,10 @@ function testsMade(readings: readonly NumberedReading[]): { done: Set<BenchTestI
     if (detail.kind === "polariscope") to.add("polariscope");
     if (detail.kind === "polariscope" && detail.figure !== "notSought") to.add("figure");
     if (detail.kind === "density") to.add("density");
+    if (detail.kind === "rotation") to.add("edges").add("spot");
+    if (detail.kind === "ultraviolet") to.add(detail.wave === "shortWave" ? "shortWave" : "longWave");
+    if (detail.kind === "realDepth") to.add("depth");
+    if (detail.kind === "spectroscope" || detail.kind === "magnet" || detail.kind === "brewster" || detail.kind === "dichroscope" || detail.kind === "colourFilter" || detail.kind === "thermalProbe") to.add(detail.kind);
   }
   return { done, poor };
 }
@@ -64,10 +69,19 @@ function barredTests({ consents, instruments, isMounted, mount }: StoneToTest): 
   const missing = (kind: BenchInstrument["kind"], name: string) => {
     const fitting = instruments.filter((instrument) => instrument.kind === kind);
     if (fitting.length === 0) return `no ${name} is in service`;
-    return fitting.every(({ isOutOfCheck }) => isOutOfCheck) && kind !== "polariscope" ? `the check of every ${name} is overdue` : undefined;
+    return fitting.every(({ isOutOfCheck }) => isOutOfCheck) ? `the check of every ${name} is overdue` : undefined;
   };
   bar(["edges", "spot"], missing("refractometer", "refractometer"));
   bar(["polariscope", "figure"], missing("polariscope", "polariscope"));
   bar(["density"], missing("balance", "balance"));
+  bar(["longWave", "shortWave"], consents.includes("ultraviolet") ? undefined : "the client has not agreed to ultraviolet light");
+  bar(["thermalProbe"], consents.includes("thermalProbe") ? undefined : "the client has not agreed to the thermal probe");
+  bar(["dichroscope"], missing("dichroscope", "dichroscope"));
+  bar(["spectroscope"], missing("spectroscope", "spectroscope"));
+  bar(["magnet"], isMounted ? "the mount’s metal would answer the magnet" : missing("magnet", "magnet"));
+  bar(["brewster"], missing("brewsterMeter", "Brewster-angle meter"));
+  bar(["depth"], missing("microscope", "microscope with a focus scale"));
+  bar(["longWave", "shortWave"], missing("uvLamp", "ultraviolet lamp"));
+  bar(["thermalProbe"], missing("thermalProbe", "thermal probe"));
   return barred;
 }

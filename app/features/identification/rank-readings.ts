@@ -1,21 +1,26 @@
 import type { Evidence } from "#app/gemmology/ranking/evidence.ts";
-import { rankSpecies } from "#app/gemmology/ranking/rank-species.ts";
+import { rankSpecies, type RankOptions } from "#app/gemmology/ranking/rank-species.ts";
 import type { EvidenceLine, Ranking } from "#app/gemmology/ranking/ranking.ts";
 import type { SpeciesTable } from "#app/gemmology/species/species-table.ts";
 import { evidenceFromReadings, type RankedReading } from "#app/features/readings/evidence-from-readings.ts";
 import { usualUncertainty } from "#app/features/readings/usual-uncertainty.ts";
-import type { BenchRanking, Lane, Measured } from "./bench-ranking.ts";
+import type { BenchCandidate, BenchRanking, Lane, Measured } from "./bench-ranking.ts";
 
 /** A saved reading has its number; the one that is being typed has none yet. */
 export type NumberedReading = RankedReading & Readonly<{ sequence: number | null }>;
 
 const mostCandidates = 4;
+const mostComparable = 12;
 const negligible = 0.001;
 
 /** Everything that the bench shows of a ranking, by one and the same code in the browser and on the server. */
-export function rankReadings(readings: readonly NumberedReading[], table: SpeciesTable, { mostReasons = Infinity } = {}): BenchRanking {
+export function rankReadings(
+  readings: readonly NumberedReading[],
+  table: SpeciesTable,
+  { mostReasons = Infinity, compare = [], prior = "prevalence" }: RankOptions & { mostReasons?: number; /** Ids of two candidates. */ compare?: readonly string[] } = {},
+): BenchRanking {
   const evidence = evidenceFromReadings(readings);
-  const ranking = rankSpecies(evidence, table);
+  const ranking = rankSpecies(evidence, table, { prior });
   const names = new Map(table.nodes.map(({ id, name }) => [id, name]));
   const against = contradictingReadings(readings, table);
   // One contradiction does not take a species from the ranking, but what it leaves unlikely is told with its reason.
@@ -26,13 +31,16 @@ export function rankReadings(readings: readonly NumberedReading[], table: Specie
     ...ranking.candidates.filter((candidate) => !isLeft(candidate)).map(({ speciesId, evidence: lines }) => ({ speciesId, because: lines.find(({ verdict }) => verdict === "contradicts")!.because })),
     ...ranking.contradicted,
   ];
+  const told = ({ speciesId, name, probability, evidence: lines }: Ranking["candidates"][number]): BenchCandidate => ({ speciesId, name, probability, lanes: lines.map((line) => laneOf(line, evidence)) });
   return {
     tableVersion: table.version,
     modelVersion: ranking.modelVersion,
     speciesCount: table.nodes.length,
     hasEvidence: Object.keys(evidence).length > 0,
-    candidates: shown.map(({ speciesId, name, probability, evidence: lines }) => ({ speciesId, name, probability, lanes: lines.map((line) => laneOf(line, evidence)) })),
+    candidates: shown.map(told),
     otherCount: left.length - shown.length,
+    comparable: left.slice(0, mostComparable).map(({ speciesId, name }) => ({ speciesId, name })),
+    compared: compare.flatMap((id) => ranking.candidates.filter(({ speciesId }) => speciesId === id).map(told)),
     unlisted: ranking.unlisted,
     ruledOut: ruledOut.slice(0, mostReasons).map(({ speciesId, because }) => ({ speciesId, name: names.get(speciesId) ?? speciesId, because, readings: against.get(speciesId) ?? [] })),
     ruledOutCount: ruledOut.length,
@@ -59,12 +67,12 @@ export function contradictingReadings(readings: readonly NumberedReading[], tabl
   return against;
 }
 
-const labels: Readonly<Record<string, string>> = { ri: "Index", birefringence: "Birefringence", sg: "Density", opticCharacter: "Character", opticSign: "Sign" };
+const labels: Readonly<Record<string, string>> = { ri: "Index", birefringence: "Birefringence", sg: "Density", opticCharacter: "Character", opticSign: "Sign", colour: "Colour", transparency: "Transparency", lustre: "Lustre", phenomena: "Phenomena", pleochroism: "Pleochroism", fluorescenceLongWave: "Long wave", fluorescenceShortWave: "Short wave", absorption: "Spectrum", colourFilter: "Filter", thermal: "Thermal", magnetic: "Magnet" };
 /** How far a lane reaches on each side of what was measured: the same for every species, so that lanes compare. */
 const reach: Readonly<Record<string, number>> = { ri: 0.05, birefringence: 0.03, sg: 0.6 };
 
-function laneOf({ property, observed, reference, verdict, because }: EvidenceLine, evidence: Evidence): Lane {
-  const lane = { property, label: labels[property] ?? property, observed, reference, verdict, because };
+function laneOf({ property, observed, reference, verdict, because, logLikelihood }: EvidenceLine, evidence: Evidence): Lane {
+  const lane = { property, label: labels[property] ?? property, observed, reference, verdict, because, logLikelihood };
   const half = reach[property];
   const [low, high = low] = numbersIn(observed);
   const [from, to = from] = numbersIn(reference);
@@ -97,6 +105,15 @@ function measuredIndex({ ri = [] }: Evidence): Measured | null {
         return [{ value: reading.n, u: reading.u ?? usualUncertainty.edge }];
       case "criticalAngle":
         return [{ value: reading.prismN * Math.sin((reading.angleDeg * Math.PI) / 180), u: usualUncertainty.criticalAngleIndex }];
+      case "interval":
+        return [{ value: (reading.low + reading.high) / 2, u: Math.max((reading.high - reading.low) / Math.sqrt(12), reading.u ?? usualUncertainty.edge) }];
+      case "estimate":
+        return [{ value: reading.n, u: reading.u }];
+      case "rotation":
+        return reading.solutions.slice(0, 1).map(({ indices, u }) => {
+          const values = Object.values(indices);
+          return { value: (Math.min(...values) + Math.max(...values)) / 2, u: u ?? usualUncertainty.edge };
+        });
       case "overLimit":
         return [];
     }
@@ -105,7 +122,7 @@ function measuredIndex({ ri = [] }: Evidence): Measured | null {
 }
 
 /** The ranking as it is kept with a conclusion: whole, with what it was made from. */
-export function rankingSnapshot(readings: readonly NumberedReading[], table: SpeciesTable): { evidence: Evidence; ranking: Ranking } {
+export function rankingSnapshot(readings: readonly NumberedReading[], table: SpeciesTable, options: RankOptions = {}): { evidence: Evidence; ranking: Ranking } {
   const evidence = evidenceFromReadings(readings);
-  return { evidence, ranking: rankSpecies(evidence, table) };
+  return { evidence, ranking: rankSpecies(evidence, table, options) };
 }

@@ -1,6 +1,7 @@
 import type { LabContext } from "#app/features/lab-context.ts";
 import { listReadings } from "#app/features/readings/list-readings.server.ts";
 import type { ReadingView } from "#app/features/readings/reading-view.ts";
+import type { RankOptions } from "#app/gemmology/ranking/rank-species.ts";
 import { requireRole } from "#app/features/require-role.ts";
 import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
 import type { Contradiction } from "./conclusion-gate.ts";
@@ -13,14 +14,16 @@ const mostReasons = 30;
  * The ranking of a stone from what was saved, by the rules of who may see it.
  *
  * @param readings those of the stone that the caller has read already; read here where left out
+ * @param prior by how common species are, or "even"; the first where left out
  */
-export async function rankStone(ctx: LabContext, input: { stoneCode: string } | { readings: readonly ReadingView[] }) {
+export async function rankStone(ctx: LabContext, input: ({ stoneCode: string } | { readings: readonly ReadingView[]; compare?: readonly string[] }) & RankOptions) {
   requireRole(ctx, "readings.read");
   const readings = "readings" in input ? input.readings : (await listReadings(ctx, input)).filter(({ isOfSecondCheck }) => !isOfSecondCheck);
   const { table } = loadSpeciesTable();
+  const options: RankOptions = input.prior ? { prior: input.prior } : {};
   return {
-    bench: rankReadings(readings, table, { mostReasons }),
-    snapshot: () => rankingSnapshot(readings, table),
+    bench: rankReadings(readings, table, { mostReasons, ...options, ...("compare" in input && { compare: input.compare }) }),
+    snapshot: () => rankingSnapshot(readings, table, options),
     tableVersion: table.version,
     /** Good readings that contradict a species by themselves. */
     contradictionsOf: (speciesId: string): Contradiction[] =>

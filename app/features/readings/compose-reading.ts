@@ -1,42 +1,41 @@
 import type { FieldErrors } from "#app/domain/app-error.ts";
-import { decimalPlaces, parseDecimal } from "#app/domain/decimal.ts";
-import { applyCorrection, type AppliedCorrection } from "#app/features/instruments/apply-correction.ts";
+import { parseDecimal } from "#app/domain/decimal.ts";
+import { impliedIndex } from "#app/domain/implied-index.ts";
 import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
 import { derivedDensity, derivedIndex, differenceOfEdges } from "./derived-values.ts";
-import type { ReadingDraft } from "./reading-draft.ts";
+import { plainText } from "#app/domain/plain-text.ts";
+import { composeDescribed } from "./compose-described.ts";
+import { meanOfRepeats } from "#app/gemmology/statistics/mean-of-repeats.ts";
+import { againNames, isDescribedDraft, type ReadingDraft } from "./reading-draft.ts";
+import type { ReadingInstrument } from "./reading-instrument.ts";
+import { readNumber, type NumberRule } from "./read-number.ts";
+import { typedValue } from "./typed-value.ts";
 import { angleUncertaintyDeg, edgeUncertainty, gaugeUncertaintyMm, spotUncertainty, usualUncertainty, waterWeighingUncertaintyCt, weighingUncertaintyCt } from "./usual-uncertainty.ts";
 
-/** What a reading needs to know of the instrument that it was made on. */
-export type ReadingInstrument = Readonly<{ resolution: number | null; standardUncertainty: number | null; upperLimit: number | null; prismIndex: number | null; correction?: AppliedCorrection | null }>;
 export type ComposedReading = Readonly<{ detail: ReadingDetail; quality: ReadingQuality; values: readonly ReadingValue[] }>;
+/** Every test but the rotation run, whose fit is loaded where it is needed: see compose-rotation.ts. */
+export type QuickDraft = Exclude<ReadingDraft, { kind: "rotation" }>;
 export type Composed = { reading: ComposedReading; problems?: undefined } | { reading?: undefined; problems: FieldErrors };
-
-type NumberRule = Readonly<{ name: ReadingValueName; what: string; unit: ReadingValue["unit"]; example: string; min: number; max: number; mostDecimals: number; isReadOnInstrument?: boolean; /** Two readings taken from each other. */ isDifference?: boolean; u: number | null }>;
 
 /**
  * A reading as it was typed, turned into its numbers with their uncertainties and what follows from them, or into what
  * is wrong, a sentence a field. The browser runs it as digits are typed, the server before it saves.
  */
-export function composeReading(draft: ReadingDraft, instrument: ReadingInstrument | null): Composed {
+export function composeReading(draft: QuickDraft, instrument: ReadingInstrument | null): Composed {
+  if (isDescribedDraft(draft)) return composeDescribed(draft, instrument);
   const problems: Record<string, string[]> = {};
   const values: ReadingValue[] = [];
   const refuse = (field: string, message: string) => void (problems[field] ??= []).push(message);
   const number = (field: string, text: string, rule: NumberRule): number | undefined => {
-    const read = readNumber(text, rule, instrument);
+    const digits = rule.unit === "n" ? impliedIndex(text) : text;
+    const read = readNumber(digits, rule, instrument);
     if (typeof read === "string") {
       refuse(field, read);
       return undefined;
     }
-    const typed = { name: rule.name, typedText: text.trim(), unit: rule.unit, formula: null };
-    // The liquid's limit is the liquid's own; everything else that is read on the scale shares the scale's error.
-    const corrected = rule.isReadOnInstrument && rule.name !== "limit" ? applyCorrection(instrument?.correction, { value: read, unit: rule.unit, isDifference: rule.isDifference }) : undefined;
-    if (!corrected) {
-      values.push({ ...typed, value: read, standardUncertainty: rule.u });
-      return read;
-    }
-    const value = inColumn(corrected.value);
-    values.push({ ...typed, value, rawValue: read, standardUncertainty: rule.u === null ? null : inColumn(Math.hypot(rule.u, corrected.u)) });
-    return value;
+    const value = typedValue(read, digits, rule, instrument);
+    values.push(value);
+    return value.value;
   };
   const uOf = (name: ReadingValueName, usual: number) => values.find((value) => value.name === name)?.standardUncertainty ?? usual;
   const { quality } = draft;
@@ -121,7 +120,7 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
         return { kind, shape };
       }
       case "free": {
-        const text = draft.text.replace(/\r\n?/g, "\n").normalize("NFC").trim();
+        const text = plainText(draft.text);
         if (!isEmpty && text === "") refuse("text", "Write what was seen.");
         if (text.length > mostFreeText) refuse("text", `At most ${mostFreeText} characters; this is ${text.length}.`);
         return { kind: draft.kind, text };
@@ -134,12 +133,15 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
     if (limit && n > limit + 0.002) refuse(field, `Above ${limit}, the limit of this refractometer's contact liquid: record it as over the limit.`);
   }
 
-  function readDensity({ method, massAirCt, massLiquidCt, tempC }: Extract<ReadingDraft, { kind: "density" }>) {
+  function readDensity({ method, massAirCt, massLiquidCt, tempC, again = {} }: Extract<ReadingDraft, { kind: "density" }>) {
     const uAir = weighingUncertaintyCt(instrument);
     const uLiquid = waterWeighingUncertaintyCt(instrument);
     const isHung = method === "suspended";
     const air = number("massAirCt", massAirCt, { ...massRule, name: "massAirCt", what: "the weight in air", example: "2.143", u: uAir });
     const liquid = number("massLiquidCt", massLiquidCt, { ...massRule, name: "massLiquidCt", what: isHung ? "the weight in water" : "what the beaker gained", example: isHung ? "1.606" : "0.537", isDifference: !isHung, u: uLiquid });
+    const repeats = (names: readonly (typeof againNames)[number][], u: number) => names.flatMap((name) => (again[name]?.trim() ? (number(name, again[name], { ...massRule, name, what: "this weighing", example: "2.143", isDifference: name.startsWith("massLiquid") && !isHung, u }) ?? []) : []));
+    const airs = repeats(["massAirCt2", "massAirCt3"], uAir);
+    const liquids = repeats(["massLiquidCt2", "massLiquidCt3"], uLiquid);
     const temp = number("tempC", tempC, { name: "tempC", what: "the water's temperature", unit: "degC", example: "21.4", min: 0, max: 40, mostDecimals: 2, u: usualUncertainty.waterTempC });
     if (air === undefined || liquid === undefined) return;
     if (liquid >= air) {
@@ -147,8 +149,14 @@ export function composeReading(draft: ReadingDraft, instrument: ReadingInstrumen
       return refuse("massLiquidCt", `${message} must be less than the weight in air (${massAirCt.trim()} ct).`);
     }
     if (!isHung && liquid === 0) return refuse("massLiquidCt", "The beaker gains more than nothing when a stone hangs in it.");
-    if (temp === undefined) return;
-    const sg = derivedDensity({ method, massAirCt: air, massLiquidCt: liquid, tempC: temp, uAirCt: uOf("massAirCt", uAir), uLiquidCt: uOf("massLiquidCt", uLiquid) });
+    for (const name of againNames) {
+      const value = values.find((one) => one.name === name)?.value;
+      const first = name.startsWith("massAir") ? air : liquid;
+      if (value !== undefined && Math.abs(value - first) > Math.max(0.1, 0.1 * first)) return refuse(name, `This weighing is far from the first (${first} ct). Is a digit wrong?`);
+    }
+    if (temp === undefined || Object.keys(problems).length > 0) return;
+    const [inAir, inLiquid] = [meanOfRepeats([air, ...airs], uOf("massAirCt", uAir)), meanOfRepeats([liquid, ...liquids], uOf("massLiquidCt", uLiquid))];
+    const sg = derivedDensity({ method, massAirCt: inAir.mean, massLiquidCt: inLiquid.mean, tempC: temp, uAirCt: inAir.u, uLiquidCt: inLiquid.u });
     if (sg.value < 0.8 || sg.value > 25) return refuse("massLiquidCt", `These weights give a density of ${sg.value.toPrecision(3)}, which no stone has. Is a digit wrong, or the method another?`);
     values.push(sg);
   }
@@ -160,34 +168,3 @@ const mostFreeText = 1000;
 const largestGap = 0.3;
 const indexRule = { unit: "n", example: "1.762", min: 1.3, max: 2.1, mostDecimals: 4, isReadOnInstrument: true } as const;
 const massRule = { unit: "ct", min: 0, max: 500_000, mostDecimals: 4, isReadOnInstrument: true } as const;
-
-/** The number, or the sentence that says why it is none. */
-function readNumber(text: string, { what, unit, example, min, max, mostDecimals, isReadOnInstrument, name }: NumberRule, instrument: ReadingInstrument | null): number | string {
-  if (text.trim() === "") return `Write ${what}.`;
-  const value = text.length > 24 ? undefined : parseDecimal(text);
-  if (value === undefined) return `Write ${what} as it is shown, in digits: for example ${example}.`;
-  if (unit === "ct" && (name === "massLiquidCt" ? value < 0 : value <= 0)) return name === "massLiquidCt" ? `${sentence(what)} is not less than zero.` : `${sentence(what)} is more than zero.`;
-  if (value < min) return unit === "mm" ? `${sentence(what)} is at least ${min} mm.` : outside(what, unit, min, max);
-  if (value > max) return unit === "ct" || unit === "mm" ? `At most ${max} ${unit}: is the unit right?` : outside(what, unit, min, max);
-  const decimals = decimalPlaces(text);
-  if (decimals > mostDecimals) return `At most ${mostDecimals} decimals.`;
-  const step = isReadOnInstrument ? instrument?.resolution : null;
-  if (step && decimals > Math.max(decimalsOf(step), 2)) return `This instrument is read to ${step}: write the digits that it shows.`;
-  return value;
-}
-
-const unitWords: Partial<Record<ReadingValue["unit"], string>> = { deg: "°", degC: " °C" };
-
-function outside(what: string, unit: ReadingValue["unit"], min: number, max: number): string {
-  const words = unitWords[unit] ?? "";
-  return `${sentence(what)} lies between ${min}${words} and ${max}${words}.`;
-}
-
-function decimalsOf(step: number): number {
-  return /\.(\d+)$/.exec(step.toFixed(6).replace(/0+$/, ""))?.[1]?.length ?? 0;
-}
-
-/** At the precision that the database keeps. */
-const inColumn = (value: number) => Number(value.toFixed(7));
-
-const sentence = (text: string) => text[0]!.toUpperCase() + text.slice(1);

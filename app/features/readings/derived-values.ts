@@ -26,6 +26,6 @@ export function derivedIndex({ angleDeg, prismN, uAngleDeg, uPrismN }: { angleDe
 const columnDecimals = 7;
 const round = (value: number) => Number(value.toFixed(columnDecimals));
 
-function derived(name: ReadingValue["name"], { value, unit, u, formula }: { value: number; unit: ReadingValue["unit"]; u: number; formula: string }): ReadingValue {
+export function derived(name: ReadingValue["name"], { value, unit, u, formula }: { value: number; unit: ReadingValue["unit"]; u: number; formula: string }): ReadingValue {
   return { name, value: round(value), typedText: "", unit, standardUncertainty: round(u), formula };
 }

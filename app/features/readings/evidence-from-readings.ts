@@ -1,5 +1,7 @@
 import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
 import type { Evidence, RefractiveEvidence } from "#app/gemmology/ranking/evidence.ts";
+import { immersionIndex } from "./derived-from-described.ts";
+import { seenEvidence } from "./seen-evidence.ts";
 import { characterOf } from "./optic-character.ts";
 
 /** A reading as the ranking takes it: one that was saved, or the one that is being typed. */
@@ -16,7 +18,8 @@ export function evidenceFromReadings(readings: readonly RankedReading[]): Eviden
   const character = polariscope && characterOf(polariscope);
   const sign = character === "uniaxial" || character === "biaxial" ? polariscope?.sign : null;
   const sg = meanDensity(standing);
-  return { ...(ri.length > 0 && { ri }), ...(character && { opticCharacter: character }), ...(sign && { opticSign: sign }), ...(sg && { sg }) };
+  const heavyLiquids = standing.flatMap((reading) => heavyLiquidOf(reading) ?? []);
+  return { ...seenEvidence(standing), ...(heavyLiquids.length > 0 && { heavyLiquids }), ...(ri.length > 0 && { ri }), ...(character && { opticCharacter: character }), ...(sign && { opticSign: sign }), ...(sg && { sg }) };
 }
 
 /** Poor readings say less: their uncertainty is widened, so that one of them cannot outweigh a good one. */
@@ -43,9 +46,31 @@ function riOf({ detail, quality, values }: RankedReading): RefractiveEvidence | 
       const limit = get("limit");
       return limit && { kind: "overLimit", limit: limit.value };
     }
+    case "rotation": {
+      // Its crystals hold what it says of character and sign as well.
+      if (detail.solutions.length > 0) return { kind: "rotation", solutions: detail.solutions.map((crystal) => ({ ...crystal, u: (crystal.u ?? 0.0015) * widening[quality] })) };
+      const edge = get("alpha") ?? get("gamma");
+      return edge && { kind: "single", n: edge.value, u: u(edge) };
+    }
+    case "reflectivity":
+    case "brewster":
+    case "realDepth":
+    case "immersion": {
+      const n = get("n");
+      if (n) return { kind: "estimate", n: n.value, u: u(n), by: ({ reflectivity: "reflectance", brewster: "brewster", realDepth: "depth", immersion: "immersion" } as const)[detail.kind] };
+      return detail.kind === "immersion" && detail.comparison === "higher" && detail.liquid ? { kind: "overLimit", limit: immersionIndex(detail.liquid) } : undefined;
+    }
     default:
       return undefined;
   }
+}
+
+/** What the stone did in a liquid of known density; a suspended one has that density. */
+function heavyLiquidOf({ detail, values }: RankedReading): NonNullable<Evidence["heavyLiquids"]>[number] | undefined {
+  if (detail.kind !== "heavyLiquid" || !detail.behaviour) return undefined;
+  const liquid = values.find(({ name }) => name === "liquidSg");
+  const behaviour = ({ floats: "floats", suspended: "suspended", sinksSlowly: "sinks", sinks: "sinks" } as const)[detail.behaviour];
+  return liquid && { behaviour, liquidSg: liquid.value, uLiquidSg: liquid.standardUncertainty ?? 0.01 };
 }
 
 const qualityOrder: readonly ReadingQuality[] = ["poor", "fair", "good"];

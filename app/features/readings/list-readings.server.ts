@@ -30,6 +30,7 @@ export async function listReadings(ctx: LabContext, { stoneCode }: { stoneCode: 
       isBlind: observations.isBlind,
       secondCheckId: observations.secondCheckId,
       observedAt: observations.observedAt,
+      recordedAt: observations.recordedAt,
       observerId: observations.observerId,
       observer: users.name,
       instrument: { name: instruments.name, description: instruments.description },

@@ -12,6 +12,8 @@ export type ReadingView = Readonly<{
   isBlind: boolean;
   isOfSecondCheck: boolean;
   observedAt: Date;
+  /** By our own clock, when it came; later where it waited on a device. */
+  recordedAt: Date;
   observer: string;
   isOwn: boolean;
   instrument: { name: string; description: string } | null;

@@ -1,6 +1,7 @@
 import { decimalPlaces, parseDecimal } from "#app/domain/decimal.ts";
 import { massDifference } from "#app/features/custody/mass-difference.ts";
 import type { ComposedReading } from "./compose-reading.ts";
+import { weighingNotes } from "./weighing-notes.ts";
 
 type WarnedInstrument = Readonly<{ name: string; status: "inService" | "restricted" | "outOfService"; statusReason: string; upperLimit: number | null; standardUncertainty: number | null }>;
 
@@ -22,6 +23,8 @@ export function readingWarnings({ reading, instrument, outOfCheck, earlierWeight
   if (limit && edge && reading.detail.kind !== "criticalAngle" && Math.abs(edge.value - limit) <= 0.01) {
     warnings.push("This is close to the contact liquid's own edge, which is sharp and stays still while the stone turns.");
   }
+  const drift = weighingNotes(reading)?.drift;
+  if (drift) warnings.push(drift);
   const weight = reading.values.find(({ name }) => name === "weightCt" || name === "massAirCt");
   if (weight && parseDecimal(earlierWeightText) !== undefined) {
     const { differenceCt, isAlarming } = massDifference({

@@ -1,3 +1,7 @@
+import { isDescribed, type DescribedDetail } from "#app/domain/bench-tests/test-forms.ts";
+import { describedWords } from "./described-words.ts";
+import { weighingNotes } from "./weighing-notes.ts";
+import { rotationPositions } from "./rotation-rows.ts";
 import { facetNames, interferenceFigureNames, lightNames, polariscopeBehaviourNames, weighingMethodNames, type Facet, type Light, type ReadingDetail, type ReadingValue, type ReadingValueName } from "#app/domain/reading.ts";
 import { decimalPlaces } from "#app/domain/decimal.ts";
 import { typedDecimal } from "#app/domain/typed-decimal.ts";
@@ -11,6 +15,7 @@ export function readingValueText({ detail, values }: Told): string {
     const value = get(name);
     return value ? figureText(value) : "";
   };
+  if (isDescribedDetail(detail)) return derivesIndex.has(detail.kind) && get("n") ? `n ${withUncertainty(get("n")!, 3)}` : describedWords(detail, values).headline;
   switch (detail.kind) {
     case "refractometer":
       return get("low") ? `${typed("low")} – ${typed("high")}` : typed("n");
@@ -28,6 +33,8 @@ export function readingValueText({ detail, values }: Told): string {
       return get("weightCt") ? `${typed("weightCt")} ct` : "";
     case "dimensions":
       return get("lengthMm") ? `${[typed("lengthMm"), typed("widthMm"), typed("depthMm")].join(" × ")} mm` : "";
+    case "rotation":
+      return rotationIndices({ detail, values });
     case "free":
       return "";
   }
@@ -46,18 +53,41 @@ export function correctionText(values: readonly ReadingValue[]): string {
   // The database keeps them by name.
   const inOrder = values.toSorted((a, b) => figureOrder.indexOf(a.name) - figureOrder.indexOf(b.name));
   const corrected = inOrder.flatMap(({ typedText, value, rawValue }) => (typeof rawValue === "number" ? [{ text: typedDecimal(typedText), added: value - rawValue, decimals: decimalPlaces(typedText) + 1 }] : []));
+  if (values.some(({ formula }) => formula?.endsWith(", corrected"))) return "edges corrected before the fit";
   if (corrected.length === 0) return "";
   const amounts = [...new Set(corrected.map(({ added, decimals }) => `${added < 0 ? "−" : "+"}${Math.abs(added).toFixed(decimals)}`))];
   return `read ${corrected.map(({ text }) => text).join(" – ")}, corrected by ${amounts.join(" and ")}`;
 }
 
+const isDescribedDetail = (detail: ReadingDetail): detail is DescribedDetail => isDescribed(detail.kind);
+const derivesIndex: ReadonlySet<ReadingDetail["kind"]> = new Set(["reflectivity", "brewster", "realDepth"]);
+
+/** "nω 1.7689(6)  nε 1.7605(7)", or the two ends where one facet leaves the middle open. */
+function rotationIndices({ values }: Told): string {
+  const names = { n: "n", omega: "nω", epsilon: "nε", alpha: "nα", beta: "nβ", gamma: "nγ" } as const;
+  const own = Object.entries(names).flatMap(([name, symbol]) => values.filter((value) => value.name === name).map((value) => `${symbol} ${withUncertainty(value, 4)}`));
+  if (own.length > 0) return own.join(", ");
+  const [low, high] = [values.find(({ name }) => name === "low"), values.find(({ name }) => name === "high")];
+  return low && high ? `${withUncertainty(low, 4)} to ${withUncertainty(high, 4)}` : "";
+}
+
 /** Whether a value is digits, to be set in figures, or words. */
-export const isFigures = (valueText: string): boolean => /^\D?\d/.test(valueText);
+export const isFigures = (valueText: string): boolean => /^(\D?|n[ωεαβγ]? )\d/.test(valueText);
 
 /** What was seen beside the value, in words. */
 export function readingSeenText({ detail, values }: Told): string {
   const typed = (name: ReadingValueName) => typedDecimal(values.find((value) => value.name === name)?.typedText ?? "");
+  if (isDescribedDetail(detail)) {
+    const { headline, seen } = describedWords(detail, values);
+    return derivesIndex.has(detail.kind) ? [headline, seen].filter(Boolean).join(", ") : seen;
+  }
   switch (detail.kind) {
+    case "rotation": {
+      const { facetCount, positionCount } = rotationPositions(detail.rows);
+      const sign = detail.sign === "+" ? "positive" : detail.sign === "-" ? "negative" : "";
+      const found = detail.character === "undetermined" ? "character left open" : [detail.character, sign].filter(Boolean).join(" ");
+      return `${found}; ${positionCount} positions${facetCount > 1 ? ` on ${facetCount} facets` : ""}`;
+    }
     case "refractometer":
       return detail.edges === "one" ? "one edge" : detail.isRotated ? "two edges, extremes of a rotation" : "two edges, one position";
     case "spot":
@@ -74,7 +104,8 @@ export function readingSeenText({ detail, values }: Told): string {
     }
     case "density": {
       if (values.length === 0) return "";
-      return `${typed("massAirCt")} ct in air, ${typed("massLiquidCt")} ct ${detail.method === "suspended" ? "in water" : "gained by the beaker"}`;
+      const notes = weighingNotes({ detail, values });
+      return [`${typed("massAirCt")} ct in air, ${typed("massLiquidCt")} ct ${detail.method === "suspended" ? "in water" : "gained by the beaker"}`, notes?.spread].filter(Boolean).join("; ");
     }
     case "free":
       return detail.text;
@@ -89,6 +120,8 @@ export function readingConditions({ detail, values }: Told): string {
     const tempC = values.find(({ name }) => name === "tempC")?.typedText;
     return [weighingMethodNames[detail.method].split(",")[0], tempC ? `${typedDecimal(tempC)} °C` : ""].filter(Boolean).join(", ");
   }
+  if (isDescribedDetail(detail)) return describedWords(detail, values).conditions;
+  if (detail.kind === "rotation") return detail.light === "sodium" ? "Na" : lightNames[detail.light].split(",")[0]!.toLowerCase();
   if (detail.kind === "dimensions") return detail.shape === "round" ? "round" : "";
   return "facet" in detail ? seenAt(detail) : "";
 }

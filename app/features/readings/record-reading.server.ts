@@ -4,8 +4,10 @@ import { instruments, itemConsents, items, observations, observationValues, seco
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import { decimalPlaces } from "#app/domain/decimal.ts";
+import { impliedIndex } from "#app/domain/implied-index.ts";
 import type { Id, InstrumentId, ObservationId, SecondCheckId } from "#app/domain/ids.ts";
-import { consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
+import type { ConsentCode } from "#app/domain/consent-code.ts";
+import { aboutTest, consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
 import { examinationStateNames } from "#app/domain/stone-state.ts";
 import { recordAudit } from "#app/features/audit/record-audit.server.ts";
 import { outOfCheck } from "#app/features/instruments/check-standing.ts";
@@ -14,8 +16,10 @@ import { instrumentStanding } from "#app/features/instruments/instrument-standin
 import type { LabContext } from "#app/features/lab-context.ts";
 import { requireRole } from "#app/features/require-role.ts";
 import { moveExamination } from "#app/features/stones/move-examination.server.ts";
-import { composeReading, type ComposedReading } from "./compose-reading.ts";
+import { composeAnyReading } from "./compose-any-reading.ts";
+import type { ComposedReading } from "./compose-reading.ts";
 import type { ReadingDraft } from "./reading-draft.ts";
+import { observedAt } from "./observed-at.ts";
 import { readingWarnings } from "./reading-warnings.ts";
 
 export type RecordReading = Readonly<{
@@ -27,6 +31,8 @@ export type RecordReading = Readonly<{
   /** The observer had no candidates in view; in a second check they never have. */
   areCandidatesHidden: boolean;
   draft: ReadingDraft;
+  /** When the reading was made by the clock of the device that kept it, where it waited for the line; null: now. */
+  madeAt?: Date | null;
   /** The actor's own second check, begun and not compared yet, instead of the examination. */
   isForSecondCheck?: boolean;
 }>;
@@ -50,19 +56,20 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     if (!stone) throw new AppError("not_found", "There is no such stone.");
 
     const [repeat] = await tx
-      .select({ sequence: observations.sequence, stoneId: observations.stoneId, observerId: observations.observerId })
+      .select({ id: observations.id, sequence: observations.sequence, stoneId: observations.stoneId, observerId: observations.observerId, kind: observations.kind })
       .from(observations)
       .where(and(eq(observations.laboratoryId, laboratoryId), eq(observations.requestId, requestId)));
     if (repeat) {
-      if (repeat.stoneId === stone.id && repeat.observerId === actorId) return { sequence: repeat.sequence, warnings: [] };
+      if (repeat.stoneId === stone.id && repeat.observerId === actorId && (await saysTheSame(scope, repeat, draft))) return { sequence: repeat.sequence, warnings: [] };
       throw new AppError("conflict", "This form was sent for another reading before. Open the page anew and send it again.");
     }
 
     const secondCheckId = await settleExamination(scope, { stone, isForSecondCheck: input.isForSecondCheck ?? false });
     if (stone.goodsState === "released") throw new AppError("conflict", "These goods have been released: nothing more can be read from them.");
     if (draft.quality !== "noResult") await requireConsent(scope, { kind: draft.kind, itemId: stone.itemId, isMounted: stone.isMounted });
-    const { instrument, standing } = await findInstrument(scope, input);
-    const { reading, problems } = composeReading(draft, instrument && { ...instrument, correction: standing?.correction });
+    const madeAt = observedAt({ madeAt: input.madeAt ?? null, now });
+    const { instrument, standing } = await findInstrument(scope, input, madeAt);
+    const { reading, problems } = composeAnyReading(draft, instrument && { ...instrument, correction: standing?.correction });
     if (!reading) throw new AppError("invalid_input", Object.values(problems)[0]?.[0] ?? "This reading is not complete.", { fieldErrors: problems });
 
     const [counted] = await tx
@@ -81,9 +88,9 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
       secondCheckId,
       instrumentId: instrument?.id ?? null,
       instrumentCheckId: standing?.passed?.id ?? null,
-      instrumentCorrectionId: reading.values.some(({ rawValue }) => typeof rawValue === "number") ? (standing?.correction?.id ?? null) : null,
+      instrumentCorrectionId: isCorrected(reading) ? (standing?.correction?.id ?? null) : null,
       observerId: actorId,
-      observedAt: now,
+      observedAt: madeAt,
       recordedAt: now,
       detail: reading.detail,
       quality: reading.quality,
@@ -96,6 +103,27 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     await recordAudit(scope, { action: "reading.recorded", subject: { kind: "stone", id: stone.id }, detail: { sequence, kind: reading.detail.kind } });
     return { sequence, warnings: readingWarnings({ reading, instrument, outOfCheck: instrument && standing ? outOfCheckOf(ctx, instrument, standing) : null, earlierWeightText: secondCheckId === null ? stone.weightText : "" }) };
   });
+}
+
+/** The same form once more, not another reading under its id: by its test and the digits as typed. */
+async function saysTheSame({ db, laboratoryId }: LabContext, { id, kind }: { id: ObservationId; kind: ObservationKind }, draft: ReadingDraft): Promise<boolean> {
+  if (kind !== draft.kind) return false;
+  const kept = await db
+    .select({ typedText: observationValues.typedText })
+    .from(observationValues)
+    .where(and(eq(observationValues.laboratoryId, laboratoryId), eq(observationValues.observationId, id), isNull(observationValues.formula)));
+  const typed = new Set(textsOf(draft).flatMap((text) => [text.trim(), impliedIndex(text.trim())]));
+  return kept.every(({ typedText }) => typed.has(typedText));
+}
+
+function textsOf(value: unknown): string[] {
+  if (typeof value === "string") return [value];
+  return value !== null && typeof value === "object" ? Object.values(value).flatMap(textsOf) : [];
+}
+
+/** A correction went into its figures, or into the edges that its fit was made from. */
+function isCorrected({ values }: ComposedReading): boolean {
+  return values.some(({ rawValue, formula }) => typeof rawValue === "number" || formula?.endsWith(", corrected"));
 }
 
 type LockedStone = { id: Id<"stone">; state: keyof typeof examinationStateNames; examinerId: Id<"user"> | null };
@@ -135,20 +163,28 @@ async function requireConsent(ctx: LabContext, { kind, itemId, isMounted }: { ki
   if (kind === "density" && (isMounted || isStrung)) throw refusal(`A ${isStrung ? "strung" : "mounted"} stone is not weighed in water: the weight would be that of everything together. Record “No reading”, because the mount blocks it.`);
   if (kind === "weight" && (isMounted || isStrung)) throw refusal(`A ${isStrung ? "strung" : "mounted"} stone cannot be weighed by itself. Record “No reading”, because the mount blocks it.`);
   if (code && !item?.isGiven) {
-    const what = code === "hydrostatic" ? "weighing in water" : "contact liquid on a facet";
-    throw refusal(`The client has not agreed to ${what}. Record “No reading”, consent refused, or ask the client first.`);
+    throw refusal(`The client has not agreed to ${consentWords[code] ?? "this test"}. Record “No reading”, consent refused, or ask the client first.`);
   }
 }
+
+const consentWords: Partial<Record<ConsentCode, string>> = {
+  contactLiquid: "contact liquid on a facet",
+  hydrostatic: "weighing in water",
+  ultraviolet: "ultraviolet light",
+  immersionLiquid: "immersion in a liquid",
+  heavyLiquid: "heavy liquids",
+  thermalProbe: "the thermal probe",
+};
 
 function refusal(message: string): AppError {
   return new AppError("invalid_input", message, { fieldErrors: { quality: [message] } });
 }
 
-async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordReading) {
+async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordReading, madeAt: Date) {
   const kind = instrumentKindFor[draft.kind];
   const wrong = (message: string) => new AppError("invalid_input", message, { fieldErrors: { instrument: [message] } });
   if (instrumentId === null) {
-    if (kind === null || draft.quality === "noResult") return { instrument: null, standing: null };
+    if (!aboutTest(draft.kind).needsInstrument || draft.quality === "noResult") return { instrument: null, standing: null };
     throw wrong("Choose the instrument that showed it.");
   }
   const { db, laboratoryId } = ctx;
@@ -158,7 +194,7 @@ async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordRe
   if (instrument.status === "outOfService" && draft.quality !== "noResult") {
     throw wrong(`${instrument.name} is out of service${instrument.statusReason ? `: ${instrument.statusReason}` : ""}. Choose another.`);
   }
-  return { instrument, standing: await instrumentStanding(ctx, instrument) };
+  return { instrument, standing: await instrumentStanding(ctx, instrument, madeAt) };
 }
 
 type Found = Awaited<ReturnType<typeof findInstrument>>;

@@ -3,18 +3,20 @@ import { constraintKind } from "#app/db/errors.server.ts";
 import { inTransaction } from "#app/db/in-transaction.server.ts";
 import { observations, observationStrikes, secondChecks, stones } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
+import type { Id } from "#app/domain/ids.ts";
 import { examinationStateNames } from "#app/domain/stone-state.ts";
 import { recordAudit } from "#app/features/audit/record-audit.server.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import { requireRole } from "#app/features/require-role.ts";
 
-export type StrikeReading = { stoneCode: string; sequence: number; reason: string };
+/** A reading is named by its number, or, by a device that has not heard of its number yet, by the form that made it. */
+export type StrikeReading = { stoneCode: string; reason: string } & ({ sequence: number } | { requestId: Id<"observation"> });
 
 /**
  * Strikes a reading through: it stays legible, with who, when and why, and is left out of the ranking. Once. The
  * examiner and whoever made it may, while the examination is theirs to change; a check's own while it is not compared.
  */
-export async function strikeReading(ctx: LabContext, { stoneCode, sequence, reason }: StrikeReading): Promise<void> {
+export async function strikeReading(ctx: LabContext, { stoneCode, reason, ...named }: StrikeReading): Promise<void> {
   requireRole(ctx, "readings.record");
   const { laboratoryId, actorId, now } = ctx;
   try {
@@ -22,6 +24,7 @@ export async function strikeReading(ctx: LabContext, { stoneCode, sequence, reas
       const [found] = await tx
         .select({
           observationId: observations.id,
+          sequence: observations.sequence,
           observerId: observations.observerId,
           stoneId: stones.id,
           state: stones.examinationState,
@@ -30,7 +33,7 @@ export async function strikeReading(ctx: LabContext, { stoneCode, sequence, reas
           comparedAt: secondChecks.comparedAt,
         })
         .from(stones)
-        .innerJoin(observations, and(eq(observations.laboratoryId, stones.laboratoryId), eq(observations.stoneId, stones.id), eq(observations.sequence, sequence)))
+        .innerJoin(observations, and(eq(observations.laboratoryId, stones.laboratoryId), eq(observations.stoneId, stones.id), "sequence" in named ? eq(observations.sequence, named.sequence) : eq(observations.requestId, named.requestId)))
         .leftJoin(secondChecks, and(eq(secondChecks.laboratoryId, observations.laboratoryId), eq(secondChecks.id, observations.secondCheckId)))
         .where(and(eq(stones.laboratoryId, laboratoryId), eq(stones.code, stoneCode)))
         .for("update");
@@ -43,9 +46,15 @@ export async function strikeReading(ctx: LabContext, { stoneCode, sequence, reas
         if (found.observerId !== actorId && found.examinerId !== actorId) throw new AppError("forbidden", "Only the examiner of this stone or whoever made the reading may strike it.");
         if (state !== "examining" && state !== "returned") throw new AppError("conflict", `This stone stands at “${examinationStateNames[state]}”: its readings stay as they are.`);
       }
+      const [earlier] = await tx
+        .select({ reason: observationStrikes.reason, struckBy: observationStrikes.struckBy })
+        .from(observationStrikes)
+        .where(and(eq(observationStrikes.laboratoryId, laboratoryId), eq(observationStrikes.observationId, found.observationId)));
+      // The same words once more, from a device that did not hear the answer.
+      if (earlier && earlier.struckBy === actorId && earlier.reason === reason) return;
       await tx.insert(observationStrikes).values({ laboratoryId, observationId: found.observationId, reason, struckAt: now, struckBy: actorId });
       await tx.update(stones).set({ version: sql`${stones.version} + 1` }).where(and(eq(stones.laboratoryId, laboratoryId), eq(stones.id, found.stoneId)));
-      await recordAudit({ ...ctx, db: tx }, { action: "reading.struck", subject: { kind: "stone", id: found.stoneId }, detail: { sequence }, reason });
+      await recordAudit({ ...ctx, db: tx }, { action: "reading.struck", subject: { kind: "stone", id: found.stoneId }, detail: { sequence: found.sequence }, reason });
     });
   } catch (error) {
     if (constraintKind(error) !== "duplicate") throw error;

@@ -1,6 +1,8 @@
 import { decimalPlaces } from "#app/domain/decimal.ts";
 import { formatWithUncertainty } from "#app/domain/format-uncertainty.ts";
-import { lightNames, type ReadingDetail, type ReadingValueName } from "#app/domain/reading.ts";
+import { isDescribed, type DescribedDetail } from "#app/domain/bench-tests/test-forms.ts";
+import { describedWords } from "#app/features/readings/described-words.ts";
+import { lightNames, observationKindNames, type ReadingDetail, type ReadingValueName } from "#app/domain/reading.ts";
 import type { ReportRow } from "#app/reports/report-view.ts";
 
 export type ReportedReading = Readonly<{
@@ -20,10 +22,11 @@ export function observationRows(readings: readonly ReportedReading[]): ReportRow
   };
   const polariscope = best("polariscope");
   const rows: Array<[string, Parts | undefined]> = [
-    ["Refractive index", refractiveIndex(best("refractometer"), polariscope) ?? critical(best("criticalAngle")) ?? spot(best("spot")) ?? overLimit(best("overLimit"))],
-    ["Birefringence", birefringence(best("refractometer"))],
+    ["Refractive index", rotation(best("rotation")) ?? refractiveIndex(best("refractometer"), polariscope) ?? critical(best("criticalAngle")) ?? spot(best("spot")) ?? coarse(best("brewster")) ?? coarse(best("reflectivity")) ?? coarse(best("realDepth")) ?? overLimit(best("overLimit"))],
+    ["Birefringence", birefringence(best("rotation")) ?? birefringence(best("refractometer"))],
     ["Optic character", polariscope && [{ text: character(polariscope.detail) }]],
     ["Specific gravity", density(best("density"))],
+    ...seenRows(readings, best),
     ...readings.filter(({ detail, quality }) => detail.kind === "free" && quality !== "noResult").map(({ detail }): [string, Parts] => ["Observed", [{ text: detail.kind === "free" ? detail.text : "" }]]),
     ...noReadings(readings),
   ];
@@ -48,6 +51,43 @@ function refractiveIndex(reading: ReportedReading | undefined, polariscope: Repo
     return [{ text: `nω ${number(omega)}`, isMono: true }, { text: `nε ${number(epsilon)}`, isMono: true }, conditions];
   }
   return [{ text: `${number(low)} – ${number(high)}`, isMono: true }, ...(reading.detail.isRotated ? [] : [{ text: "one position only" }]), conditions];
+}
+
+/** By a run over a half turn: each index of the crystal, or both ends where one facet leaves the middle open. */
+function rotation(reading: ReportedReading | undefined): Parts | undefined {
+  if (reading?.detail.kind !== "rotation") return undefined;
+  const names = [["n", "n"], ["omega", "nω"], ["epsilon", "nε"], ["alpha", "nα"], ["beta", "nβ"], ["gamma", "nγ"]] as const;
+  const own = names.flatMap(([name, symbol]) => {
+    const value = reading.values.get(name);
+    return value ? [{ text: `${symbol} ${number(value)}`, isMono: true }] : [];
+  });
+  const [low, high] = [reading.values.get("low"), reading.values.get("high")];
+  const parts = own.length > 0 ? own : low && high ? [{ text: `${number(low)} – ${number(high)}`, isMono: true }] : [];
+  return parts.length > 0 ? [...parts, { text: `rotation run, ${lightNames[reading.detail.light]}` }] : undefined;
+}
+
+const coarseWords = { brewster: "by Brewster angle", reflectivity: "by reflectance", realDepth: "by real and apparent depth" } as const;
+
+function coarse(reading: ReportedReading | undefined): Parts | undefined {
+  const n = reading?.values.get("n");
+  return reading && n && [{ text: `n ${number(n)}`, isMono: true }, { text: coarseWords[reading.detail.kind as keyof typeof coarseWords] }];
+}
+
+const seenLabels = [["dichroscope", "Pleochroism"], ["spectroscope", "Spectrum"], ["colourFilter", "Colour filter"], ["thermalProbe", "Thermal probe"], ["conductivity", "Conductivity"], ["magnet", "Magnet"], ["immersion", "Immersion"], ["magnification", "Magnification"]] as const;
+
+/** What was looked at, in the words of its form; both lamps have a row of their own. */
+function seenRows(readings: readonly ReportedReading[], best: (kind: DescribedDetail["kind"]) => ReportedReading | undefined): Array<[string, Parts]> {
+  const told = (label: string, reading: ReportedReading | undefined): Array<[string, Parts]> => {
+    if (!reading || !isDescribed(reading.detail.kind)) return [];
+    const { headline, seen, conditions } = describedWords(reading.detail as DescribedDetail, [...reading.values].map(([name, value]) => ({ name, unit: "1", formula: null, ...value })));
+    return [[label, [{ text: [headline || (label === "Spectrum" ? "no lines seen" : ""), seen, conditions].filter(Boolean).join(", ") }]]];
+  };
+  const lamp = (wave: string) => readings.findLast(({ detail, quality }) => detail.kind === "ultraviolet" && detail.wave === wave && quality !== "noResult");
+  return [
+    ...told("Fluorescence", lamp("longWave")),
+    ...told("Fluorescence", lamp("shortWave")),
+    ...seenLabels.flatMap(([kind, label]) => told(label, best(kind))),
+  ];
 }
 
 function critical(reading: ReportedReading | undefined): Parts | undefined {
@@ -95,7 +135,7 @@ const kindLabels: Partial<Record<ReadingDetail["kind"], string>> = { refractomet
 
 /** Tests that gave no reading, with the reason: a blank would hide that they were tried. */
 function noReadings(readings: readonly ReportedReading[]): Array<[string, Parts]> {
-  return readings.filter(({ quality }) => quality === "noResult").map(({ detail, noResultReason }) => [kindLabels[detail.kind] ?? "Observed", [{ text: `no reading: ${noResultReason}` }]]);
+  return readings.filter(({ quality }) => quality === "noResult").map(({ detail, noResultReason }) => [kindLabels[detail.kind] ?? (detail.kind === "free" ? "Observed" : observationKindNames[detail.kind]), [{ text: `no reading: ${noResultReason}` }]]);
 }
 
 function number({ value, standardUncertainty }: { value: number; standardUncertainty: number | null }): string {

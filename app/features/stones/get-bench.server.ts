@@ -1,11 +1,12 @@
 import { and, eq, sql } from "drizzle-orm";
-import { clients, items, secondChecks, stones, takeIns, users, type InstrumentKind } from "#app/db/schema/index.ts";
+import { clients, items, secondChecks, stones, takeIns, users } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import type { Nature } from "#app/domain/conclusion.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import type { Id } from "#app/domain/ids.ts";
 import { scaleUnitsOf, type ScaleUnit } from "#app/domain/instrument-scale.ts";
+import type { InstrumentKind } from "#app/domain/instrument-kind.ts";
 import { isAllowed } from "#app/domain/permissions.ts";
 import { shortRef } from "#app/domain/short-ref.ts";
 import type { AppliedCorrection } from "#app/features/instruments/apply-correction.ts";

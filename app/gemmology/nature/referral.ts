@@ -37,9 +37,11 @@ export function beyondBench(speciesId: string | null): readonly string[] {
 /**
  * Why a stone should go to an outside laboratory, where the client agrees to it; empty where no rule asks for it.
  *
+ * @param variety as it was named, "" for none; null while nobody has named it: then it may be any of its species
+ *
  * Source: the project's workflow, §1.7, referral triggers.
  */
-export function referralReasons({ speciesId, variety, hasConflict }: { speciesId: string | null; variety: string; hasConflict: boolean }): string[] {
-  const bySpecies = referred.filter(({ speciesIds, when }) => speciesId !== null && speciesIds.includes(speciesId) && when.test(variety || " ")).map(({ because }) => because);
+export function referralReasons({ speciesId, variety, hasConflict }: { speciesId: string | null; variety: string | null; hasConflict: boolean }): string[] {
+  const bySpecies = referred.filter(({ speciesIds, when }) => speciesId !== null && speciesIds.includes(speciesId) && (variety === null || when.test(variety || " "))).map(({ because }) => because);
   return [...bySpecies, ...(hasConflict ? ["the findings contradict each other"] : [])];
 }

@@ -3,7 +3,7 @@ import { compareIds } from "../ranking/compare-ids.ts";
 import { termsOf } from "../ranking/terms-of.ts";
 import { speciesSpan } from "../species/species-span.ts";
 import type { SpeciesNode, SpeciesTable } from "../species/species-table.ts";
-import type { BenchTest, BenchTestId, StoneAtBench } from "./bench-test.ts";
+import type { BenchTest, BenchTestId, Likely, StoneAtBench } from "./bench-test.ts";
 import { benchTests } from "./bench-tests.ts";
 import { expectedInformation } from "./expected-information.ts";
 
@@ -56,14 +56,14 @@ export function nextTests(candidates: ReadonlyArray<{ speciesId: string; probabi
     .slice(0, mostHypotheses);
   if (hypotheses.length < 2) return { recommended: [], vetoed: [] };
 
-  const spans = spansOf(hypotheses.map(({ node }) => node));
+  const likely = likelyOf(hypotheses.map(({ node }) => node));
   const recommended: NextTest[] = [];
   const vetoed: Vetoed[] = [];
   for (const test of benchTests) {
     if (setting.done.has(test.id) || !setting.offered.has(test.id)) continue;
-    const pieces = test.outcomes(setting, spans);
+    const pieces = test.outcomes(setting, likely);
     if (pieces.length === 0) continue;
-    const { bits, settles } = judge(pieces, hypotheses);
+    const { bits, settles } = judge(pieces, hypotheses, test.sizeOf);
     const worth = bits - bitsPerMinute * test.minutes;
     if (worth < leastWorth) continue;
     const because = setting.barred.get(test.id) ?? harmOf(test, hypotheses);
@@ -76,11 +76,11 @@ export function nextTests(candidates: ReadonlyArray<{ speciesId: string; probabi
 
 type Hypothesis = Readonly<{ node: SpeciesNode; probability: number }>;
 
-function judge(pieces: ReturnType<BenchTest["outcomes"]>, hypotheses: readonly Hypothesis[]): { bits: number; settles: string } {
+function judge(pieces: ReturnType<BenchTest["outcomes"]>, hypotheses: readonly Hypothesis[], sizeOf: NonNullable<BenchTest["sizeOf"]> = () => 1): { bits: number; settles: string } {
   const weights = hypotheses.map(({ probability }) => probability);
   const likelihoods = pieces.map((outcomes) => {
-    const terms = outcomes.map((evidence) => termsOf(evidence));
-    return hypotheses.map(({ node }) => terms.map((each) => Math.exp(logLikelihood(node, each))));
+    const prepared = outcomes.map((evidence) => ({ terms: termsOf(evidence), size: sizeOf(evidence) }));
+    return hypotheses.map(({ node }) => prepared.map(({ terms, size }) => size * Math.exp(logLikelihood(node, terms))));
   });
   // Pieces are read apart: together they tell at most the sum, and no more than there is to tell.
   const entropy = entropyOf(weights);
@@ -113,11 +113,11 @@ function harmedShare({ forms }: SpeciesNode, test: NonNullable<BenchTest["harms"
   return forms.reduce((sum, { share, harmedBy }) => (harmedBy.includes(test) ? sum + share : sum), 0);
 }
 
-function spansOf(nodes: readonly SpeciesNode[]): { index: readonly [number, number]; sg: readonly [number, number] } {
+function likelyOf(nodes: readonly SpeciesNode[]): Likely {
   const spans = nodes.map(({ forms }) => speciesSpan(forms));
   const hull = (of: ReadonlyArray<readonly [number, number] | null>, otherwise: readonly [number, number]) => {
     const known = of.filter((each) => each !== null);
     return known.length === 0 ? otherwise : ([Math.min(...known.map(([low]) => low)), Math.max(...known.map(([, high]) => high))] as const);
   };
-  return { index: hull(spans.map(({ index }) => index), [1.4, 1.8]), sg: hull(spans.map(({ sg }) => sg), [2, 5]) };
+  return { index: hull(spans.map(({ index }) => index), [1.4, 1.8]), sg: hull(spans.map(({ sg }) => sg), [2, 5]), forms: nodes.flatMap(({ forms }) => forms) };
 }

@@ -1,4 +1,4 @@
-import { fluorescenceStrengths, magneticResponses, opticCharacters, strengths, type Evidence } from "./evidence.ts";
+import { estimateWays, fluorescenceStrengths, magneticResponses, opticCharacters, readingGrades, strengths, type Evidence } from "./evidence.ts";
 
 export type EvidenceProblem = Readonly<{ path: string; message: string }>;
 export type ParsedEvidence = { ok: true; evidence: Evidence } | { ok: false; errors: EvidenceProblem[] };
@@ -64,18 +64,36 @@ const required = (check: Check) => ({ check, isRequired: true });
 const optional = (check: Check) => ({ check });
 
 const index = number(1, 4);
+const graded = { quality: optional(oneOf(readingGrades)) };
+/** The named fields, where they are numbers, must not fall. */
+function rising(...keys: readonly string[]): Check {
+  return (value, path, errors) => {
+    const found = keys.map((key) => (value as Record<string, unknown>)[key]).filter((each) => typeof each === "number");
+    if (found.some((each, at) => at > 0 && each < found[at - 1]!)) errors.push({ path: at(path, keys[0]!), message: keys.length > 2 ? `${keys.join(", ")} must not fall` : `must not be above the ${keys[1]} ${keys[1] === "high" ? "edge" : "value"}` });
+  };
+}
+const indices: Check = (value, path, errors) => {
+  const keys = typeof value === "object" && value !== null ? Object.keys(value) : [];
+  const named = [["n"], ["omega", "epsilon"], ["alpha", "beta", "gamma"]].find((names) => names.length === keys.length && names.every((name) => keys.includes(name)));
+  if (!named) return void errors.push({ path, message: "must be n, or omega and epsilon, or alpha, beta and gamma" });
+  object(Object.fromEntries(named.map((name) => [name, required(index)])), named.length === 3 ? rising("alpha", "beta", "gamma") : undefined)(value, path, errors);
+};
+const crystals: Check = (value, path, errors) => {
+  if (Array.isArray(value) && value.length === 0) errors.push({ path, message: "must hold at least one crystal" });
+  else list(object({ indices: required(indices), u: optional(uncertainty(0.5)), weight: optional(number(1e-6, 1e6)) }), 8)(value, path, errors);
+};
 const refractiveShapes: Record<string, Check> = {
-  edges: object({ kind: required(text), low: required(index), high: required(index), u: optional(uncertainty(0.5)), rotated: required(flag) }, (value, path, errors) => {
-    const { low, high } = value as { low?: unknown; high?: unknown };
-    if (typeof low === "number" && typeof high === "number" && low > high) errors.push({ path: at(path, "low"), message: "must not be above the high edge" });
-  }),
-  single: object({ kind: required(text), n: required(index), u: optional(uncertainty(0.5)) }),
-  spot: object({ kind: required(text), n: required(index), u: optional(uncertainty(0.5)) }),
-  criticalAngle: object({ kind: required(text), angleDeg: required(number(0, 90)), prismN: required(number(1.3, 4)), u: optional(uncertainty(10)) }, (value, path, errors) => {
+  edges: object({ kind: required(text), low: required(index), high: required(index), u: optional(uncertainty(0.5)), rotated: required(flag), ...graded }, rising("low", "high")),
+  single: object({ kind: required(text), n: required(index), u: optional(uncertainty(0.5)), ...graded }),
+  spot: object({ kind: required(text), n: required(index), u: optional(uncertainty(0.5)), ...graded }),
+  interval: object({ kind: required(text), low: required(index), high: required(index), u: optional(uncertainty(0.5)), ...graded }, rising("low", "high")),
+  criticalAngle: object({ kind: required(text), angleDeg: required(number(0, 90)), prismN: required(number(1.3, 4)), u: optional(uncertainty(10)), ...graded }, (value, path, errors) => {
     const { angleDeg, prismN } = value as { angleDeg?: unknown; prismN?: unknown };
     if (typeof angleDeg === "number" && typeof prismN === "number" && prismN * Math.sin((angleDeg * Math.PI) / 180) < 1) errors.push({ path: at(path, "angleDeg"), message: "gives an index below 1 with this prism" });
   }),
-  overLimit: object({ kind: required(text), limit: required(number(1.3, 4)) }),
+  overLimit: object({ kind: required(text), limit: required(number(1.3, 4)), ...graded }),
+  rotation: object({ kind: required(text), solutions: required(crystals), ...graded }),
+  estimate: object({ kind: required(text), n: required(index), u: required(uncertainty(1)), by: required(oneOf(estimateWays)), ...graded }),
 };
 const refractive: Check = (value, path, errors) => {
   const kind = typeof value === "object" && value !== null ? (value as { kind?: unknown }).kind : undefined;
@@ -83,7 +101,8 @@ const refractive: Check = (value, path, errors) => {
   if (!check) return void errors.push({ path: at(path, "kind"), message: `must be one of: ${Object.keys(refractiveShapes).join(", ")}` });
   check(value, path, errors);
 };
-const measured = (low: number, high: number, mostU: number) => object({ value: required(number(low, high)), u: optional(uncertainty(mostU)) });
+const measured = (low: number, high: number, mostU: number) => object({ value: required(number(low, high)), u: optional(uncertainty(mostU)), ...graded });
+const liquid = object({ behaviour: required(oneOf(["floats", "suspended", "sinks"])), liquidSg: required(number(0.7, 5)), uLiquidSg: optional(uncertainty(1)) });
 const fluorescence = object({ strength: required(oneOf(fluorescenceStrengths)), colour: optional(text) });
 
 const evidenceShape: Shape = {
@@ -95,12 +114,13 @@ const evidenceShape: Shape = {
   opticCharacter: optional(oneOf(opticCharacters)),
   opticSign: optional(oneOf(["+", "-"])),
   sg: optional(measured(0.5, 25, 10)),
+  heavyLiquids: optional(list(liquid, 20)),
   colour: optional(list(text, 20)),
   transparency: optional(text),
   lustre: optional(text),
   pleochroism: optional(object({ strength: required(oneOf(strengths)), colours: optional(list(text, 10)) })),
   fluorescence: optional(object({ longWave: optional(fluorescence), shortWave: optional(fluorescence) })),
-  absorption: optional(list(object({ nm: required(number(350, 800)), kind: required(oneOf(["line", "band"])) }), 50)),
+  absorption: optional(list(object({ nm: required(number(350, 800)), kind: required(oneOf(["line", "band"])), u: optional(uncertainty(50)) }), 50)),
   colourFilter: optional(text),
   phenomena: optional(list(text, 20)),
   thermal: optional(oneOf(["diamond-like", "inert"])),

@@ -22,6 +22,10 @@ export type Term = Readonly<{
   isIndex: boolean;
   /** The unit's name and the decimals to write it with; none for what is seen. */
   measure: Readonly<{ noun: string; decimals: number }> | null;
+  /** A reading that could not be taken well strains a species, and never contradicts it. */
+  cannotContradict?: boolean;
   /** What the observation says when nothing fits, for species that it contradicts. */
   contradiction: (form: SpeciesForm, score: Score) => string;
+  /** The reason in words, where the score alone does not give it. */
+  explain?: (form: SpeciesForm) => string;
 }>;

@@ -1,8 +1,10 @@
+import { betaShareOf } from "./beta-share.ts";
+import { colourMask } from "./colour-mask.ts";
 import { testHarm } from "./test-harm.ts";
-import type { LookalikeRow, NodeRow, Range, SpeciesRow, TabulatedCharacter } from "./species-row.ts";
-import type { Interval, Lookalike, SpeciesForm, SpeciesNode, SpeciesTable } from "./species-table.ts";
+import type { Absorption, Fluorescence, LookalikeRow, NodeRow, Range, SpeciesRow, TabulatedCharacter } from "./species-row.ts";
+import type { Glow, Interval, Lookalike, SpeciesForm, SpeciesNode, SpeciesTable, VarietySpectrum } from "./species-table.ts";
 
-/** Prior weight of a form by its prevalence 1 (collector's rarity) to 5 (everyday); a house rule, common practice. */
+/** Prior weight of a form by its prevalence 1 (collector's rarity) to 5 (everyday); a house rule, common practice. A species weighs what its forms weigh together. */
 const weightOfPrevalence: readonly number[] = [0, 0.015, 0.05, 0.15, 0.4, 1];
 /** Assembled pieces are recognised by their seam before they are measured, so few of them reach the readings; house value. */
 const compositeFactor = 0.25;
@@ -30,7 +32,7 @@ export function buildSpeciesTable({ version, rows, nodes, lookalikes }: { versio
 function nodeOf(node: NodeRow, rows: readonly SpeciesRow[]): SpeciesNode {
   const weights = rows.map(({ prevalence, kind }) => (weightOfPrevalence[prevalence] ?? 0.015) * (kind === "composite" ? compositeFactor : 1));
   const sum = weights.reduce((total, weight) => total + weight, 0);
-  return { id: node.id, name: node.name, weight: Math.max(...weights), forms: rows.map((row, index) => formOf(row, weights[index]! / sum)) };
+  return { id: node.id, name: node.name, weight: sum, forms: rows.map((row, index) => formOf(row, weights[index]! / sum)) };
 }
 
 /** Of the tests that can do harm, those that a bench offers at all. */
@@ -59,6 +61,7 @@ function formOf(row: SpeciesRow, share: number): SpeciesForm {
     highIndex: interval(high),
     spotIndex: interval(ri?.spot),
     birefringence: interval(row.birefringence),
+    betaShare: betaShareOf(row),
     sg: interval(row.sg),
     usual: {
       ...(low && { lowIndex: low.typ }),
@@ -71,15 +74,29 @@ function formOf(row: SpeciesRow, share: number): SpeciesForm {
     transparency: row.transparency,
     lustre: row.lustre,
     pleochroism: Math.max(0, ...(row.pleochroism ?? []).map(({ strength }) => strengths[strength])),
-    absorption: row.absorption.map(({ nm, kind, width_nm: width, strength }) => [nm, kind === "line" ? (width ?? 2) / 2 : (width ?? 40) / 2, strength] as const),
-    longWave: row.fluorescence.lw.map(({ strength }) => strength),
-    shortWave: row.fluorescence.sw.map(({ strength }) => strength),
+    absorption: spectraOf(row.absorption),
+    longWave: row.fluorescence.lw.map(glowOf),
+    shortWave: row.fluorescence.sw.map(glowOf),
     filterRed: row.colour_filter ? Object.values(row.colour_filter).some((look) => /red|pink/.test(look) && !/no red|not red/.test(look)) : null,
     thermal: row.thermal,
+    isMagnetic: /Fe|Mn/.test(row.formula ?? "") && row.formula !== "FeS2",
     phenomena: row.phenomena.map((phenomenon) => phenomenon.toLowerCase()),
     harmedBy: benchTests.filter((test) => harm[test] >= 1),
     isSeries: row.kind === "natural" && (seriesGroups.has(row.group) || seriesRows.has(row.id)),
   };
+}
+
+/** Spectra by colour variety; what every stone shows stands in each. */
+function spectraOf(absorption: readonly Absorption[]): VarietySpectrum[] {
+  const isCommon = ({ colour_variety: variety }: Absorption) => !variety || variety === "all";
+  const line = ({ nm, kind, width_nm: width, strength }: Absorption) => [nm, kind === "line" ? (width ?? 2) / 2 : (width ?? 40) / 2, strength] as const;
+  const varieties = [...new Set(absorption.filter((each) => !isCommon(each)).map(({ colour_variety: variety }) => variety!))];
+  if (varieties.length === 0) return absorption.length === 0 ? [] : [{ colours: 0, lines: absorption.map(line) }];
+  return varieties.map((variety) => ({ colours: colourMask(variety), lines: absorption.filter((each) => isCommon(each) || each.colour_variety === variety).map(line) }));
+}
+
+function glowOf({ strength, strength_min: least, colour }: Fluorescence): Glow {
+  return [least ?? strength, strength, colourMask(colour)];
 }
 
 /** ω and ε in order of size; a species whose sign changes keeps the wider sense of both. */

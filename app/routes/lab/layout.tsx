@@ -28,6 +28,8 @@ export function loader({ context, url }: Route.LoaderArgs) {
   return { laboratory: { slug: laboratory.slug, name: laboratory.name, timeZone: laboratory.timeZone }, person: { name: person.name, email: person.email }, roles, nav, search: url.searchParams.get("q") ?? "" };
 }
 
+export { keepsLayout as shouldRevalidate } from "#app/components/layout/line-state.ts";
+
 export default function LabLayout({ loaderData }: Route.ComponentProps) {
   const root = useRouteLoaderData<typeof rootLoader>("root");
   return (

@@ -1,18 +1,19 @@
 import { expect, test } from "vitest";
-import { composeReading, type ReadingInstrument } from "#app/features/readings/compose-reading.ts";
+import { composeReading, type QuickDraft } from "#app/features/readings/compose-reading.ts";
+import type { ReadingInstrument } from "#app/features/readings/reading-instrument.ts";
 import { evidenceFromReadings, type RankedReading } from "#app/features/readings/evidence-from-readings.ts";
-import { readingDraftFromForm, type ReadingDraft } from "#app/features/readings/reading-draft.ts";
+import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
 import { listReadings } from "#app/features/readings/list-readings.server.ts";
 import { recordReading } from "#app/features/readings/record-reading.server.ts";
 import { contradictingReadings, rankReadings } from "#app/features/identification/rank-readings.ts";
 import { rankStone } from "#app/features/identification/rank-stone.server.ts";
 import { loadSpeciesTable } from "#app/features/species/load-species-table.server.ts";
 import { parseEvidence } from "#app/gemmology/ranking/parse-evidence.ts";
-import { aBench, aReading, corundum } from "../../setup/bench-factory.ts";
+import { aBench, aForm, aReading, corundum } from "../../setup/bench-factory.ts";
 import { aLab } from "../../setup/factories.ts";
 
 const instrument: ReadingInstrument = { resolution: 0.001, standardUncertainty: null, upperLimit: 1.81, prismIndex: 1.88 };
-const composed = (draft: ReadingDraft): RankedReading => composeReading(draft, instrument).reading!;
+const composed = (draft: QuickDraft): RankedReading => composeReading(draft, instrument).reading!;
 const { table } = loadSpeciesTable();
 
 test("the ranking while typing is the ranking after saving", async () => {
@@ -20,8 +21,8 @@ test("the ranking while typing is the ranking after saving", async () => {
   const bench = await aBench(ctx);
   await recordReading(ctx, aReading(bench, corundum.polariscope));
   const saved = await listReadings(ctx, bench);
-  const form = new Map<string, string>([["kind", "refractometer"], ["quality", "good"], ["low", "1,762"], ["high", "1.770"], ["isRotated", "on"], ["facet", "table"], ["light", "sodium"]]);
-  const typed = composeReading(readingDraftFromForm(form), instrument).reading!;
+  const form = aForm({ kind: "refractometer", quality: "good", low: "1,762", high: "1.770", isRotated: "on", facet: "table", light: "sodium" });
+  const typed = composeReading(readingDraftFromForm(form) as QuickDraft, instrument).reading!;
   const inBrowser = rankReadings([...saved, { ...typed, sequence: null }], table);
   await recordReading(ctx, aReading(bench, { ...corundum.refractometer, low: "1,762" }));
   const onServer = (await rankStone(ctx, bench)).bench;
@@ -37,7 +38,7 @@ test("readings of a corundum become the evidence of one, as the interface takes 
   expect(parseEvidence(evidence)).toMatchObject({ ok: true });
 });
 
-test.each<[string, ReadingDraft, object]>([
+test.each<[string, QuickDraft, object]>([
   ["one edge", { ...corundum.refractometer, edges: "one", low: "1.718", high: "" }, { ri: [{ kind: "single", n: 1.718, u: 0.0015 }] }],
   ["two edges at one position", { ...corundum.refractometer, isRotated: false }, { ri: [{ kind: "edges", low: 1.762, high: 1.77, u: 0.0015, rotated: false }] }],
   ["a spot", { kind: "spot", quality: "good", method: "50/50", n: "1.54", facet: "dome", light: "white" }, { ri: [{ kind: "spot", n: 1.54, u: 0.006 }] }],
@@ -62,7 +63,7 @@ test("a poor reading counts with a wider uncertainty", () => {
 });
 
 test("the better look through the polariscope stands, then the one that says more, whatever the order", () => {
-  const [fair, good, figure] = [{ ...corundum.polariscope, quality: "fair", behaviour: "dark", figure: "notSought" }, { ...corundum.polariscope, figure: "none" }, corundum.polariscope].map((draft) => composed(draft as ReadingDraft));
+  const [fair, good, figure] = [{ ...corundum.polariscope, quality: "fair", behaviour: "dark", figure: "notSought" }, { ...corundum.polariscope, figure: "none" }, corundum.polariscope].map((draft) => composed(draft as QuickDraft));
   for (const readings of [[fair!, good!, figure!], [figure!, good!, fair!]]) expect(evidenceFromReadings(readings).opticCharacter).toBe("uniaxial");
   expect(evidenceFromReadings([good!, fair!]).opticCharacter).toBe("anisotropic");
 });

@@ -1,15 +1,16 @@
 import { expect, test } from "vitest";
-import { composeReading, type ReadingInstrument } from "#app/features/readings/compose-reading.ts";
-import { readingDraftFromForm, type ReadingDraft } from "#app/features/readings/reading-draft.ts";
-import { corundum } from "../../setup/bench-factory.ts";
+import { composeReading, type QuickDraft } from "#app/features/readings/compose-reading.ts";
+import type { ReadingInstrument } from "#app/features/readings/reading-instrument.ts";
+import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
+import { aForm, corundum } from "../../setup/bench-factory.ts";
 
 const instrument: ReadingInstrument = { resolution: 0.001, standardUncertainty: null, upperLimit: 1.81, prismIndex: 1.88 };
-const problems = (draft: ReadingDraft, on: ReadingInstrument | null = instrument) => composeReading(draft, on).problems;
+const problems = (draft: QuickDraft, on: ReadingInstrument | null = instrument) => composeReading(draft, on).problems;
 const { refractometer, density, weight, dimensions, polariscope, free } = corundum;
 const angle = { kind: "criticalAngle", quality: "good", angleDeg: "55.23", prismN: "1.88", facet: "table", light: "sodium" } as const;
 const long = "7".repeat(10_000);
 
-test.each<[string, ReadingDraft, string, RegExp]>([
+test.each<[string, QuickDraft, string, RegExp]>([
   ["an index of 0.5", { ...refractometer, low: "0.5" }, "low", /^The low edge lies between 1.3 and 2.1\.$/],
   ["a low edge above the high one", { ...refractometer, low: "1.770", high: "1.762" }, "high", /^The high edge \(1\.762\) lies below the low edge \(1\.770\)/],
   ["two equal edges", { ...refractometer, high: "1.762" }, "high", /One edge only/],
@@ -57,12 +58,12 @@ test("no reading needs no numbers and gives none", () => {
 });
 
 test("a beaker on the pan and a stone hung in water weigh the same density", () => {
-  const sg = (draft: ReadingDraft) => composeReading(draft, instrument).reading!.values.find(({ name }) => name === "sg")!.value;
+  const sg = (draft: QuickDraft) => composeReading(draft, instrument).reading!.values.find(({ name }) => name === "sg")!.value;
   expect(sg({ ...density, method: "beakerOnPan", massLiquidCt: "0.535" })).toBeCloseTo(sg(density), 2);
 });
 
 test("white light and a fair facet widen an edge's uncertainty; the laboratory's own study stands before the usual value", () => {
-  const u = (draft: Partial<typeof refractometer> | object, on = instrument) => composeReading({ ...refractometer, ...draft } as ReadingDraft, on).reading!.values[0]!.standardUncertainty;
+  const u = (draft: Partial<typeof refractometer> | object, on = instrument) => composeReading({ ...refractometer, ...draft } as QuickDraft, on).reading!.values[0]!.standardUncertainty;
   expect(u({})).toBe(0.0015);
   expect(u({ light: "white" })).toBe(0.003);
   expect(u({ quality: "fair" })).toBe(0.003);
@@ -70,7 +71,7 @@ test("white light and a fair facet widen an edge's uncertainty; the laboratory's
 });
 
 test("a form that is still being typed reads as a draft of the test that it shows", () => {
-  const form = new Map<string, string>([["kind", "refractometer"], ["quality", "good"], ["low", "1,76"], ["light", "nonsense"]]);
+  const form = aForm({ kind: "refractometer", quality: "good", low: "1,76", light: "nonsense" });
   expect(readingDraftFromForm(form)).toEqual({ kind: "refractometer", quality: "good", edges: "two", low: "1,76", high: "", isRotated: false, facet: "table", light: "sodium" });
-  expect(readingDraftFromForm(new Map([["kind", "polariscope"]]))).toMatchObject({ behaviour: "cannotTell", figure: "notSought" });
+  expect(readingDraftFromForm(aForm({ kind: "polariscope" }))).toMatchObject({ behaviour: "cannotTell", figure: "notSought" });
 });

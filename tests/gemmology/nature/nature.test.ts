@@ -24,6 +24,52 @@ test.each([
   expect(said(speciesId, text)).toContain(expected);
 });
 
+test.each([
+  ["corundum", "no curved striae, bubbles", []],
+  ["corundum", "Without curved striae or gas bubbles.", []],
+  ["corundum", "bubbles: none; curved striae not seen", []],
+  ["corundum", "no striae; curved striae in the pavilion", ["nature: synthetic, positive"]],
+  ["corundum", "no bubbles, but curved striae", ["nature: synthetic, positive"]],
+  ["corundum", "No silk. Curved striae.", ["nature: synthetic, positive"]],
+  ["corundum", "no curved striae through the table: curved striae through the girdle", ["nature: synthetic, positive"]],
+  ["glass", "no crystals within 0.5 mm of the bubbles", []],
+] as const)("“%s, %s”: a clause that denies one thing denies the rest of it, and no more", (speciesId, text, expected) => {
+  expect(said(speciesId, text)).toEqual(expected);
+});
+
+test.each([
+  ["opal", "blue and green colour flashes"],
+  ["opal", "broad flashes of red over a dark body"],
+  ["pearl", "seed pearls, strung"],
+  ["beryl", "seed-pearl surround"],
+  ["corundum", "two-phase inclusions with a gas bubble"],
+  ["spinel", "a liquid with a moving bubble"],
+  ["quartz", "needles join at 60°"],
+  ["quartz", "a seam of calcite"],
+] as const)("in %s, “%s” is evidence of nothing", (speciesId, text) => {
+  expect(said(speciesId, text)).toEqual([]);
+});
+
+test("each feature is known by its own name, as it is ticked", () => {
+  for (const { name, meanings, saysNothingOf } of features) {
+    const speciesId = meanings.flatMap(({ species }) => (species === "any" ? [] : species))[0] ?? "corundum";
+    const { findings, silent } = of(speciesId, name);
+    if (meanings.length > 0) expect(findings.map(({ feature }) => feature), name).toContain(name);
+    if (saysNothingOf) expect(silent.map(({ feature }) => feature), name).toContain(name);
+  }
+  expect(said("corundum", "Join of an assembled stone")).toEqual(["nature: composite, positive"]);
+  expect(said("corundum", "no silk, intact")).toEqual([]);
+});
+
+test("bubbles speak of a melt by themselves, of a filling within a fissure", () => {
+  expect(said("corundum", "two-phase inclusions, gas bubbles in a row")).toEqual(["nature: synthetic, indication"]);
+  expect(said("corundum", "flattened bubbles in a fissure")).toEqual(["treatment: fissures filled with glass or resin, indication"]);
+  expect(said("corundum", "an orange flash along a fracture")).toEqual(["treatment: fissures filled with glass or resin, positive"]);
+  expect(said("beryl", "Flash effect")).toEqual(["treatment: fissures filled with glass or resin, positive"]);
+  expect(said("beryl", "seeds at the girdle")).toEqual(["nature: synthetic, positive"]);
+  expect(said(null, "Seam at the girdle, bubbles in the glue plane")).toEqual(["nature: composite, positive"]);
+});
+
 test("a denial is no finding, and a feature says nothing of a species that it does not occur in", () => {
   expect(said("corundum", "no curved striae, no gas bubbles; not a flash effect")).toEqual([]);
   expect(said("quartz", "Curved striae")).toEqual([]);
@@ -40,7 +86,15 @@ test("proof of a synthetic beside a natural stone's feature is a conflict, and a
   expect(conflicts).toHaveLength(1);
   expect(referralReasons({ speciesId: "corundum", variety: "", hasConflict: true })).toEqual(["the findings contradict each other"]);
   expect(referralReasons({ speciesId: "corundum", variety: "ruby", hasConflict: false })).toHaveLength(1);
+  expect(referralReasons({ speciesId: "corundum", variety: "", hasConflict: false })).toEqual([]);
   expect(referralReasons({ speciesId: "quartz", variety: "citrine", hasConflict: false })).toEqual([]);
+});
+
+test("while no variety is named, the stone may be any of its species, and all its triggers are told", () => {
+  expect(referralReasons({ speciesId: "corundum", variety: null, hasConflict: false })[0]).toMatch(/ruby or sapphire/);
+  expect(referralReasons({ speciesId: "beryl", variety: null, hasConflict: false })[0]).toMatch(/emerald/);
+  expect(referralReasons({ speciesId: "quartz", variety: null, hasConflict: false })).toEqual([]);
+  expect(referralReasons({ speciesId: null, variety: null, hasConflict: false })).toEqual([]);
 });
 
 test("no constant is among the features, and every species named is in the table", () => {

@@ -34,9 +34,10 @@ import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
+import { spectrumViewOf } from "#app/web/spectrum-view.server.ts";
 import type { Route } from "./+types/second-check";
 
-export async function loader({ context, params, url }: Route.LoaderArgs) {
+export async function loader({ request, context, params, url }: Route.LoaderArgs) {
   const ctx = context.get(labContext);
   const bench = await orResponse(readable(ctx, params.stoneCode));
   const { laboratory } = ctx;
@@ -53,7 +54,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
       ...shared,
       stage: "own" as const,
       status,
-      own: { readings: presentReadings(own, laboratory.timeZone), instruments: bench.instruments, problem: ownReadingsProblem(own) ?? null, test: observationKinds.find((kind) => kind === url.searchParams.get("test")) ?? ("refractometer" as ObservationKind) },
+      own: { readings: presentReadings(own, laboratory.timeZone), instruments: bench.instruments, spectrum: { view: spectrumViewOf(request), candidates: [], taken: "" }, problem: ownReadingsProblem(own) ?? null, test: observationKinds.find((kind) => kind === url.searchParams.get("test")) ?? ("refractometer" as ObservationKind) },
       requestId: newRequestId(),
     };
   }
@@ -202,14 +203,14 @@ function StartForm({ requestId, lastResult }: { requestId: string; lastResult: L
 
 type OwnProps = Extract<Route.ComponentProps["loaderData"], { stage: "own" }>["own"] & { requestId: string; base: string; lastResult: LastResult };
 
-function OwnReadings({ readings, instruments, problem, test, requestId, base, lastResult }: OwnProps) {
+function OwnReadings({ readings, instruments, spectrum, problem, test, requestId, base, lastResult }: OwnProps) {
   const [form, fields] = useForm<{ ownSpecies: string; ownNature: string }>({ id: "compare", lastResult });
   return (
     <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_24rem]">
       <div className="grid min-w-0 gap-5">
         <Card title="New reading" note="yours alone until you compare">
           <TestChoice current={test} hrefOf={(kind) => `?test=${kind}`} />
-          <NewReading key={`${test}-${readings.length}`} {...{ kind: test, instruments, requestId, lastResult }} areCandidatesHidden />
+          <NewReading key={`${test}-${readings.length}`} {...{ kind: test, instruments, requestId, lastResult, spectrum }} areCandidatesHidden />
         </Card>
         <Card title="Your readings" note={`${readings.filter(({ strike }) => !strike).length} kept`}>
           <ReadingsTable readings={readings} strikeHref={(sequence) => `${base}/readings/${sequence}/strike`} canStrike={() => true} />

@@ -44,6 +44,35 @@ CREATE TABLE `recall_deeds` (
 	CONSTRAINT `recall_deeds_laboratory_id_observation_id_failed_check_id_pk` PRIMARY KEY(`laboratory_id`,`observation_id`,`failed_check_id`)
 );
 --> statement-breakpoint
+CREATE TABLE `parcel_rows` (
+	`laboratory_id` binary(16) NOT NULL,
+	`parcel_id` binary(16) NOT NULL,
+	`position` int NOT NULL,
+	`cells` json NOT NULL,
+	`ranking` json NOT NULL,
+	`stone_id` binary(16),
+	CONSTRAINT `parcel_rows_laboratory_id_parcel_id_position_pk` PRIMARY KEY(`laboratory_id`,`parcel_id`,`position`),
+	CONSTRAINT `parcel_rows_stone` UNIQUE(`laboratory_id`,`stone_id`)
+);
+--> statement-breakpoint
+CREATE TABLE `parcels` (
+	`laboratory_id` binary(16) NOT NULL,
+	`id` binary(16) NOT NULL,
+	`name` varchar(120) NOT NULL,
+	`item_id` binary(16),
+	`columns` json NOT NULL,
+	`water_temp_c` decimal(5,2),
+	`row_count` smallint NOT NULL,
+	`odd_count` smallint NOT NULL,
+	`main_species_id` varchar(60) character set ascii collate ascii_bin,
+	`main_name` varchar(120) NOT NULL,
+	`species_table_version` varchar(24) character set ascii collate ascii_bin NOT NULL,
+	`model_version` varchar(24) character set ascii collate ascii_bin NOT NULL,
+	`saved_at` datetime(3) NOT NULL,
+	`saved_by` binary(16) NOT NULL,
+	CONSTRAINT `parcels_laboratory_id_id_pk` PRIMARY KEY(`laboratory_id`,`id`)
+);
+--> statement-breakpoint
 ALTER TABLE `instrument_checks` MODIFY COLUMN `nominal_value` decimal(14,6);--> statement-breakpoint
 ALTER TABLE `instrument_checks` MODIFY COLUMN `reading_value` decimal(14,6);--> statement-breakpoint
 ALTER TABLE `instrument_checks` MODIFY COLUMN `reading_text` varchar(200) NOT NULL;--> statement-breakpoint
@@ -64,8 +93,15 @@ ALTER TABLE `reference_materials` ADD CONSTRAINT `reference_materials_laboratory
 ALTER TABLE `recall_deeds` ADD CONSTRAINT `recall_deeds_done_by_users_id_fk` FOREIGN KEY (`done_by`) REFERENCES `users`(`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `recall_deeds` ADD CONSTRAINT `recall_deeds_observation_fk` FOREIGN KEY (`laboratory_id`,`observation_id`) REFERENCES `observations`(`laboratory_id`,`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `recall_deeds` ADD CONSTRAINT `recall_deeds_check_fk` FOREIGN KEY (`laboratory_id`,`failed_check_id`) REFERENCES `instrument_checks`(`laboratory_id`,`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE `parcel_rows` ADD CONSTRAINT `parcel_rows_fk` FOREIGN KEY (`laboratory_id`,`parcel_id`) REFERENCES `parcels`(`laboratory_id`,`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE `parcel_rows` ADD CONSTRAINT `parcel_rows_stone_fk` FOREIGN KEY (`laboratory_id`,`stone_id`) REFERENCES `stones`(`laboratory_id`,`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE `parcels` ADD CONSTRAINT `parcels_laboratory_id_laboratories_id_fk` FOREIGN KEY (`laboratory_id`) REFERENCES `laboratories`(`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE `parcels` ADD CONSTRAINT `parcels_saved_by_users_id_fk` FOREIGN KEY (`saved_by`) REFERENCES `users`(`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE `parcels` ADD CONSTRAINT `parcels_item_fk` FOREIGN KEY (`laboratory_id`,`item_id`) REFERENCES `items`(`laboratory_id`,`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 CREATE INDEX `instrument_corrections_instrument` ON `instrument_corrections` (`laboratory_id`,`instrument_id`,`from_at`);--> statement-breakpoint
 CREATE INDEX `recall_deeds_done` ON `recall_deeds` (`laboratory_id`,`done_at`);--> statement-breakpoint
+CREATE INDEX `parcels_saved` ON `parcels` (`laboratory_id`,`saved_at`,`id`);--> statement-breakpoint
+CREATE INDEX `parcels_item` ON `parcels` (`laboratory_id`,`item_id`,`saved_at`);--> statement-breakpoint
 ALTER TABLE `instrument_checks` ADD CONSTRAINT `instrument_checks_reference_fk` FOREIGN KEY (`laboratory_id`,`reference_material_id`) REFERENCES `reference_materials`(`laboratory_id`,`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `instrument_checks` ADD CONSTRAINT `instrument_checks_correction_fk` FOREIGN KEY (`laboratory_id`,`correction_id`) REFERENCES `instrument_corrections`(`laboratory_id`,`id`) ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE `observations` ADD CONSTRAINT `observations_correction_fk` FOREIGN KEY (`laboratory_id`,`instrument_correction_id`) REFERENCES `instrument_corrections`(`laboratory_id`,`id`) ON DELETE no action ON UPDATE no action;

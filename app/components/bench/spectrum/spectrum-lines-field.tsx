@@ -1,0 +1,137 @@
+import { useCallback, useId, useRef, useState, type FormEvent } from "react";
+import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
+import { DrawnSpectrum } from "#app/components/charts/spectrum/drawn-spectrum.tsx";
+import { TextAreaField } from "#app/components/ui/text-field.tsx";
+import { spectrumLineWords } from "#app/domain/bench-tests/spectrum-line-words.ts";
+import { readSpectrumLines, type SpectrumLine } from "#app/domain/bench-tests/spectrum-lines.ts";
+import { writeSpectrumLine, writeSpectrumLines } from "#app/domain/bench-tests/write-spectrum-lines.ts";
+import type { AbsorbingSpecies } from "#app/features/species/absorption-lines.ts";
+import { usualSpectrumView, type SpectrumView } from "#app/gemmology/spectrum/spectrum-scale.ts";
+import { CandidateSpectra } from "./candidate-spectra.tsx";
+import { LineEditor } from "./line-editor.tsx";
+import { spectrumKeyHelp } from "./spectrum-keys.ts";
+import { SpectrumPad } from "./spectrum-pad.tsx";
+import { SpectrumViewChoice } from "./spectrum-view-choice.tsx";
+import { typeInto } from "./type-into.ts";
+
+type SpectrumLinesFieldProps = {
+  id: string;
+  name: string;
+  label?: string;
+  hint?: string;
+  errors?: readonly string[];
+  defaultValue?: string;
+  maxLength?: number;
+  placeholder?: string;
+  /** As this browser chose; see spectrum-view.server.ts. */
+  view?: SpectrumView;
+  onView?: (view: SpectrumView) => void;
+  /** Faintly above the spectrum; none where candidates are hidden. */
+  candidates?: readonly AbsorbingSpecies[];
+};
+
+/**
+ * Lines and bands of a spectrum: a field of words, which is what is sent, and the same drawn. Either changes the other.
+ * Without script the words alone are typed.
+ */
+export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, errors, defaultValue = "", maxLength = 500, placeholder, view: initialView = usualSpectrumView, onView, candidates = [] }: SpectrumLinesFieldProps) {
+  const isLive = useIsHydrated();
+  const field = useRef<HTMLTextAreaElement>(null);
+  const helpId = useId();
+  const [text, setText] = useState(defaultValue);
+  const [selected, setSelected] = useState<number | null>(null);
+  const [chosenView, setChosenView] = useState<SpectrumView | null>(null);
+  const view = chosenView ?? initialView;
+  // Somebody may have typed before script took over.
+  const attach = useCallback((element: HTMLTextAreaElement | null) => {
+    field.current = element;
+    if (element) setText(element.value);
+  }, []);
+  const { lines, problem } = readSpectrumLines(text);
+
+  const write = (changed: string) => field.current && typeInto(field.current, changed);
+  const add = (line: SpectrumLine) => {
+    const words = writeSpectrumLine(line);
+    const changed = text.trim() === "" ? words : `${text.trim().replace(/[,;]$/, "")}, ${words}`;
+    if (changed.length > maxLength) return;
+    write(changed);
+    const at = readSpectrumLines(changed).lines.findIndex(({ nm, kind }) => nm === line.nm && kind === line.kind);
+    setSelected(at >= 0 ? at : null);
+  };
+  const replace = (at: number, line: SpectrumLine | null) => {
+    const changed = writeSpectrumLines(lines.flatMap((one, index) => (index === at ? (line ?? []) : one)));
+    const { problem: refusal, lines: read } = readSpectrumLines(changed);
+    if (refusal !== null || changed.length > maxLength) return;
+    write(changed);
+    const moved = line ? read.findIndex(({ nm, kind, halfWidthNm }) => nm === line.nm && kind === line.kind && halfWidthNm === line.halfWidthNm) : -1;
+    setSelected(moved >= 0 ? moved : null);
+  };
+  const choose = (chosen: SpectrumView) => {
+    setChosenView(chosen);
+    onView?.(chosen);
+  };
+
+  const inHand = selected === null ? undefined : lines[selected];
+  return (
+    <div className="grid gap-3">
+      <TextAreaField
+        id={id}
+        name={name}
+        label={label}
+        unit="nm"
+        isRequired={false}
+        rows={2}
+        maxLength={maxLength}
+        placeholder={placeholder}
+        defaultValue={defaultValue}
+        hint={hint}
+        errors={errors}
+        ref={attach}
+        spellCheck={false}
+        autoComplete="off"
+        onInput={(event: FormEvent<HTMLTextAreaElement>) => {
+          setText(event.currentTarget.value);
+          setSelected(null);
+        }}
+      />
+      {isLive && problem !== null && text.trim() !== "" ? <p className="text-xs text-straw">{problem}</p> : null}
+      <CandidateSpectra species={candidates} view={view} />
+      {isLive ? (
+        <>
+          {problem === null ? (
+            <SpectrumPad id={`${id}-drawn`} lines={lines} view={view} selected={selected} onSelect={setSelected} onAdd={add} onChange={(at, line) => replace(at, line)} onRemove={(at) => replace(at, null)} describedBy={helpId} />
+          ) : (
+            <DrawnSpectrum lines={[]} view={view} heightPx={56} />
+          )}
+          {inHand && selected !== null ? <LineEditor line={inHand} onChange={(line) => replace(selected, line)} onRemove={() => replace(selected, null)} onClose={() => setSelected(null)} /> : null}
+          {lines.length > 0 ? (
+            <ul aria-label="Lines and bands" className="flex flex-wrap gap-1.5">
+              {lines.map((line, at) => (
+                <li key={`${line.nm}-${line.kind}-${at}`}>
+                  <button
+                    type="button"
+                    aria-pressed={at === selected}
+                    aria-label={spectrumLineWords(line)}
+                    onClick={() => setSelected(at === selected ? null : at)}
+                    className={`min-h-7 cursor-pointer rounded-full border px-2.5 font-mono text-xs pointer-coarse:min-h-11 ${at === selected ? "border-tint bg-tint-bg text-tint" : "border-rule-2 bg-paper text-ink-2"}`}
+                  >
+                    {writeSpectrumLine(line)}
+                  </button>
+                </li>
+              ))}
+            </ul>
+          ) : null}
+          <SpectrumViewChoice view={view} onView={choose} />
+          <p id={helpId} className="text-xs text-ink-3">
+            Tap a line, draw across a band. {spectrumKeyHelp}
+          </p>
+          <p aria-live="polite" className="sr-only">
+            {lines.length === 0 ? "" : `${lines.length} ${lines.length === 1 ? "line or band" : "lines and bands"}`}
+          </p>
+        </>
+      ) : (
+        <DrawnSpectrum lines={lines} view={view} heightPx={56} />
+      )}
+    </div>
+  );
+}

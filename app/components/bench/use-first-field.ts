@@ -1,0 +1,14 @@
+import { useEffect, type RefObject } from "react";
+import { useLocation } from "react-router";
+
+/** State of a navigation to a test that a key chose: its form is typed into at once. */
+export const typeAtOnce = { typeAtOnce: true } as const;
+
+/** Puts the focus into a form's first field when the test was chosen by a key; a finger would only get a keyboard in its way. */
+export function useFirstField(form: RefObject<HTMLFormElement | null>): void {
+  const { state, key } = useLocation();
+  const isByKey = (state as Partial<typeof typeAtOnce> | null)?.typeAtOnce === true;
+  useEffect(() => {
+    if (isByKey) form.current?.querySelector<HTMLElement>("input:not([type=hidden]), select, textarea")?.focus({ preventScroll: true });
+  }, [form, isByKey, key]);
+}

@@ -1,0 +1,93 @@
+import type { ReadingValue } from "#app/domain/reading.ts";
+import { applyCorrection } from "#app/features/instruments/apply-correction.ts";
+import { plainText } from "#app/domain/plain-text.ts";
+import { fitRotation } from "#app/gemmology/rotation/fit-rotation.ts";
+import { rotationEvidence } from "#app/gemmology/ranking/rotation-evidence.ts";
+import type { RotationRun } from "#app/gemmology/rotation/rotation-run.ts";
+import type { RotationFit, RotationSolution } from "#app/gemmology/rotation/rotation-fit.ts";
+import type { Composed } from "./compose-reading.ts";
+import { derived } from "./derived-values.ts";
+import type { ReadingDraft } from "./reading-draft.ts";
+import type { ReadingInstrument } from "./reading-instrument.ts";
+import { readRotationRows } from "./rotation-rows.ts";
+import { edgeUncertainty } from "./usual-uncertainty.ts";
+
+const mostText = 6000;
+/** What the scale itself may be off by, the same at every position: its check's limit of ± 0.002, rectangular (JCGM 100:2008, 4.3.7). */
+const scaleU = 0.002 / Math.sqrt(3);
+
+/** A rotation run as it was typed, fitted: its indices, and of the middle one nothing while one facet leaves it open. */
+export function composeRotation(draft: Extract<ReadingDraft, { kind: "rotation" }>, instrument: ReadingInstrument | null): Composed {
+  const { kind, quality, light } = draft;
+  const rows = plainText(draft.rows);
+  if (rows.length > mostText) return { problems: { rows: [`At most ${mostText} characters; this is ${rows.length}.`] } };
+  if (quality === "noResult") return { reading: { detail: { kind, light, rows: "", character: "undetermined", sign: null, solutions: [] }, quality, values: [] } };
+  const { run, problem } = readRotationRows(rows, edgeUncertainty({ instrument, light, quality }));
+  if (problem !== null) return { problems: { rows: [problem] } };
+  const limit = instrument?.upperLimit;
+  const beyond = limit ? run.facets.flatMap(({ readings }) => readings).find(({ upper, lower }) => Math.max(upper ?? 0, lower ?? 0) > limit + 0.002) : undefined;
+  if (beyond) return { problems: { rows: [`${Math.max(beyond.upper ?? 0, beyond.lower ?? 0).toFixed(3)} at ${beyond.angleDeg}° lies above ${limit}, the limit of this refractometer's contact liquid: write a dash for an edge beyond it.`] } };
+  const { run: corrected, u: correctionU } = correctRun(run, instrument);
+  const fit = fitRotation(corrected);
+  const { character, sign } = rotationFinding(fit);
+  return { reading: { detail: { kind, light, rows, character, sign, solutions: solutionsOf(fit) }, quality, values: valuesOf(fit, correctionU) } };
+}
+
+function solutionsOf(fit: RotationFit) {
+  const evidence = rotationEvidence(fit);
+  return evidence?.kind === "rotation" ? evidence.solutions : [];
+}
+
+/** What the run decides of the crystal; what several solutions within reach share, where none is alone. */
+export function rotationFinding(fit: RotationFit): Pick<RotationSolution, "character" | "sign"> {
+  const rivals = rivalsOf(fit);
+  const [first] = rivals;
+  const share = <Key extends "character" | "sign">(key: Key) => (rivals.every((rival) => rival[key] === first![key]) ? first![key] : null);
+  return { character: share("character") ?? "undetermined", sign: share("sign") };
+}
+
+const rivalAt = 9;
+const rivalsOf = ({ solutions }: RotationFit) => solutions.filter(({ deltaChiSquared }) => deltaChiSquared <= rivalAt);
+
+/** Every edge corrected before the fit; what was typed stays in its rows. `u` is the correction's own; null where none is in force. */
+function correctRun(run: RotationRun, instrument: ReadingInstrument | null): { run: RotationRun; u: number | null } {
+  let u: number | null = null;
+  const correct = (edge: number | null | undefined) => {
+    if (typeof edge !== "number") return edge;
+    const corrected = applyCorrection(instrument?.correction, { value: edge, unit: "n" });
+    if (corrected) u = Math.max(u ?? 0, corrected.u);
+    return corrected?.value ?? edge;
+  };
+  const facets = run.facets.map((facet) => ({ ...facet, readings: facet.readings.map((reading) => ({ ...reading, upper: correct(reading.upper), lower: correct(reading.lower) })) }));
+  return { run: { ...run, facets } as RotationRun, u };
+}
+
+function valuesOf(fit: RotationFit, correctionU: number | null): ReadingValue[] {
+  const rivals = rivalsOf(fit);
+  const formula = `edges of a rotation, ${fit.modelVersion}${correctionU === null ? "" : ", corrected"}`;
+  const index = (name: ReadingValue["name"], value: number, u: number) => derived(name, { value, unit: "n", u: Math.hypot(u, scaleU, correctionU ?? 0), formula });
+  const ends = rivals.map(endsOf).filter((end) => end !== null);
+  const values: ReadingValue[] = [];
+  if (ends.length > 0) {
+    const middle = (of: (end: (typeof ends)[number]) => number) => ends.reduce((sum, end) => sum + of(end), 0) / ends.length;
+    const [low, high] = [middle(({ low }) => low), middle(({ high }) => high)];
+    const widest = (of: (end: (typeof ends)[number]) => number, at: number, uOf: (end: (typeof ends)[number]) => number) => Math.max(...ends.map((end) => Math.hypot(uOf(end), of(end) - at)));
+    values.push(index("low", low, widest((end) => end.low, low, (end) => end.uLow)), index("high", high, widest((end) => end.high, high, (end) => end.uHigh)));
+    // The scale's own error cancels in the gap.
+    values.push(derived("birefringence", { value: high - low, unit: "1", u: Math.max(...rivals.map(({ birefringence }) => birefringence?.u ?? 0), 1e-4), formula }));
+  }
+  const [only] = rivals;
+  if (rivals.length === 1 && only && only.character !== "undetermined") {
+    for (const [name, value] of Object.entries(only.indices)) values.push(index(name as ReadingValue["name"], value, only.u[name] ?? 0));
+  }
+  return values;
+}
+
+function endsOf({ indices, u }: RotationSolution): Readonly<{ low: number; high: number; uLow: number; uHigh: number }> | null {
+  if ("omega" in indices) {
+    const isPositive = indices.epsilon > indices.omega;
+    return isPositive ? { low: indices.omega, high: indices.epsilon, uLow: u.omega!, uHigh: u.epsilon! } : { low: indices.epsilon, high: indices.omega, uLow: u.epsilon!, uHigh: u.omega! };
+  }
+  if ("beta" in indices) return { low: indices.alpha, high: indices.gamma, uLow: u.alpha!, uHigh: u.gamma! };
+  return null;
+}
