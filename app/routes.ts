@@ -92,6 +92,7 @@ export default [
       route("stones/:stoneCode/mark.json", "routes/lab/stones/mark.ts"),
       route("stones/:stoneCode/sent-readings", "routes/lab/stones/sent-readings.ts"),
       route("stones/:stoneCode/sheet", "routes/lab/stones/sheet.tsx"),
+      route("stones/:stoneCode/inclusions", "routes/lab/stones/inclusions.tsx"),
       route("stones/:stoneCode/spectra", "routes/lab/stones/spectra.tsx"),
       route("stones/:stoneCode/spectra/:sequence/file", "routes/lab/stones/spectrum-file.ts"),
       route("stones/:stoneCode/readings/:sequence/strike", "routes/lab/stones/strike.tsx"),

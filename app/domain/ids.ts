@@ -16,6 +16,7 @@ export type ReferenceMaterialId = Id<"referenceMaterial">;
 export type ObservationId = Id<"observation">;
 export type AttachmentId = Id<"attachment">;
 export type SpectrumId = Id<"spectrum">;
+export type InclusionId = Id<"inclusion">;
 export type ConclusionId = Id<"conclusion">;
 export type SecondCheckId = Id<"secondCheck">;
 export type ValuationId = Id<"valuation">;

@@ -109,6 +109,12 @@ export const marramStories: readonly Story[] = [
   {
     description: "Dull green oval", photo: { outline: "oval", hue: "green", lengthMm: 9 }, client: "museum", daysAgo: 5, mass: "3.66", statements: "From an old collection, labelled only with a number.",
     readings: [weight("3.662"), edge("1.792", { quality: "fair", note: "soft edge just below the liquid’s" }), polars("anomalous", { note: "patchy, almost dark" }), density("3.662", "2.750"), seen("Cloudy zones, angular growth bands"), told("spectroscope", { lines: "653 weak, 691 faint", scale: "grating", path: "transmitted" }, "S1", "blurred lines")],
+    inclusions: [
+      { type: "cloud", depth: "middle", amount: "many", note: "along growth bands", onPlot: { x: 0.62, y: 0.4 }, onPhoto: { x: 0.58, y: 0.42 } },
+      { type: "crystal", depth: "nearTop", amount: "one", note: "with a dark halo", sizeMm: "0.15", onPlot: { x: 0.33, y: 0.68 }, onPhoto: { x: 0.42, y: 0.57 } },
+      { type: "cavity", depth: "surface", amount: "one", note: "", sizeMm: "0.08", onPlot: { x: 0.78, y: 0.78 }, struckBecause: "a crumb of polishing powder, gone after wiping" },
+      { type: "fissureSurface", depth: "surface", amount: "one", note: "", sizeMm: "0.6", onPlot: { x: 0.5, y: 0.08 } },
+    ],
     spectrum: { title: "Dull green oval, transmitted", note: "Through the table, 1 s, mean of 20", bands: [[653, 9, 0.16], [691, 11, 0.07], [589, 14, 0.05], [537, 16, 0.03], [660, 120, 0.06]] },
   },
   {

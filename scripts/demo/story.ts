@@ -1,5 +1,7 @@
 import type { Confidence, ConclusionDescription, LimitCode, Nature, RejectedAlternative, TreatmentFinding } from "#app/domain/conclusion.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
+import type { Place } from "#app/domain/inclusion.ts";
+import type { RecordInclusion } from "#app/features/inclusions/record-inclusion.server.ts";
 import type { ReadingDraft } from "#app/features/readings/reading-draft.ts";
 import type { GemOutline } from "../draw-gem-photo.ts";
 import type { InventedBand } from "./invented-spectrum.ts";
@@ -40,6 +42,8 @@ export type Story = {
   readings?: Reading[];
   /** A measured spectrum, invented from its bands. */
   spectrum?: { title: string; note: string; bands: readonly InventedBand[] };
+  /** What was plotted; a place on the photograph only where the story has one. */
+  inclusions?: ReadonlyArray<Pick<RecordInclusion, "type" | "depth" | "amount" | "note"> & { sizeMm?: string; onPlot: Place; onPhoto?: Place; struckBecause?: string }>;
   conclusion?: Conclusion;
   check?: { readings: Reading[]; outcome?: "agreed" | "returned"; reason?: string };
   valuation?: "draft" | "signed";

@@ -2,12 +2,14 @@ import { randomUUID } from "node:crypto";
 import { existsSync, readFileSync } from "node:fs";
 import { and, eq } from "drizzle-orm";
 import { newId } from "#app/db/new-id.server.ts";
-import { invoices, items, reports, stones } from "#app/db/schema/index.ts";
+import { attachments, invoices, items, reports, stones } from "#app/db/schema/index.ts";
 import type { ReportId } from "#app/domain/ids.ts";
 import { certificationPoints } from "#app/domain/valuation.ts";
 import { recordHandOver } from "#app/features/custody/record-hand-over.server.ts";
 import { releaseItem } from "#app/features/custody/release-item.server.ts";
 import { proposeConclusion } from "#app/features/identification/propose-conclusion.server.ts";
+import { recordInclusion } from "#app/features/inclusions/record-inclusion.server.ts";
+import { strikeInclusion } from "#app/features/inclusions/strike-inclusion.server.ts";
 import { recordDeskPayment } from "#app/features/invoices/record-desk-payment.server.ts";
 import { addPhoto } from "#app/features/photos/add-photo.server.ts";
 import { recordReading } from "#app/features/readings/record-reading.server.ts";
@@ -70,6 +72,13 @@ export async function tellStory(lab: Laboratory, story: Story, { now, cast }: { 
   later();
   await recordHandOver(lab.as(cast.examiner, clock), { requestId: newId<"custodyEvent">(), itemNumber: item!.number, purpose: "toBench", toPlace: "Bench 2", holder: undefined, massText: story.mass, massUnit: story.massUnit ?? "ct", seal: "", remark: "" });
   await readAll(cast.examiner, story.readings);
+  for (const { onPlot, onPhoto, sizeMm, struckBecause, ...mark } of story.inclusions ?? []) {
+    later();
+    const examiner = lab.as(cast.examiner, clock);
+    const [photo] = await db.select({ id: attachments.id }).from(attachments).where(and(eq(attachments.laboratoryId, laboratoryId), eq(attachments.itemId, item!.id)));
+    const { sequence } = await recordInclusion(examiner, { ...mark, requestId: newId<"inclusion">(), stoneCode, otherText: "", size: sizeMm ? { value: Number(sizeMm), text: sizeMm } : null, onPlot: { side: "crown", at: onPlot }, onPhoto: onPhoto && photo ? { photoId: photo.id, at: onPhoto } : null });
+    if (struckBecause) await strikeInclusion(examiner, { stoneCode, sequence, reason: struckBecause });
+  }
   if (story.spectrum) {
     later();
     const { title, note, bands } = story.spectrum;

@@ -103,6 +103,7 @@ export async function routeLines(): Promise<RouteLine[]> {
     lab("stones/:stoneCode/mark.json", { params: examined, get: all }),
     lab("stones/:stoneCode/sent-readings", { params: examined, post: ["gemmologist"] }),
     lab("stones/:stoneCode/sheet", { params: examined, get: all }),
+    lab("stones/:stoneCode/inclusions", { params: measured, get: examine, post: ["gemmologist"] }),
     lab("stones/:stoneCode/spectra", { params: measured, get: examine, post: ["gemmologist"] }),
     lab("stones/:stoneCode/spectra/:sequence/file", { params: { ...measured, sequence: "1" }, get: examine }),
     lab("stones/:stoneCode/readings/:sequence/strike", { params: { ...examined, sequence: "1" }, get: examine, post: ["gemmologist"] }),

@@ -34,6 +34,12 @@ import { getInstrument } from "#app/features/instruments/get-instrument.server.t
 import { listInstruments } from "#app/features/instruments/list-instruments.server.ts";
 import { previewCorrection } from "#app/features/instruments/preview-correction.server.ts";
 import { recordInstrumentCheck } from "#app/features/instruments/record-instrument-check.server.ts";
+import { addMicroscopePhoto } from "#app/features/inclusions/add-microscope-photo.server.ts";
+import { getInclusions } from "#app/features/inclusions/get-inclusions.server.ts";
+import { recordInclusion, type RecordInclusion } from "#app/features/inclusions/record-inclusion.server.ts";
+import { setPhotoScale } from "#app/features/inclusions/set-photo-scale.server.ts";
+import { setStoneOutline } from "#app/features/inclusions/set-stone-outline.server.ts";
+import { strikeInclusion } from "#app/features/inclusions/strike-inclusion.server.ts";
 import { registerInstrument } from "#app/features/instruments/register-instrument.server.ts";
 import { startCorrection } from "#app/features/instruments/start-correction.server.ts";
 import { getInvoice } from "#app/features/invoices/get-invoice.server.ts";
@@ -140,6 +146,7 @@ async function aPicture(): Promise<Buffer> {
   return sharp({ create: { width: 32, height: 32, channels: 3, background: "#b3154a" } }).jpeg().toBuffer();
 }
 
+const anInclusion = (stoneCode: string): RecordInclusion => ({ requestId: newId<"inclusion">(), stoneCode, type: "needle", otherText: "", onPhoto: null, onPlot: { side: "crown", at: { x: 0.4, y: 0.6 } }, depth: "middle", amount: "one", size: null, note: "" });
 const aSpectrum = (stoneCode: string) => ({ requestId: newId<"spectrum">(), stoneCode, bytes: Buffer.from("400;1\n401;2\n402;4\n403;2\n404;1"), fileName: "a.csv", note: "", assumed: { xUnit: "nm", yUnit: "absorbance" } }) as const;
 
 async function aMeasuredStone(lab: LabContext): Promise<string> {
@@ -282,6 +289,37 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
   entry({ name: "getParcel", operation: "readings.read", rows: (lab) => aParcel(lab), call: (ctx, { parcelId }) => getParcel(ctx, parcelId) }),
   entry({ name: "nameParcelItem", operation: "readings.record", rows: async (lab) => ({ ...(await aParcel(lab, { itemNumber: "" })), ...(await anItem(lab)) }), call: (ctx, { parcelId, itemNumber }) => nameParcelItem(ctx, parcelId, { itemNumber }) }),
   entry({ name: "openParcelStone", operation: "readings.record", rows: (lab) => aParcel(lab), call: (ctx, { parcelId, instruments }) => openParcelStone(ctx, parcelId, { ...howRead(instruments), position: 1 }) }),
+
+  // inclusions
+  entry({ name: "recordInclusion", operation: "readings.record", rows: aStoneCode, call: (ctx, stoneCode) => recordInclusion(ctx, anInclusion(stoneCode)) }),
+  entry({ name: "getInclusions", operation: "readings.read", rows: aStoneCode, call: (ctx, stoneCode) => getInclusions(ctx, { stoneCode }) }),
+  entry({
+    name: "strikeInclusion",
+    operation: "readings.record",
+    rows: async (lab) => {
+      const stoneCode = await aStoneCode(lab);
+      await recordInclusion(lab, anInclusion(stoneCode));
+      return stoneCode;
+    },
+    call: (ctx, stoneCode) => strikeInclusion(ctx, { stoneCode, sequence: 1, reason: "dust" }),
+    mayBeRefused: "notTheirs",
+  }),
+  entry({ name: "setStoneOutline", operation: "readings.record", rows: aStoneCode, call: (ctx, stoneCode) => setStoneOutline(ctx, { stoneCode, outline: "pear" }) }),
+  entry({
+    name: "addMicroscopePhoto",
+    operation: "readings.record",
+    rows: aStoneCode,
+    call: async (ctx, stoneCode) => addMicroscopePhoto(ctx, { stoneCode, bytes: await aPicture(), fileName: "a.jpg", sourceKey: "form:1", magnificationX: 40, pictureWidthMm: 4.2 }),
+  }),
+  entry({
+    name: "setPhotoScale",
+    operation: "readings.record",
+    rows: async (lab) => {
+      const stoneCode = await aStoneCode(lab);
+      return { stoneCode, photoId: await addMicroscopePhoto(lab, { stoneCode, bytes: await aPicture(), fileName: "a.jpg", sourceKey: "form:1", magnificationX: null, pictureWidthMm: null }) };
+    },
+    call: (ctx, ids) => setPhotoScale(ctx, { ...ids, magnificationX: 40, pictureWidthMm: 4.2 }),
+  }),
 
   // measured spectra
   entry({ name: "addSpectrum", operation: "readings.record", rows: aStoneCode, call: (ctx, stoneCode) => addSpectrum(ctx, aSpectrum(stoneCode)) }),

@@ -1,5 +1,5 @@
 import type { FieldMetadata } from "@conform-to/react";
-import { lazy, type ComponentProps, Suspense } from "react";
+import { lazy, Suspense } from "react";
 import { keepSpectrumView } from "#app/components/charts/spectrum/keep-spectrum-view.ts";
 import { CheckboxField, CheckboxGroupField } from "#app/components/ui/choice-field.tsx";
 import { checkboxProps, fieldProps } from "#app/components/ui/field-props.ts";
@@ -7,10 +7,8 @@ import { SelectField } from "#app/components/ui/select-field.tsx";
 import { TextAreaField, TextField } from "#app/components/ui/text-field.tsx";
 import type { TestField } from "#app/domain/bench-tests/test-form.ts";
 import { testForms, type DescribedKind } from "#app/domain/bench-tests/test-forms.ts";
-import type { SpectrumLinesField as DrawnSpectrumField } from "./spectrum/spectrum-lines-field.tsx";
 import type { SpectrumAround } from "./spectrum/spectrum-around.ts";
-
-type SpectrumFieldProps = ComponentProps<typeof DrawnSpectrumField>;
+import type { SpectrumLinesFieldProps } from "./spectrum/spectrum-lines-field.tsx";
 
 /** The drawing comes after the page works; until then, without script, and where it cannot be fetched for want of a line, the words alone are typed. */
 const SpectrumLinesField = lazy(async () => {
@@ -18,7 +16,7 @@ const SpectrumLinesField = lazy(async () => {
   return { default: drawn?.SpectrumLinesField ?? SpectrumWords };
 });
 
-function SpectrumWords({ id, name, label = "Lines and bands", hint, errors, defaultValue, maxLength, placeholder }: SpectrumFieldProps) {
+function SpectrumWords({ id, name, label = "Lines and bands", hint, errors, defaultValue, maxLength, placeholder }: SpectrumLinesFieldProps) {
   return <TextAreaField {...{ id, name, label, hint, errors, defaultValue, maxLength, placeholder }} isRequired={false} rows={2} />;
 }
 

@@ -1,5 +1,5 @@
 import { foreignKey, index, int, mysqlTable, primaryKey, uniqueIndex, varchar } from "drizzle-orm/mysql-core";
-import { bytes, exactText, id, instant } from "../columns.ts";
+import { bytes, exactText, id, instant, measured } from "../columns.ts";
 import { users } from "./account.ts";
 import { items } from "./take-in.ts";
 
@@ -21,6 +21,9 @@ export const attachments = mysqlTable(
     sizeBytes: int("size_bytes").notNull(),
     sha256: bytes("sha256", "binary(32)").notNull(),
     thumbnail: bytes("thumbnail", "mediumblob").notNull(),
+    /** Of a photograph through a microscope: its magnification, and what the picture shows from left to right. */
+    magnificationX: measured("magnification_x", 7, 2),
+    pictureWidthMm: measured("picture_width_mm", 9, 4),
     createdAt: instant("created_at").notNull(),
     createdBy: id<"user">("created_by").notNull().references(() => users.id),
   },

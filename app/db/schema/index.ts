@@ -2,6 +2,7 @@ export * from "./account.ts";
 export * from "./attachment.ts";
 export * from "./client.ts";
 export * from "./conclusion.ts";
+export * from "./inclusion.ts";
 export * from "./instrument.ts";
 export * from "./invoice.ts";
 export * from "./laboratory.ts";

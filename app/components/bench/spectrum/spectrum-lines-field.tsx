@@ -14,7 +14,7 @@ import { SpectrumPad } from "./spectrum-pad.tsx";
 import { SpectrumViewChoice } from "./spectrum-view-choice.tsx";
 import { typeInto } from "./type-into.ts";
 
-type SpectrumLinesFieldProps = {
+export type SpectrumLinesFieldProps = {
   id: string;
   name: string;
   label?: string;
