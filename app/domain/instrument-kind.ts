@@ -1,4 +1,4 @@
-/** What readings are taken with: an instrument for every test that the bench records. */
+/** What readings are taken with: an instrument for every test that the bench records. Sets of liquids are kept as instruments, since they are checked like them. */
 export const instrumentKinds = [
   "refractometer",
   "angleRefractometer",

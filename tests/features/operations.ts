@@ -283,6 +283,13 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
     mayBeRefused: "absent",
   }),
 
+  // parcels
+  entry({ name: "listParcels", operation: "readings.read", rows: nothing, call: (ctx) => listParcels(ctx), hasNoIds: true }),
+  entry({ name: "saveParcel", operation: "readings.record", rows: nothing, call: (ctx) => saveParcel(ctx, aParcelDraft()), hasNoIds: true }),
+  entry({ name: "getParcel", operation: "readings.read", rows: (lab) => aParcel(lab), call: (ctx, { parcelId }) => getParcel(ctx, parcelId) }),
+  entry({ name: "nameParcelItem", operation: "readings.record", rows: async (lab) => ({ ...(await aParcel(lab, { itemNumber: "" })), ...(await anItem(lab)) }), call: (ctx, { parcelId, itemNumber }) => nameParcelItem(ctx, parcelId, { itemNumber }) }),
+  entry({ name: "openParcelStone", operation: "readings.record", rows: (lab) => aParcel(lab), call: (ctx, { parcelId, instruments }) => openParcelStone(ctx, parcelId, { ...howRead(instruments), position: 1 }) }),
+
   // inclusions
   entry({ name: "recordInclusion", operation: "readings.record", rows: aStoneCode, call: (ctx, stoneCode) => recordInclusion(ctx, anInclusion(stoneCode)) }),
   entry({ name: "getInclusions", operation: "readings.read", rows: aStoneCode, call: (ctx, stoneCode) => getInclusions(ctx, { stoneCode }) }),
@@ -319,12 +326,6 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
   entry({ name: "listSpectra", operation: "readings.read", rows: aMeasuredStone, call: (ctx, stoneCode) => listSpectra(ctx, { stoneCode }), isEmptyElsewhere: "list" }),
   entry({ name: "readSpectrumSource", operation: "readings.read", rows: aMeasuredStone, call: (ctx, stoneCode) => readSpectrumSource(ctx, { stoneCode, sequence: 1 }) }),
   entry({ name: "withdrawSpectrum", operation: "readings.record", rows: aMeasuredStone, call: (ctx, stoneCode) => withdrawSpectrum(ctx, { stoneCode, sequence: 1, reason: "of another stone" }) }),
-  // parcels
-  entry({ name: "listParcels", operation: "readings.read", rows: nothing, call: (ctx) => listParcels(ctx), hasNoIds: true }),
-  entry({ name: "saveParcel", operation: "readings.record", rows: nothing, call: (ctx) => saveParcel(ctx, aParcelDraft()), hasNoIds: true }),
-  entry({ name: "getParcel", operation: "readings.read", rows: (lab) => aParcel(lab), call: (ctx, { parcelId }) => getParcel(ctx, parcelId) }),
-  entry({ name: "nameParcelItem", operation: "readings.record", rows: async (lab) => ({ ...(await aParcel(lab, { itemNumber: "" })), ...(await anItem(lab)) }), call: (ctx, { parcelId, itemNumber }) => nameParcelItem(ctx, parcelId, { itemNumber }) }),
-  entry({ name: "openParcelStone", operation: "readings.record", rows: (lab) => aParcel(lab), call: (ctx, { parcelId, instruments }) => openParcelStone(ctx, parcelId, { ...howRead(instruments), position: 1 }) }),
 
   // photographs
   entry({ name: "findItemForPhoto", operation: "photos.add", rows: anItem, call: (ctx, { itemNumber }) => findItemForPhoto(ctx, itemNumber) }),

@@ -1,4 +1,4 @@
-import { and, desc, eq, isNull, sql } from "drizzle-orm";
+import { and, desc, eq, gt, isNull, lte, or, sql } from "drizzle-orm";
 import { instrumentChecks, instrumentCorrections, type instruments } from "#app/db/schema/index.ts";
 import { scaleUnitsOf } from "#app/domain/instrument-scale.ts";
 import type { LabScope } from "#app/features/lab-context.ts";
@@ -11,16 +11,16 @@ type Scope = Pick<LabScope, "db" | "laboratoryId">;
 export const latestFailure = sql`not k.is_passed and not exists (select 1 from instrument_checks later where later.laboratory_id = k.laboratory_id and later.instrument_id = k.instrument_id
   and later.checked_at > k.checked_at and later.is_passed and (later.reference_material_id = k.reference_material_id or (later.reference_material_id is null and k.reference_material_id is null and later.reference_material = k.reference_material)))`;
 
-/** How an instrument stands: its last passed check, the references that it fails now, the correction in force. */
-export async function instrumentStanding(scope: Scope, instrument: Instrument) {
+/** How an instrument stood for a reading: the last check it had passed then, the correction in force then, and the references that it fails now. */
+export async function instrumentStanding(scope: Scope, instrument: Instrument, at: Date) {
   const { db, laboratoryId } = scope;
   const [passed] = await db
     .select({ id: instrumentChecks.id, nextDueOn: instrumentChecks.nextDueOn })
     .from(instrumentChecks)
-    .where(and(eq(instrumentChecks.laboratoryId, laboratoryId), eq(instrumentChecks.instrumentId, instrument.id), eq(instrumentChecks.isPassed, true)))
+    .where(and(eq(instrumentChecks.laboratoryId, laboratoryId), eq(instrumentChecks.instrumentId, instrument.id), eq(instrumentChecks.isPassed, true), lte(instrumentChecks.checkedAt, at)))
     .orderBy(desc(instrumentChecks.checkedAt))
     .limit(1);
-  return { passed: passed ?? null, failing: await failingReferences(scope, instrument.id), correction: await correctionInForce(scope, instrument) };
+  return { passed: passed ?? null, failing: await failingReferences(scope, instrument.id), correction: await correctionInForce(scope, instrument, at) };
 }
 
 /** The names of the references that an instrument's latest check with them failed on. */
@@ -34,12 +34,12 @@ export async function failingReferences({ db, laboratoryId }: Scope, instrumentI
   return [...new Set(rows.map(({ referenceMaterial }) => referenceMaterial))];
 }
 
-/** The correction that readings of now are made with; null where none is in force. */
-export async function correctionInForce({ db, laboratoryId }: Scope, { id, kind, scaleUnit }: Instrument): Promise<(AppliedCorrection & { id: typeof instrumentCorrections.$inferSelect.id }) | null> {
+/** The correction that readings of an instant are made with; null where none was in force. */
+export async function correctionInForce({ db, laboratoryId }: Scope, { id, kind, scaleUnit }: Instrument, at: Date): Promise<(AppliedCorrection & { id: typeof instrumentCorrections.$inferSelect.id }) | null> {
   const [row] = await db
     .select({ id: instrumentCorrections.id, correction: instrumentCorrections.correction })
     .from(instrumentCorrections)
-    .where(and(eq(instrumentCorrections.laboratoryId, laboratoryId), eq(instrumentCorrections.instrumentId, id), isNull(instrumentCorrections.endedAt)))
+    .where(and(eq(instrumentCorrections.laboratoryId, laboratoryId), eq(instrumentCorrections.instrumentId, id), lte(instrumentCorrections.fromAt, at), or(isNull(instrumentCorrections.endedAt), gt(instrumentCorrections.endedAt, at))))
     .orderBy(desc(instrumentCorrections.fromAt), desc(instrumentCorrections.id))
     .limit(1);
   const unit = scaleUnit ?? scaleUnitsOf[kind][0];

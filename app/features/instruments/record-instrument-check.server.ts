@@ -109,7 +109,7 @@ async function judge(ctx: LabContext, instrument: Instrument, { nominal, reading
   if (!nominal) throw wrong("nominal", "Write the reference's own value.");
   if (!reading) throw wrong("reading", "Write what the instrument showed.");
   if (!limit) throw wrong("limit", "Write how far it may be off.");
-  const correction = await correctionInForce(ctx, instrument);
+  const correction = await correctionInForce(ctx, instrument, ctx.now);
   const corrected = correction && applyCorrection(correction, { value: reading.value, unit: correction.unit });
   return {
     nominalValue: nominal.value,

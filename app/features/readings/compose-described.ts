@@ -4,11 +4,11 @@ import type { ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain
 import { plainText } from "#app/domain/plain-text.ts";
 import { checkDescribed } from "./check-described.ts";
 import type { Composed } from "./compose-reading.ts";
-import { correctedValue } from "./corrected-value.ts";
 import { derivedFromDescribed } from "./derived-from-described.ts";
 import type { DescribedDraft } from "./reading-draft.ts";
 import type { ReadingInstrument } from "./reading-instrument.ts";
 import { readNumber, type NumberRule } from "./read-number.ts";
+import { typedValue } from "./typed-value.ts";
 
 /** A reading of a described test: every field by its own rule, then those by which fields bear on each other, then what follows. */
 export function composeDescribed({ kind, quality, typed }: DescribedDraft & { quality: ReadingQuality }, instrument: ReadingInstrument | null): Composed {
@@ -25,7 +25,7 @@ export function composeDescribed({ kind, quality, typed }: DescribedDraft & { qu
           const rule = ruleOf(field, instrument);
           const value = readNumber(text, rule, instrument);
           if (typeof value === "string") refuse(field.name, value);
-          else values.push(correctedValue(value, text, rule, instrument));
+          else values.push(typedValue(value, text, rule, instrument));
         }
         return [];
       }

@@ -4,12 +4,12 @@ import { impliedIndex } from "#app/domain/implied-index.ts";
 import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
 import { derivedDensity, derivedIndex, differenceOfEdges } from "./derived-values.ts";
 import { plainText } from "#app/domain/plain-text.ts";
-import { correctedValue } from "./corrected-value.ts";
 import { composeDescribed } from "./compose-described.ts";
 import { meanOfRepeats } from "#app/gemmology/statistics/mean-of-repeats.ts";
 import { againNames, isDescribedDraft, type ReadingDraft } from "./reading-draft.ts";
 import type { ReadingInstrument } from "./reading-instrument.ts";
 import { readNumber, type NumberRule } from "./read-number.ts";
+import { typedValue } from "./typed-value.ts";
 import { angleUncertaintyDeg, edgeUncertainty, gaugeUncertaintyMm, spotUncertainty, usualUncertainty, waterWeighingUncertaintyCt, weighingUncertaintyCt } from "./usual-uncertainty.ts";
 
 export type ComposedReading = Readonly<{ detail: ReadingDetail; quality: ReadingQuality; values: readonly ReadingValue[] }>;
@@ -33,7 +33,7 @@ export function composeReading(draft: QuickDraft, instrument: ReadingInstrument 
       refuse(field, read);
       return undefined;
     }
-    const value = correctedValue(read, digits, rule, instrument);
+    const value = typedValue(read, digits, rule, instrument);
     values.push(value);
     return value.value;
   };
@@ -139,8 +139,7 @@ export function composeReading(draft: QuickDraft, instrument: ReadingInstrument 
     const isHung = method === "suspended";
     const air = number("massAirCt", massAirCt, { ...massRule, name: "massAirCt", what: "the weight in air", example: "2.143", u: uAir });
     const liquid = number("massLiquidCt", massLiquidCt, { ...massRule, name: "massLiquidCt", what: isHung ? "the weight in water" : "what the beaker gained", example: isHung ? "1.606" : "0.537", isDifference: !isHung, u: uLiquid });
-    const repeats = (names: readonly (typeof againNames)[number][], u: number) =>
-      names.flatMap((name) => (again[name]?.trim() ? (number(name, again[name], { ...massRule, name, what: "this weighing", example: "2.143", isDifference: !isHung && name.startsWith("massLiquid"), u }) ?? []) : []));
+    const repeats = (names: readonly (typeof againNames)[number][], u: number) => names.flatMap((name) => (again[name]?.trim() ? (number(name, again[name], { ...massRule, name, what: "this weighing", example: "2.143", isDifference: name.startsWith("massLiquid") && !isHung, u }) ?? []) : []));
     const airs = repeats(["massAirCt2", "massAirCt3"], uAir);
     const liquids = repeats(["massLiquidCt2", "massLiquidCt3"], uLiquid);
     const temp = number("tempC", tempC, { name: "tempC", what: "the water's temperature", unit: "degC", example: "21.4", min: 0, max: 40, mostDecimals: 2, u: usualUncertainty.waterTempC });

@@ -2,8 +2,8 @@ import type { ReadingValue } from "#app/domain/reading.ts";
 import { applyCorrection } from "#app/features/instruments/apply-correction.ts";
 import { plainText } from "#app/domain/plain-text.ts";
 import { fitRotation } from "#app/gemmology/rotation/fit-rotation.ts";
-import type { RotationRun } from "#app/gemmology/rotation/rotation-run.ts";
 import { rotationEvidence } from "#app/gemmology/ranking/rotation-evidence.ts";
+import type { RotationRun } from "#app/gemmology/rotation/rotation-run.ts";
 import type { RotationFit, RotationSolution } from "#app/gemmology/rotation/rotation-fit.ts";
 import type { Composed } from "./compose-reading.ts";
 import { derived } from "./derived-values.ts";
@@ -27,20 +27,15 @@ export function composeRotation(draft: Extract<ReadingDraft, { kind: "rotation" 
   const limit = instrument?.upperLimit;
   const beyond = limit ? read.facets.flatMap(({ readings }) => readings).find(({ upper, lower }) => Math.max(upper ?? 0, lower ?? 0) > limit + 0.002) : undefined;
   if (beyond) return { problems: { rows: [`${Math.max(beyond.upper ?? 0, beyond.lower ?? 0).toFixed(3)} at ${beyond.angleDeg}° lies above ${limit}, the limit of this refractometer's contact liquid: write a dash for an edge beyond it.`] } };
-  const fit = fitRotation(correctedRun(read, instrument));
+  const { run: corrected, u: correctionU } = correctRun(read, instrument);
+  const fit = fitRotation(corrected);
   const { character, sign } = rotationFinding(fit);
-  return { reading: { detail: { kind, light, rows, character, sign, solutions: solutionsOf(fit) }, quality, values: valuesOf(fit) } };
+  return { reading: { detail: { kind, light, rows, character, sign, solutions: solutionsOf(fit) }, quality, values: valuesOf(fit, correctionU) } };
 }
 
 function solutionsOf(fit: RotationFit) {
   const evidence = rotationEvidence(fit);
   return evidence?.kind === "rotation" ? evidence.solutions : [];
-}
-
-/** The run with its scale's correction; its lines stay as they were typed. */
-export function correctedRun(run: RotationRun, instrument: ReadingInstrument | null): RotationRun {
-  const corrected = (edge: number | null) => (edge === null ? null : (applyCorrection(instrument?.correction, { value: edge, unit: "n" })?.value ?? edge));
-  return { facets: run.facets.map(({ label, readings }) => ({ label, readings: readings.map((reading) => ({ ...reading, upper: corrected(reading.upper), lower: corrected(reading.lower) })) })) };
 }
 
 /** What the run decides of the crystal; what several solutions within reach share, where none is alone. */
@@ -54,10 +49,23 @@ export function rotationFinding(fit: RotationFit): Pick<RotationSolution, "chara
 const rivalAt = 9;
 const rivalsOf = ({ solutions }: RotationFit) => solutions.filter(({ deltaChiSquared }) => deltaChiSquared <= rivalAt);
 
-function valuesOf(fit: RotationFit): ReadingValue[] {
+/** Every edge corrected before the fit; what was typed stays in its rows. `u` is the correction's own; null where none is in force. */
+export function correctRun(run: RotationRun, instrument: ReadingInstrument | null): { run: RotationRun; u: number | null } {
+  let u: number | null = null;
+  const correct = (edge: number | null | undefined) => {
+    if (typeof edge !== "number") return edge;
+    const corrected = applyCorrection(instrument?.correction, { value: edge, unit: "n" });
+    if (corrected) u = Math.max(u ?? 0, corrected.u);
+    return corrected?.value ?? edge;
+  };
+  const facets = run.facets.map((facet) => ({ ...facet, readings: facet.readings.map((reading) => ({ ...reading, upper: correct(reading.upper), lower: correct(reading.lower) })) }));
+  return { run: { ...run, facets } as RotationRun, u };
+}
+
+function valuesOf(fit: RotationFit, correctionU: number | null): ReadingValue[] {
   const rivals = rivalsOf(fit);
-  const formula = `edges of a rotation, ${fit.modelVersion}`;
-  const index = (name: ReadingValue["name"], value: number, u: number) => derived(name, { value, unit: "n", u: Math.hypot(u, scaleU), formula });
+  const formula = `edges of a rotation, ${fit.modelVersion}${correctionU === null ? "" : ", corrected"}`;
+  const index = (name: ReadingValue["name"], value: number, u: number) => derived(name, { value, unit: "n", u: Math.hypot(u, scaleU, correctionU ?? 0), formula });
   const ends = rivals.map(endsOf).filter((end) => end !== null);
   const values: ReadingValue[] = [];
   if (ends.length > 0) {

@@ -40,18 +40,6 @@ export function readingValueText({ detail, values }: Told): string {
   }
 }
 
-const isDescribedDetail = (detail: ReadingDetail): detail is DescribedDetail => isDescribed(detail.kind);
-const derivesIndex: ReadonlySet<ReadingDetail["kind"]> = new Set(["reflectivity", "brewster", "realDepth"]);
-
-/** "nω 1.7689(6)  nε 1.7605(7)", or the two ends where one facet leaves the middle open. */
-function rotationIndices({ values }: Told): string {
-  const names = { n: "n", omega: "nω", epsilon: "nε", alpha: "nα", beta: "nβ", gamma: "nγ" } as const;
-  const own = Object.entries(names).flatMap(([name, symbol]) => values.filter((value) => value.name === name).map((value) => `${symbol} ${withUncertainty(value, 4)}`));
-  if (own.length > 0) return own.join(", ");
-  const [low, high] = [values.find(({ name }) => name === "low"), values.find(({ name }) => name === "high")];
-  return low && high ? `${withUncertainty(low, 4)} to ${withUncertainty(high, 4)}` : "";
-}
-
 /** The digits as typed; where a correction was added, the corrected figure with one digit more. */
 export function figureText({ typedText, value, rawValue }: Pick<ReadingValue, "typedText" | "value" | "rawValue">): string {
   if (typeof rawValue === "number") return value.toFixed(decimalPlaces(typedText) + 1);
@@ -65,9 +53,22 @@ export function correctionText(values: readonly ReadingValue[]): string {
   // The database keeps them by name.
   const inOrder = values.toSorted((a, b) => figureOrder.indexOf(a.name) - figureOrder.indexOf(b.name));
   const corrected = inOrder.flatMap(({ typedText, value, rawValue }) => (typeof rawValue === "number" ? [{ text: typedDecimal(typedText), added: value - rawValue, decimals: decimalPlaces(typedText) + 1 }] : []));
+  if (values.some(({ formula }) => formula?.endsWith(", corrected"))) return "edges corrected before the fit";
   if (corrected.length === 0) return "";
   const amounts = [...new Set(corrected.map(({ added, decimals }) => `${added < 0 ? "−" : "+"}${Math.abs(added).toFixed(decimals)}`))];
   return `read ${corrected.map(({ text }) => text).join(" – ")}, corrected by ${amounts.join(" and ")}`;
+}
+
+const isDescribedDetail = (detail: ReadingDetail): detail is DescribedDetail => isDescribed(detail.kind);
+const derivesIndex: ReadonlySet<ReadingDetail["kind"]> = new Set(["reflectivity", "brewster", "realDepth"]);
+
+/** "nω 1.7689(6)  nε 1.7605(7)", or the two ends where one facet leaves the middle open. */
+function rotationIndices({ values }: Told): string {
+  const names = { n: "n", omega: "nω", epsilon: "nε", alpha: "nα", beta: "nβ", gamma: "nγ" } as const;
+  const own = Object.entries(names).flatMap(([name, symbol]) => values.filter((value) => value.name === name).map((value) => `${symbol} ${withUncertainty(value, 4)}`));
+  if (own.length > 0) return own.join(", ");
+  const [low, high] = [values.find(({ name }) => name === "low"), values.find(({ name }) => name === "high")];
+  return low && high ? `${withUncertainty(low, 4)} to ${withUncertainty(high, 4)}` : "";
 }
 
 /** Whether a value is digits, to be set in figures, or words. */

@@ -3,8 +3,8 @@ import { inTransaction } from "#app/db/in-transaction.server.ts";
 import { instruments, itemConsents, items, observations, observationValues, secondChecks, stones } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
-import { impliedIndex } from "#app/domain/implied-index.ts";
 import { decimalPlaces } from "#app/domain/decimal.ts";
+import { impliedIndex } from "#app/domain/implied-index.ts";
 import type { Id, InstrumentId, ObservationId, SecondCheckId } from "#app/domain/ids.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import { aboutTest, consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
@@ -67,7 +67,8 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     const secondCheckId = await settleExamination(scope, { stone, isForSecondCheck: input.isForSecondCheck ?? false });
     if (stone.goodsState === "released") throw new AppError("conflict", "These goods have been released: nothing more can be read from them.");
     if (draft.quality !== "noResult") await requireConsent(scope, { kind: draft.kind, itemId: stone.itemId, isMounted: stone.isMounted });
-    const { instrument, standing } = await findInstrument(scope, input);
+    const madeAt = observedAt({ madeAt: input.madeAt ?? null, now });
+    const { instrument, standing } = await findInstrument(scope, input, madeAt);
     const { reading, problems } = composeAnyReading(draft, instrument && { ...instrument, correction: standing?.correction });
     if (!reading) throw new AppError("invalid_input", Object.values(problems)[0]?.[0] ?? "This reading is not complete.", { fieldErrors: problems });
 
@@ -87,9 +88,9 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
       secondCheckId,
       instrumentId: instrument?.id ?? null,
       instrumentCheckId: standing?.passed?.id ?? null,
-      instrumentCorrectionId: (reading.detail.kind === "rotation" || reading.values.some(({ rawValue }) => typeof rawValue === "number")) ? (standing?.correction?.id ?? null) : null,
+      instrumentCorrectionId: isCorrected(reading) ? (standing?.correction?.id ?? null) : null,
       observerId: actorId,
-      observedAt: observedAt({ madeAt: input.madeAt ?? null, now }),
+      observedAt: madeAt,
       recordedAt: now,
       detail: reading.detail,
       quality: reading.quality,
@@ -118,6 +119,11 @@ async function saysTheSame({ db, laboratoryId }: LabContext, { id, kind }: { id:
 function textsOf(value: unknown): string[] {
   if (typeof value === "string") return [value];
   return value !== null && typeof value === "object" ? Object.values(value).flatMap(textsOf) : [];
+}
+
+/** A correction went into its figures, or into the edges that its fit was made from. */
+function isCorrected({ values }: ComposedReading): boolean {
+  return values.some(({ rawValue, formula }) => typeof rawValue === "number" || formula?.endsWith(", corrected"));
 }
 
 type LockedStone = { id: Id<"stone">; state: keyof typeof examinationStateNames; examinerId: Id<"user"> | null };
@@ -174,7 +180,7 @@ function refusal(message: string): AppError {
   return new AppError("invalid_input", message, { fieldErrors: { quality: [message] } });
 }
 
-async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordReading) {
+async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordReading, madeAt: Date) {
   const kind = instrumentKindFor[draft.kind];
   const wrong = (message: string) => new AppError("invalid_input", message, { fieldErrors: { instrument: [message] } });
   if (instrumentId === null) {
@@ -188,7 +194,7 @@ async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordRe
   if (instrument.status === "outOfService" && draft.quality !== "noResult") {
     throw wrong(`${instrument.name} is out of service${instrument.statusReason ? `: ${instrument.statusReason}` : ""}. Choose another.`);
   }
-  return { instrument, standing: await instrumentStanding(ctx, instrument) };
+  return { instrument, standing: await instrumentStanding(ctx, instrument, madeAt) };
 }
 
 type Found = Awaited<ReturnType<typeof findInstrument>>;

@@ -9,6 +9,7 @@ import { getInstrument } from "#app/features/instruments/get-instrument.server.t
 import { previewCorrection } from "#app/features/instruments/preview-correction.server.ts";
 import { recordInstrumentCheck } from "#app/features/instruments/record-instrument-check.server.ts";
 import { startCorrection } from "#app/features/instruments/start-correction.server.ts";
+import { composeAnyReading } from "#app/features/readings/compose-any-reading.ts";
 import { composeReading } from "#app/features/readings/compose-reading.ts";
 import { evidenceFromReadings } from "#app/features/readings/evidence-from-readings.ts";
 import { listReadings } from "#app/features/readings/list-readings.server.ts";
@@ -136,4 +137,23 @@ test("corrections are the laboratory's own, and the desk and the appraiser start
   await expect(startCorrection(theirs, instrumentId, input)).rejects.toMatchObject({ code: "not_found" });
   await expect(endCorrection(theirs, instrumentId, { reason: "x" })).rejects.toMatchObject({ code: "not_found" });
   for (const role of ["desk", "appraiser"] as const) await expect(startCorrection(await aMember(ours, [role]), instrumentId, input)).rejects.toMatchObject({ code: "forbidden" });
+});
+
+test("a described test's angle and a rotation's edges are corrected before what follows from them", () => {
+  const meter = { resolution: 0.1, standardUncertainty: null, upperLimit: null, prismIndex: null };
+  const off = (offset: number, unit: "deg" | "n") => ({ correction: { model: "offset", centre: 0, offset, slope: 0, uOffset: 0.0002, uSlope: 0 }, unit }) as const;
+  const angle = { kind: "brewster", quality: "good", typed: { brewsterDeg: "67.0" } } as const;
+  const corrected = composeReading(angle, { ...meter, correction: off(0.5, "deg") }).reading!.values;
+  expect(corrected.find(({ name }) => name === "brewsterDeg")).toMatchObject({ value: 67.5, rawValue: 67, typedText: "67.0" });
+  // n = tan θ (instruments.md 2.12).
+  expect(corrected.find(({ name }) => name === "n")!.value).toBeCloseTo(Math.tan((67.5 * Math.PI) / 180), 3);
+
+  const rows = Array.from({ length: 13 }, (_, at) => `${at * 15} 1.7700 ${(1.762 + 0.008 * Math.cos((at * Math.PI) / 12) ** 2).toFixed(4)}`).join("\n");
+  const run = (correction: ReturnType<typeof off> | null) => composeAnyReading({ kind: "rotation", quality: "good", light: "sodium", rows }, { ...meter, resolution: 0.001, correction }).reading!.values;
+  const [plain, moved] = [run(null), run(off(0.001, "n"))];
+  const of = (values: typeof plain, name: string) => values.find((value) => value.name === name)!;
+  expect(of(moved, "high").value - of(plain, "high").value).toBeCloseTo(0.001, 4);
+  expect(of(moved, "high").standardUncertainty!).toBeGreaterThan(of(plain, "high").standardUncertainty!);
+  expect(of(moved, "birefringence").value).toBeCloseTo(of(plain, "birefringence").value, 4);
+  expect(correctionText(moved)).toBe("edges corrected before the fit");
 });
