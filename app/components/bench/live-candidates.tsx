@@ -13,7 +13,7 @@ import { CandidatesCard } from "./candidates-card.tsx";
 /** Charts come after the page works, as the species table does. */
 const IndexDensityMap = lazy(async () => ({ default: (await import("#app/components/charts/index-density-map.tsx")).IndexDensityMap }));
 
-type LiveCandidatesProps = {
+export type LiveCandidatesProps = {
   /** As the server ranked what was saved; shown until the table is here, and without script. */
   saved: BenchRanking;
   readings: readonly NumberedReading[];

@@ -1,5 +1,5 @@
 import { getFormProps, useForm, type SubmissionResult } from "@conform-to/react";
-import { useCallback, useRef, useState, type FormEvent } from "react";
+import { useCallback, useEffect, useRef, useState, type FormEvent } from "react";
 import { Form, useNavigation } from "react-router";
 import { formatCalendarDate } from "#app/domain/calendar-date.ts";
 import { uuidv7 } from "uuidv7";
@@ -13,7 +13,7 @@ import { TextAreaField } from "#app/components/ui/text-field.tsx";
 import { Caution } from "#app/components/ui/caution.tsx";
 import { isDescribed } from "#app/domain/bench-tests/test-forms.ts";
 import { aboutTest, noResultReasons, readingQualities, readingQualityNames, type ObservationKind, type ReadingQuality } from "#app/domain/reading.ts";
-import { composeReading, type ComposedReading } from "#app/features/readings/compose-reading.ts";
+import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
 import { readingDraftFromForm } from "#app/features/readings/reading-draft.ts";
 import { withUncertainty } from "#app/features/readings/reading-words.ts";
 import { weighingNotes } from "#app/features/readings/weighing-notes.ts";
@@ -61,6 +61,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
   const [quality, setQuality] = useState<ReadingQuality>("good");
   const element = useRef<HTMLFormElement>(null);
   useFirstField(element);
+  useEffect(() => void loadCompose(), []);
   const navigation = useNavigation();
   const isSaving = navigation.state === "submitting";
   const instrument = fitting.find(({ ref }) => ref === instrumentRef) ?? null;
@@ -72,7 +73,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
     const draft = readingDraftFromForm(typed);
     setQuality(draft.quality);
     // A run is fitted where its curves are drawn.
-    if (draft.kind !== "rotation") show(composeReading(draft, chosen).reading ?? null);
+    if (draft.kind !== "rotation") void loadCompose().then(({ composeReading }) => show(composeReading(draft, chosen).reading ?? null));
   }
   const show = useCallback(
     (reading: ComposedReading | null) => {
@@ -147,6 +148,8 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
 
 /** Forms whose own text is where a note would go. */
 const hasOwnText: ReadonlySet<ObservationKind> = new Set(["free", "magnification", "immersion"]);
+/** What the digits amount to is worked out by a part that comes once the form is there. */
+const loadCompose = () => import("#app/features/readings/compose-reading.ts");
 const pick = ({ id, errors }: { id: string; errors?: string[] }) => ({ id, errors });
 
 /** What follows from the digits, before they are saved. */

@@ -4,7 +4,8 @@ import { Card } from "#app/components/ui/card.tsx";
 import { Chip } from "#app/components/ui/chip.tsx";
 import { observationKindNames, observationKinds } from "#app/domain/reading.ts";
 import { readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
-import { dropDeed, keepDeed, type Whose } from "./outbox/outbox.ts";
+import { loadOutbox } from "./outbox/load-outbox.ts";
+import type { Whose } from "./outbox/outbox.ts";
 import type { KeptDeed } from "./outbox/outbox-store.ts";
 import { StrikeForm } from "./strike-form.tsx";
 import type { WaitingReading } from "./waiting-reading.ts";
@@ -33,14 +34,14 @@ export function WaitingReadings({ deeds, readings, whose, stoneCode }: WaitingRe
               </div>
               {deed.refusal === null ? (
                 made && !strike ? (
-                  <StrikeForm onStrike={(reason) => keepDeed({ id: uuidv7(), kind: "strike", ...whose, stoneCode, fields: [["reason", reason], ["named.requestId", deed.id]], madeAt: new Date().toISOString() })} />
+                  <StrikeForm onStrike={async (reason) => (await loadOutbox()).keepDeed({ id: uuidv7(), kind: "strike", ...whose, stoneCode, fields: [["reason", reason], ["named.requestId", deed.id]], madeAt: new Date().toISOString() })} />
                 ) : null
               ) : (
                 <div className="grid gap-2">
                   <p className="text-red">{deed.refusal}</p>
                   <p className="text-ink-2">It is on this device only. Record it anew if it still holds; then leave this one out.</p>
                   <div>
-                    <Button type="button" look="quiet" onClick={() => void dropDeed(deed.place)}>
+                    <Button type="button" look="quiet" onClick={() => void loadOutbox().then(({ dropDeed }) => dropDeed(deed.place))}>
                       Leave it out
                     </Button>
                   </div>

@@ -1,5 +1,5 @@
 import { useEffect } from "react";
-import { keepPage } from "./kept-page.ts";
+import { loadOutbox } from "./load-outbox.ts";
 
 const worker = "/bench-worker.js";
 
@@ -7,7 +7,7 @@ const worker = "/bench-worker.js";
 export function useOfflineBench({ labSlug, stoneCode, person, loaderData }: { labSlug: string; stoneCode: string; person: string; /** Null: nothing to keep. */ loaderData: object | null }): void {
   const isKept = loaderData !== null;
   useEffect(() => {
-    if (loaderData) void keepPage({ labSlug, stoneCode, person, loaderData });
+    if (loaderData) void loadOutbox().then(({ keepPage }) => keepPage({ labSlug, stoneCode, person, loaderData }));
   }, [labSlug, stoneCode, person, loaderData]);
   useEffect(() => {
     if (!isKept || !("serviceWorker" in navigator)) return;
@@ -20,7 +20,10 @@ export function useOfflineBench({ labSlug, stoneCode, person, loaderData }: { la
 /** Parts that come only when they are asked for are asked for now, so that they are there later. */
 const warmParts = () =>
   Promise.all([
+    import("../live-bench.tsx"),
     import("../rotation-editor.tsx"),
+    import(""),
+    import("#app/features/readings/compose-reading.ts"),
     import("../waiting-reading.ts"),
     import("#app/components/charts/index-density-map.tsx"),
     import("#app/features/identification/rank-readings.ts"),

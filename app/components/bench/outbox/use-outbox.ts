@@ -1,9 +1,7 @@
-import { useQuery, useQueryClient } from "@tanstack/react-query";
-import { useCallback, useEffect } from "react";
+import { useCallback, useEffect, useState } from "react";
 import { useRevalidator } from "react-router";
-import { flushOutbox } from "./flush-outbox.ts";
-import { deedsOf, type Whose } from "./outbox.ts";
-import { onOutboxChange } from "./outbox-news.ts";
+import { loadOutbox } from "./load-outbox.ts";
+import type { Whose } from "./outbox.ts";
 import type { KeptDeed } from "./outbox-store.ts";
 
 const retryEveryMs = 4_000;
@@ -11,13 +9,30 @@ const none: readonly KeptDeed[] = [];
 
 /** What waits on this device for one stone; sent as soon as the line is there, and the page brought up to date after. */
 export function useOutbox({ person, labSlug }: Whose, stoneCode: string): readonly KeptDeed[] {
-  const queries = useQueryClient();
   const { revalidate } = useRevalidator();
-  const { data: deeds = none } = useQuery({ queryKey: ["outbox", person, labSlug, stoneCode], queryFn: () => deedsOf({ person, labSlug }, stoneCode), networkMode: "always", retry: false });
-  useEffect(() => onOutboxChange(() => void queries.invalidateQueries({ queryKey: ["outbox"] })), [queries]);
+  const [deeds, setDeeds] = useState(none);
+  useEffect(() => {
+    let [stop, isGone] = [() => {}, false];
+    const follow = async () => {
+      const { deedsOf, onOutboxChange } = await loadOutbox();
+      const read = async () => {
+        const now = await deedsOf({ person, labSlug }, stoneCode);
+        if (!isGone) setDeeds((before) => (before.length === 0 && now.length === 0 ? before : now));
+      };
+      if (isGone) return;
+      stop = onOutboxChange(() => void read());
+      await read();
+    };
+    // A browser that keeps nothing has nothing waiting.
+    follow().catch(() => {});
+    return () => {
+      isGone = true;
+      stop();
+    };
+  }, [person, labSlug, stoneCode]);
 
   const flush = useCallback(async () => {
-    const { sent } = await flushOutbox({ person, labSlug });
+    const { sent } = await (await loadOutbox()).flushOutbox({ person, labSlug });
     if (sent > 0) void revalidate();
   }, [person, labSlug, revalidate]);
   const isWaiting = deeds.some(({ refusal }) => refusal === null);

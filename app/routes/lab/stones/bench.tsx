@@ -1,27 +1,25 @@
 import type { SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
-import { useCallback, useMemo, useState } from "react";
+import { lazy, Suspense, useCallback, useMemo, useState } from "react";
 import { Link, redirect } from "react-router";
 import { uuidv7 } from "uuidv7";
 import { HiddenCandidatesCard, HideCandidatesForm } from "#app/components/bench/hide-candidates-card.tsx";
 import { RankingViewForm } from "#app/components/bench/ranking-view-form.tsx";
 import { BenchKeys } from "#app/components/bench/bench-keys.tsx";
-import { BenchQueries } from "#app/components/bench/bench-queries.tsx";
-import { keptPage } from "#app/components/bench/outbox/kept-page.ts";
-import { deedsOf, keepDeed } from "#app/components/bench/outbox/outbox.ts";
+import { loadOutbox } from "#app/components/bench/outbox/load-outbox.ts";
 import { useOutbox } from "#app/components/bench/outbox/use-outbox.ts";
 import { useOfflineBench } from "#app/components/bench/outbox/use-offline-bench.ts";
 import { strikesThatWait } from "#app/components/bench/strikes-that-wait.ts";
 import { useWaitingReadings } from "#app/components/bench/use-waiting-readings.ts";
 import { WaitingReadings } from "#app/components/bench/waiting-readings.tsx";
 import { NextTestsCard } from "#app/components/bench/next-tests-card.tsx";
-import { FollowStone } from "#app/components/bench/follow-stone.tsx";
 import { CheckOffer } from "#app/components/bench/check-offer.tsx";
 import { NewReading } from "#app/components/bench/new-reading.tsx";
 import { ReadingsTable } from "#app/components/bench/readings-table.tsx";
 import { StoneHeader } from "#app/components/bench/stone-header.tsx";
 import { TestChoice } from "#app/components/bench/test-choice.tsx";
-import { LiveCandidates } from "#app/components/bench/live-candidates.tsx";
+import { CandidatesCard } from "#app/components/bench/candidates-card.tsx";
+import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 import { isWithoutLine, noteLine } from "#app/components/layout/line-state.ts";
 import { LinkButton } from "#app/components/ui/button.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
@@ -134,7 +132,7 @@ export async function clientLoader({ serverLoader, request, params }: Route.Clie
     return loaded;
   } catch (error) {
     if (isWithoutLine(error)) noteLine("down");
-    const kept = isWithoutLine(error) ? await keptPage<Awaited<ReturnType<typeof serverLoader>>>(params.labSlug, params.stoneCode) : null;
+    const kept = isWithoutLine(error) ? await (await loadOutbox()).keptPage<Awaited<ReturnType<typeof serverLoader>>>(params.labSlug, params.stoneCode) : null;
     if (!kept) throw error;
     return { ...kept, test: testOf(new URL(request.url)), requestId: uuidv7(), isKept: true };
   }
@@ -143,6 +141,7 @@ export async function clientLoader({ serverLoader, request, params }: Route.Clie
 /** Sends a reading, or keeps it on the device: without the line, and behind what waits there already. */
 export async function clientAction({ serverAction, request, params }: Route.ClientActionArgs) {
   const form = await request.clone().formData();
+  const { deedsOf, keepDeed, keptPage } = await loadOutbox();
   const kept = await keptPage<Route.ComponentProps["loaderData"]>(params.labSlug, params.stoneCode);
   if (!kept) return serverAction();
   const whose = { person: kept.person, labSlug: params.labSlug };
@@ -197,7 +196,6 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
       {loaderData.isOffered ? (
         <CheckOffer base={base} />
       ) : loaderData.readings && loaderData.ranking ? (
-        <BenchQueries>
         <Examination
           {...loaderData}
           labSlug={params.labSlug}
@@ -207,7 +205,6 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
           mapHref={`/lab/${params.labSlug}/species/map?stone=${stone.code}${mayCheck ? "&show=examination" : ""}`}
           lastResult={actionData?.result}
         />
-        </BenchQueries>
       ) : (
         <Card title="Readings and conclusions" className="max-w-3xl">
           <CardBody>
@@ -225,10 +222,14 @@ export default function BenchRoute({ loaderData, actionData, params }: Route.Com
 type LoaderData = Route.ComponentProps["loaderData"];
 type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { labSlug: string; readings: NonNullable<LoaderData["readings"]>; ranking: NonNullable<LoaderData["ranking"]>; base: string; mapHref: string; lastResult: SubmissionResult<string[]> | undefined };
 
+/** Comes after the page works; the server's own ranking stands until then, and without script. */
+const LiveBench = lazy(() => import("#app/components/bench/live-bench.tsx"));
+
 function Examination({ labSlug, person, isKept, readings, ranking, next, instruments, test, requestId, areCandidatesHidden, plan, view, spectrum, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
   const canStrike = ({ isOwn, isOfSecondCheck }: (typeof readings)[number]) => !isOfSecondCheck && (can.strikeAll || (can.strikeOwn && isOwn));
   const latestStrikeable = readings.findLast((reading) => !reading.strike && canStrike(reading));
+  const isHydrated = useIsHydrated();
   const struckCount = readings.filter(({ strike }) => strike).length;
   const hidden = areCandidatesHidden ? `&candidates=hidden${planSearch(plan)}` : "";
   const standing = useMemo(() => (view.standing ? examined.filter(({ sequence }) => view.standing!.includes(sequence)).map((reading) => ({ ...reading, strike: null })) : examined), [examined, view.standing]);
@@ -244,7 +245,6 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
   const counted = useMemo(() => [...standing.filter(({ sequence }) => !strikesWaiting.has(sequence)), ...waiting.filter(({ isStruck }) => !isStruck).map(({ reading }) => ({ ...reading, sequence: null }))], [standing, waiting, strikesWaiting]);
   return (
     <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_24rem] xl:grid-cols-[minmax(0,1fr)_30.75rem]">
-      <FollowStone base={base} mark={stone.version} />
       <BenchKeys concludeTo={can.conclude ? `${base}/conclusion` : null} strikeTo={latestStrikeable ? `${base}/readings/${latestStrikeable.sequence}/strike` : null} />
       <div className="grid min-w-0 gap-5">
         {isKept ? <Caution>No line. This page is as it was last shown here; what you record waits on this device and is sent, in order, when the line is back.</Caution> : null}
@@ -284,7 +284,7 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
             strikesWaiting={strikesWaiting}
             strikeHere={
               isKept || deeds.length > 0
-                ? (sequence, reason) => keepDeed({ id: uuidv7(), kind: "strike", ...whose, stoneCode: stone.code, fields: [["reason", reason], ["named.sequence", String(sequence)]], madeAt: new Date().toISOString() })
+                ? async (sequence, reason) => (await loadOutbox()).keepDeed({ id: uuidv7(), kind: "strike", ...whose, stoneCode: stone.code, fields: [["reason", reason], ["named.sequence", String(sequence)]], madeAt: new Date().toISOString() })
                 : undefined
             }
             canStrike={canStrike}
@@ -298,12 +298,23 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
         ) : null}
       </div>
       <div className="grid min-w-0 gap-5">
+        {areCandidatesHidden && isHydrated ? (
+          <Suspense fallback={null}>
+            <LiveBench base={base} mark={stone.version} candidates={null} />
+          </Suspense>
+        ) : null}
         {areCandidatesHidden ? (
           <HiddenCandidatesCard planLeft={plan.left} showHref={`?test=${test}`} />
         ) : (
           <>
             {view.standing ? <Caution>The ranking {view.atSequence === null ? "with what the struck readings said" : `as it was after reading ${view.atSequence}`}. <Link to={`?test=${test}`} preventScrollReset className="text-link">Back to now</Link></Caution> : null}
-            <LiveCandidates saved={ranking} readings={counted} compare={view.compare} prior={view.prior} typed={can.record && !view.standing ? typed : null} />
+            {isHydrated ? (
+              <Suspense fallback={<CandidatesCard ranking={ranking} prior={view.prior} />}>
+                <LiveBench base={base} mark={stone.version} candidates={{ saved: ranking, readings: counted, compare: view.compare, prior: view.prior, typed: can.record && !view.standing ? typed : null }} />
+              </Suspense>
+            ) : (
+              <CandidatesCard ranking={ranking} prior={view.prior} />
+            )}
             {next && can.record ? <NextTestsCard next={next} hrefOf={(kind) => `?test=${kind}`} /> : null}
             <RankingViewForm
               key={`${view.prior}-${view.atSequence}-${view.areStruckCounted}-${view.compare.join("-")}`}
