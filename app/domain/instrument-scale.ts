@@ -46,7 +46,7 @@ export const scaleUnitsOf: Readonly<Record<InstrumentKind, readonly ScaleUnit[]>
  * Kinds that measure: each of their readings names a check that was valid when it was made (workflow 1.4). The others
  * are judged by their checks only once they have had one.
  */
-const measuring: ReadonlySet<InstrumentKind> = new Set<InstrumentKind>(["refractometer", "angleRefractometer", "brewsterMeter", "spectroscope", "balance", "gauge", "thermometer"]);
+const measuring: ReadonlySet<InstrumentKind> = new Set<InstrumentKind>(["refractometer", "angleRefractometer", "brewsterMeter", "reflectivityMeter", "spectroscope", "balance", "gauge", "heavyLiquids", "thermometer"]);
 
 export function isMeasuring(kind: InstrumentKind): boolean {
   return measuring.has(kind);

@@ -84,7 +84,7 @@ const instrumentPlans = [
   { kind: "gauge", name: "G1", description: "leverage gauge, 0.01 mm", location: "Bench 2", resolution: 0.01, check: ["gauge block 5 mm", "5.00", "5.00", "0.02"], ageDays: 6 },
   { kind: "refractometer", name: "R3", description: "shadow-edge refractometer, for spots", location: "Bench 3", resolution: 0.01, upperLimit: 1.79, check: ["quartz, ordinary ray", "1.544", "1.545", "0.005"], ageDays: 2, failsAs: "1.558" },
   { kind: "dichroscope", name: "D1", description: "calcite dichroscope", location: "Bench 2", check: null, ageDays: 0 },
-  { kind: "spectroscope", name: "S1", description: "diffraction-grating spectroscope", location: "Bench 1", check: null, ageDays: 0 },
+  { kind: "spectroscope", name: "S1", description: "diffraction-grating spectroscope", location: "Bench 1", resolution: 1, check: ["mercury line", "546.1", "546", "3"], ageDays: 5 },
   { kind: "uvLamp", name: "L1", description: "viewing cabinet, 365 and 254 nm, interlocked", location: "Dark corner", check: null, ageDays: 0 },
   { kind: "colourFilter", name: "F1", description: "dichromatic filter", location: "Bench 1", check: null, ageDays: 0 },
   { kind: "thermalProbe", name: "T1", description: "thermal probe", location: "Bench 1", check: null, ageDays: 0 },

@@ -28,7 +28,7 @@ async function firstLoad(path: string) {
   return { scripts, styles };
 }
 
-test.each(["stones", "stones/MQ-26-0015-1", "stones/MQ-26-0015-1/conclusion", "take-ins/new", "stones/MQ-26-0008-1/valuation", "reports/MQ-R-26-00005", "invoices", "settings/prices"])("%s loads little before it works", async (page) => {
+test.each(["stones", "stones/MQ-26-0015-1", "stones/MQ-26-0015-1/conclusion", "stones/MQ-26-0013-1/spectra", "stones/MQ-26-0013-1/inclusions", "take-ins/new", "stones/MQ-26-0008-1/valuation", "reports/MQ-R-26-00005", "invoices", "settings/prices"])("%s loads little before it works", async (page) => {
   const { scripts, styles } = await firstLoad(`/lab/marram-quay/${page}`);
   expect(scripts.size).toBeGreaterThan(3);
   const sizes = [...scripts].map(([file, text]) => ({ file, bytes: gzippedBytes(text) }));

@@ -34,6 +34,8 @@ test.each([
   ["/stones/MQ-26-0015-1", 3],
   ["/stones/MQ-26-0008-1/valuation", 5],
   ["/stones/MQ-26-0015-1/conclusion", 4],
+  ["/stones/MQ-26-0013-1/spectra", 3],
+  ["/stones/MQ-26-0013-1/inclusions", 5],
   ["/take-ins/MQ-T-26-0008", 3],
   ["/invoices/MQ-I-26-00008", 3],
   ["/reports/MQ-R-26-00005", 3],

@@ -1,7 +1,8 @@
 import { renderToStaticMarkup } from "react-dom/server";
 import { expect, test } from "vitest";
 import { spectrumKeyAct } from "#app/components/bench/spectrum/spectrum-keys.ts";
-import { SpectrumLinesField } from "#app/components/bench/spectrum/spectrum-lines-field.tsx";
+import { SpectrumDrawing } from "#app/components/bench/spectrum/spectrum-drawing.tsx";
+import { SpectrumField } from "#app/components/bench/spectrum/spectrum-field.tsx";
 import { DrawnSpectrum } from "#app/components/charts/spectrum/drawn-spectrum.tsx";
 import { readSpectrumLines } from "#app/domain/bench-tests/spectrum-lines.ts";
 import { absorptionLines } from "#app/features/species/absorption-lines.ts";
@@ -25,11 +26,15 @@ test("a line outside what is drawn is not drawn, and still told", () => {
   expect(markup).toContain("line at 720 nm");
 });
 
-test("without script the field is words, with the picture of what they say", () => {
-  const markup = renderToStaticMarkup(<SpectrumLinesField id="lines" name="lines" defaultValue="694 e, 540-580 band" errors={["“x” is no line."]} candidates={absorptionLines(loadSpeciesTable().table, ["corundum", "diamond"])} />);
+test("the field is words, whether or not the drawing is there", () => {
+  const markup = renderToStaticMarkup(<SpectrumField id="lines" name="lines" label="Lines and bands" defaultValue="694 e, 540-580 band" errors={["“x” is no line."]} />);
   expect(markup).toMatch(/<textarea[^>]*name="lines"[^>]*>694 e, 540-580 band<\/textarea>/);
-  expect(markup).toContain("line at 694 nm, shining");
   expect(markup).toContain("“x” is no line.");
+});
+
+test("without script the drawing is a picture of the words, with the candidates' lines above it", () => {
+  const markup = renderToStaticMarkup(<SpectrumDrawing field={{ current: null }} text="694 e, 540-580 band" id="lines" maxLength={500} candidates={absorptionLines(loadSpeciesTable().table, ["corundum", "diamond"])} />);
+  expect(markup).toContain("line at 694 nm, shining");
   expect(markup).toContain("Corundum");
   expect(markup).not.toContain("<button");
 });

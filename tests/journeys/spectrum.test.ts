@@ -116,6 +116,10 @@ test("a measured spectrum is attached, a bad file refused with its line, its pea
 test("without script a spectrum is attached, looked at and taken into a reading as well", async () => {
   const { page } = await aGemmologist({ hasScript: false });
   await page.goto(`${stone}/spectra`);
+  await page.getByLabel("The drawn spectrum of the bench").selectOption("violet-prism");
+  await page.getByRole("button", { name: "Keep", exact: true }).click();
+  expect(page.url()).toContain("/spectra");
+  expect(await page.getByLabel("The drawn spectrum of the bench").inputValue()).toBe("violet-prism");
   await page.getByLabel("File of the spectrum").setInputFiles({ name: "table.csv", mimeType: "text/csv", buffer: table });
   await page.getByRole("button", { name: "Attach", exact: true }).click();
   await page.getByText(/Spectrum \d+ is kept/).waitFor();

@@ -1,5 +1,4 @@
 import type { FieldMetadata } from "@conform-to/react";
-import { lazy, Suspense } from "react";
 import { keepSpectrumView } from "#app/components/charts/spectrum/keep-spectrum-view.ts";
 import { CheckboxField, CheckboxGroupField } from "#app/components/ui/choice-field.tsx";
 import { checkboxProps, fieldProps } from "#app/components/ui/field-props.ts";
@@ -8,17 +7,7 @@ import { TextAreaField, TextField } from "#app/components/ui/text-field.tsx";
 import type { TestField } from "#app/domain/bench-tests/test-form.ts";
 import { testForms, type DescribedKind } from "#app/domain/bench-tests/test-forms.ts";
 import type { SpectrumAround } from "./spectrum/spectrum-around.ts";
-import type { SpectrumLinesFieldProps } from "./spectrum/spectrum-lines-field.tsx";
-
-/** The drawing comes after the page works; until then, without script, and where it cannot be fetched for want of a line, the words alone are typed. */
-const SpectrumLinesField = lazy(async () => {
-  const drawn = await import("./spectrum/spectrum-lines-field.tsx").catch(() => null);
-  return { default: drawn?.SpectrumLinesField ?? SpectrumWords };
-});
-
-function SpectrumWords({ id, name, label = "Lines and bands", hint, errors, defaultValue, maxLength, placeholder }: SpectrumLinesFieldProps) {
-  return <TextAreaField {...{ id, name, label, hint, errors, defaultValue, maxLength, placeholder }} isRequired={false} rows={2} />;
-}
+import { SpectrumField } from "./spectrum/spectrum-field.tsx";
 
 type Fields = Readonly<Record<string, FieldMetadata<string, Record<string, string>, string[]>>>;
 const units: Partial<Record<string, string>> = { deg: "°", degC: "°C", x: "×", "1": "" };
@@ -32,7 +21,7 @@ export function DescribedFields({ kind, fields, spectrum }: { kind: DescribedKin
     <>
       {seen.map((field, at) =>
         kind === "spectroscope" && field.name === "lines" ? (
-          <SpectrumField key={field.name} field={field} metadata={fields[field.name]!} spectrum={spectrum} />
+          <LinesField key={field.name} field={field} metadata={fields[field.name]!} spectrum={spectrum} />
         ) : (
           <DescribedField key={field.name} field={field} metadata={fields[field.name]!} isFirst={at === 0} />
         ),
@@ -50,13 +39,18 @@ export function DescribedFields({ kind, fields, spectrum }: { kind: DescribedKin
   );
 }
 
-function SpectrumField({ field, metadata, spectrum }: { field: TestField; metadata: Fields[string]; spectrum?: SpectrumAround }) {
+function LinesField({ field, metadata, spectrum }: { field: TestField; metadata: Fields[string]; spectrum?: SpectrumAround }) {
   const { id, name, errors, defaultValue = spectrum?.taken } = fieldProps(metadata);
-  const words = { id, name, errors, defaultValue, label: field.label, hint: field.hint, maxLength: field.type === "words" ? field.most : undefined, placeholder: field.type === "words" ? field.example : undefined };
   return (
-    <Suspense fallback={<SpectrumWords {...words} />}>
-      <SpectrumLinesField {...words} view={spectrum?.view} candidates={spectrum?.candidates} onView={keepSpectrumView} />
-    </Suspense>
+    <SpectrumField
+      {...{ id, name, errors, defaultValue }}
+      label={field.label}
+      hint={field.hint}
+      maxLength={field.type === "words" ? field.most : undefined}
+      placeholder={field.type === "words" ? field.example : undefined}
+      around={spectrum}
+      onView={keepSpectrumView}
+    />
   );
 }
 

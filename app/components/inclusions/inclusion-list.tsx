@@ -21,7 +21,9 @@ export function InclusionList({ inclusions, photoNumber, canStrike, reason }: In
           <HeaderCell>Where</HeaderCell>
           <HeaderCell>How deep, how large</HeaderCell>
           <HeaderCell hideBelow="md">By</HeaderCell>
-          <HeaderCell />
+          <HeaderCell>
+            <span className="sr-only">Strike</span>
+          </HeaderCell>
         </tr>
       </thead>
       <tbody>

@@ -7,7 +7,7 @@ type TableProps = { caption: string; isCaptionShown?: boolean; children: ReactNo
 /** A table that scrolls sideways in its own frame where the screen is narrow, by keyboard too. */
 export function Table({ caption, isCaptionShown = false, children, className = "" }: TableProps) {
   return (
-    <div className="overflow-x-auto rounded-b-lg print:overflow-visible" tabIndex={0} role="region" aria-label={caption}>
+    <div className="relative overflow-x-auto rounded-b-lg print:overflow-visible" tabIndex={0} role="region" aria-label={caption}>
       <table className={`w-full border-collapse text-left ${className}`}>
         <caption className={isCaptionShown ? "px-4.5 py-2 text-left text-xs text-ink-3" : "sr-only"}>{caption}</caption>
         {children}

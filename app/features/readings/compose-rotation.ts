@@ -22,12 +22,12 @@ export function composeRotation(draft: Extract<ReadingDraft, { kind: "rotation" 
   const rows = plainText(draft.rows);
   if (rows.length > mostText) return { problems: { rows: [`At most ${mostText} characters; this is ${rows.length}.`] } };
   if (quality === "noResult") return { reading: { detail: { kind, light, rows: "", character: "undetermined", sign: null, solutions: [] }, quality, values: [] } };
-  const { run, problem } = readRotationRows(rows, edgeUncertainty({ instrument, light, quality }));
+  const { run: read, problem } = readRotationRows(rows, edgeUncertainty({ instrument, light, quality }));
   if (problem !== null) return { problems: { rows: [problem] } };
   const limit = instrument?.upperLimit;
-  const beyond = limit ? run.facets.flatMap(({ readings }) => readings).find(({ upper, lower }) => Math.max(upper ?? 0, lower ?? 0) > limit + 0.002) : undefined;
+  const beyond = limit ? read.facets.flatMap(({ readings }) => readings).find(({ upper, lower }) => Math.max(upper ?? 0, lower ?? 0) > limit + 0.002) : undefined;
   if (beyond) return { problems: { rows: [`${Math.max(beyond.upper ?? 0, beyond.lower ?? 0).toFixed(3)} at ${beyond.angleDeg}° lies above ${limit}, the limit of this refractometer's contact liquid: write a dash for an edge beyond it.`] } };
-  const { run: corrected, u: correctionU } = correctRun(run, instrument);
+  const { run: corrected, u: correctionU } = correctRun(read, instrument);
   const fit = fitRotation(corrected);
   const { character, sign } = rotationFinding(fit);
   return { reading: { detail: { kind, light, rows, character, sign, solutions: solutionsOf(fit) }, quality, values: valuesOf(fit, correctionU) } };
@@ -50,7 +50,7 @@ const rivalAt = 9;
 const rivalsOf = ({ solutions }: RotationFit) => solutions.filter(({ deltaChiSquared }) => deltaChiSquared <= rivalAt);
 
 /** Every edge corrected before the fit; what was typed stays in its rows. `u` is the correction's own; null where none is in force. */
-function correctRun(run: RotationRun, instrument: ReadingInstrument | null): { run: RotationRun; u: number | null } {
+export function correctRun(run: RotationRun, instrument: ReadingInstrument | null): { run: RotationRun; u: number | null } {
   let u: number | null = null;
   const correct = (edge: number | null | undefined) => {
     if (typeof edge !== "number") return edge;

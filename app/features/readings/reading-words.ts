@@ -46,7 +46,7 @@ export function figureText({ typedText, value, rawValue }: Pick<ReadingValue, "t
   return typedDecimal(typedText || String(value));
 }
 
-const figureOrder: readonly ReadingValueName[] = ["low", "high", "n", "angleDeg", "massAirCt", "massLiquidCt", "weightCt", "lengthMm", "widthMm", "depthMm"];
+const figureOrder: readonly ReadingValueName[] = ["low", "high", "n", "angleDeg", "massAirCt", "massAirCt2", "massAirCt3", "massLiquidCt", "massLiquidCt2", "massLiquidCt3", "weightCt", "lengthMm", "widthMm", "depthMm"];
 
 /** What the instrument showed before its correction: "read 1.762 – 1.770, corrected by +0.0004"; empty where none was in force. */
 export function correctionText(values: readonly ReadingValue[]): string {

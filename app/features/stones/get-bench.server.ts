@@ -16,6 +16,7 @@ import type { LabContext } from "#app/features/lab-context.ts";
 import { listReadings } from "#app/features/readings/list-readings.server.ts";
 import type { ReadingView } from "#app/features/readings/reading-view.ts";
 import { requireRole } from "#app/features/require-role.ts";
+import { hasHandIn } from "#app/features/second-checks/has-hand-in.ts";
 import { selfCheckFrom } from "#app/features/second-checks/self-check-from.ts";
 import type { Correction } from "#app/gemmology/calibration/correction.ts";
 import { parseJsonRows } from "./parse-json-rows.ts";
@@ -93,7 +94,7 @@ export async function getStoneHead(ctx: LabContext, { stoneCode }: { stoneCode: 
       takeInNumber: takeIns.number,
       holder: sql<string | null>`(select h.name from users h where h.id = ${stones.holderId})`,
       examiner: users.name,
-      hasOwnReadings: sql<number>`exists (select 1 from observations o where o.laboratory_id = ${stones.laboratoryId} and o.stone_id = ${stones.id} and o.observer_id = ${actor} and o.second_check_id is null)`,
+      hasHand: hasHandIn(actorId),
       consents: sql<string | null>`(select json_arrayagg(c.code) from item_consents c where c.laboratory_id = ${items.laboratoryId} and c.item_id = ${items.id} and c.is_given)`,
       conclusion: sql<string | null>`(select json_arrayagg(json_object('version', k.version, 'concludedAt', date_format(k.concluded_at, '%Y-%m-%dT%H:%i:%s.%fZ'), 'by', p.name, 'isOwn', k.concluded_by = ${actor}, 'speciesName', k.species_name, 'variety', k.variety, 'nature', k.nature))
         from conclusions k join users p on p.id = k.concluded_by where k.laboratory_id = ${stones.laboratoryId} and k.stone_id = ${stones.id})`,
@@ -120,10 +121,10 @@ export async function getStoneHead(ctx: LabContext, { stoneCode }: { stoneCode: 
     .where(and(eq(stones.laboratoryId, laboratoryId), eq(stones.code, stoneCode)));
   if (!row) throw new AppError("not_found", "There is no such stone.");
 
-  const { photoId, clientId, examinerId, hasOwnReadings, consents, conclusion, checks, instruments, ...stone } = row;
+  const { photoId, clientId, examinerId, hasHand, consents, conclusion, checks, instruments, ...stone } = row;
   const latest = parseJsonRows<ConclusionRow>(conclusion).sort((a, b) => b.version - a.version)[0];
   const check = parseJsonRows<CheckRow>(checks).find(({ version }) => version === latest?.version);
-  const isInvolved = examinerId === actorId || Boolean(Number(hasOwnReadings)) || Boolean(latest && Number(latest.isOwn));
+  const isInvolved = examinerId === actorId || Boolean(Number(hasHand)) || Boolean(latest && Number(latest.isOwn));
   const today = calendarDateIn(ctx.now, laboratory.timeZone);
   const concludedAt = latest ? new Date(latest.concludedAt) : null;
   const isCheckerBlind = Boolean(check && Number(check.isOwn) && check.comparedAt === null);

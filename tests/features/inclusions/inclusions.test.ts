@@ -13,6 +13,7 @@ import { setStoneOutline } from "#app/features/inclusions/set-stone-outline.serv
 import { strikeInclusion } from "#app/features/inclusions/strike-inclusion.server.ts";
 import { addPhoto } from "#app/features/photos/add-photo.server.ts";
 import { startSecondCheck } from "#app/features/second-checks/start-second-check.server.ts";
+import { getStoneHead } from "#app/features/stones/get-bench.server.ts";
 import { idFromShortRef } from "#app/domain/short-ref.ts";
 import { aBench } from "../../setup/bench-factory.ts";
 import { aConcludedStone } from "../../setup/conclusion-factory.ts";
@@ -128,6 +129,20 @@ test("a concluded or released stone takes nothing more, and an open check sees n
   const checker = await aMember(ctx, ["gemmologist"]);
   await startSecondCheck(checker, { stoneCode, requestId: newId<"secondCheck">() });
   await expect(getInclusions(checker, { stoneCode })).rejects.toMatchObject({ code: "not_found" });
+});
+
+test("whoever plotted an inclusion had a hand in the examination and does not do the second check", async () => {
+  const { ctx, input } = await aPlot();
+  const { stoneCode } = await aConcludedStone(ctx);
+  const helper = await aMember(ctx, ["gemmologist"]);
+  await ctx.db.update(stones).set({ examinationState: "examining" }).where(eq(stones.code, stoneCode));
+  await recordInclusion(helper, input({ stoneCode }));
+  await ctx.db.update(stones).set({ examinationState: "concluded" }).where(eq(stones.code, stoneCode));
+  expect((await getStoneHead(helper, { stoneCode })).isInvolved).toBe(true);
+  await expect(startSecondCheck(helper, { stoneCode, requestId: newId<"secondCheck">() })).rejects.toMatchObject({ code: "forbidden" });
+  const another = await aMember(ctx, ["gemmologist"]);
+  expect((await getStoneHead(another, { stoneCode })).isInvolved).toBe(false);
+  await startSecondCheck(another, { stoneCode, requestId: newId<"secondCheck">() });
 });
 
 const form = (fields: Record<string, string>) => {

@@ -155,7 +155,7 @@ test("with every kind of evidence, probabilities are numbers that sum to one, an
       const scores = ranking.candidates.map(({ probability, speciesId }) => ({ probability, speciesId }));
       expect([...scores].sort((a, b) => b.probability - a.probability || (a.speciesId < b.speciesId ? -1 : 1))).toEqual(scores);
     }),
-    { numRuns: 80, seed: 5 },
+    { numRuns: 40, seed: 5 },
   );
 });
 

@@ -3,6 +3,7 @@ import { Link, redirect } from "react-router";
 import { StoneHeader } from "#app/components/bench/stone-header.tsx";
 import { SpectrumCard } from "#app/components/spectra/spectrum-card.tsx";
 import { SpectrumForm } from "#app/components/spectra/spectrum-form.tsx";
+import { SpectrumViewForm } from "#app/components/spectra/spectrum-view-form.tsx";
 import { LinkButton } from "#app/components/ui/button.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import { EmptyState } from "#app/components/ui/empty-state.tsx";
@@ -19,9 +20,10 @@ import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
 import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { noticeHeader } from "#app/web/notice.server.ts";
 import { orResponse } from "#app/web/or-response.server.ts";
+import { spectrumViewOf } from "#app/web/spectrum-view.server.ts";
 import type { Route } from "./+types/spectra";
 
-export async function loader({ context, params }: Route.LoaderArgs) {
+export async function loader({ request, context, params }: Route.LoaderArgs) {
   const ctx = context.get(labContext);
   const [spectra, { stone, isCheckerBlind }] = await orResponse(Promise.all([listSpectra(ctx, params), getStoneHead(ctx, params)]));
   if (isCheckerBlind) throw redirect(`/lab/${params.labSlug}/stones/${params.stoneCode}/second-check`);
@@ -32,6 +34,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
     spectra: spectra.map(({ createdAt, withdrawal, ...spectrum }) => ({ ...spectrum, when: when(createdAt), withdrawal: withdrawal && { when: when(withdrawal.at), by: withdrawal.by, reason: withdrawal.reason } })),
     canRecord: isAllowed(ctx.roles, "readings.record") && stone.goodsState !== "released" && ["received", "examining", "returned"].includes(stone.state),
     requestId: newRequestId(),
+    view: spectrumViewOf(request),
   };
 }
 
@@ -96,6 +99,11 @@ export default function SpectraRoute({ loaderData, actionData, params }: Route.C
               </CardBody>
             </Card>
           ) : null}
+          <Card title="As a hand spectroscope shows it" note="for this browser">
+            <CardBody>
+              <SpectrumViewForm view={loaderData.view} />
+            </CardBody>
+          </Card>
           <p className="px-1 text-sm text-ink-2">
             A measured spectrum stands beside what was seen: what it means is recorded as a reading <Link to={`${base}?test=spectroscope`} className="text-link">with the spectroscope</Link>.
           </p>

@@ -1,7 +1,6 @@
-import { useCallback, useId, useRef, useState, type FormEvent } from "react";
+import { useId, useState, type RefObject } from "react";
 import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 import { DrawnSpectrum } from "#app/components/charts/spectrum/drawn-spectrum.tsx";
-import { TextAreaField } from "#app/components/ui/text-field.tsx";
 import { spectrumLineWords } from "#app/domain/bench-tests/spectrum-line-words.ts";
 import { readSpectrumLines, type SpectrumLine } from "#app/domain/bench-tests/spectrum-lines.ts";
 import { writeSpectrumLine, writeSpectrumLines } from "#app/domain/bench-tests/write-spectrum-lines.ts";
@@ -14,15 +13,13 @@ import { SpectrumPad } from "./spectrum-pad.tsx";
 import { SpectrumViewChoice } from "./spectrum-view-choice.tsx";
 import { typeInto } from "./type-into.ts";
 
-export type SpectrumLinesFieldProps = {
+export type SpectrumDrawingProps = {
+  /** The field of words that is drawn, and that the drawing writes into. */
+  field: RefObject<HTMLTextAreaElement | null>;
+  /** What stands in it now. */
+  text: string;
   id: string;
-  name: string;
-  label?: string;
-  hint?: string;
-  errors?: readonly string[];
-  defaultValue?: string;
-  maxLength?: number;
-  placeholder?: string;
+  maxLength: number;
   /** As this browser chose; see spectrum-view.server.ts. */
   view?: SpectrumView;
   onView?: (view: SpectrumView) => void;
@@ -30,24 +27,17 @@ export type SpectrumLinesFieldProps = {
   candidates?: readonly AbsorbingSpecies[];
 };
 
-/**
- * Lines and bands of a spectrum: a field of words, which is what is sent, and the same drawn. Either changes the other.
- * Without script the words alone are typed.
- */
-export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, errors, defaultValue = "", maxLength = 500, placeholder, view: initialView = usualSpectrumView, onView, candidates = [] }: SpectrumLinesFieldProps) {
+/** The lines and bands of a field of words, drawn: either changes the other. Without script it is a picture. */
+export function SpectrumDrawing({ field, text, id, maxLength, view: initialView = usualSpectrumView, onView, candidates = [] }: SpectrumDrawingProps) {
   const isLive = useIsHydrated();
-  const field = useRef<HTMLTextAreaElement>(null);
   const helpId = useId();
-  const [text, setText] = useState(defaultValue);
-  const [selected, setSelected] = useState<number | null>(null);
+  const [chosen, setChosen] = useState<{ at: number; text: string } | null>(null);
   const [chosenView, setChosenView] = useState<SpectrumView | null>(null);
   const view = chosenView ?? initialView;
-  // Somebody may have typed before script took over.
-  const attach = useCallback((element: HTMLTextAreaElement | null) => {
-    field.current = element;
-    if (element) setText(element.value);
-  }, []);
   const { lines, problem } = readSpectrumLines(text);
+  // What is in hand is so until other words are typed.
+  const selected = chosen && chosen.text === text ? chosen.at : null;
+  const setSelected = (at: number | null, of = text) => setChosen(at === null ? null : { at, text: of });
 
   const write = (changed: string) => field.current && typeInto(field.current, changed);
   const add = (line: SpectrumLine) => {
@@ -56,7 +46,7 @@ export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, 
     if (changed.length > maxLength) return;
     write(changed);
     const at = readSpectrumLines(changed).lines.findIndex(({ nm, kind }) => nm === line.nm && kind === line.kind);
-    setSelected(at >= 0 ? at : null);
+    setSelected(at >= 0 ? at : null, changed);
   };
   const replace = (at: number, line: SpectrumLine | null) => {
     const changed = writeSpectrumLines(lines.flatMap((one, index) => (index === at ? (line ?? []) : one)));
@@ -64,7 +54,7 @@ export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, 
     if (refusal !== null || changed.length > maxLength) return;
     write(changed);
     const moved = line ? read.findIndex(({ nm, kind, halfWidthNm }) => nm === line.nm && kind === line.kind && halfWidthNm === line.halfWidthNm) : -1;
-    setSelected(moved >= 0 ? moved : null);
+    setSelected(moved >= 0 ? moved : null, changed);
   };
   const choose = (chosen: SpectrumView) => {
     setChosenView(chosen);
@@ -74,26 +64,6 @@ export function SpectrumLinesField({ id, name, label = "Lines and bands", hint, 
   const inHand = selected === null ? undefined : lines[selected];
   return (
     <div className="grid gap-3">
-      <TextAreaField
-        id={id}
-        name={name}
-        label={label}
-        unit="nm"
-        isRequired={false}
-        rows={2}
-        maxLength={maxLength}
-        placeholder={placeholder}
-        defaultValue={defaultValue}
-        hint={hint}
-        errors={errors}
-        ref={attach}
-        spellCheck={false}
-        autoComplete="off"
-        onInput={(event: FormEvent<HTMLTextAreaElement>) => {
-          setText(event.currentTarget.value);
-          setSelected(null);
-        }}
-      />
       {isLive && problem !== null && text.trim() !== "" ? <p className="text-xs text-straw">{problem}</p> : null}
       <CandidateSpectra species={candidates} view={view} />
       {isLive ? (
