@@ -130,7 +130,7 @@ export default function CorrectionRoute({ loaderData, actionData, params }: Rout
                   ))}
                 </tbody>
               </Table>
-              <CardBody className="grid gap-3">
+              <CardBody className="grid gap-3 border-t border-rule pt-3.5">
                 <RadioGroupField
                   id="model"
                   name="model"
