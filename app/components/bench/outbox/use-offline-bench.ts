@@ -22,7 +22,7 @@ const warmParts = () =>
   Promise.all([
     import("../live-bench.tsx"),
     import("../rotation-editor.tsx"),
-    import(""),
+    import("../spectrum/spectrum-drawing.tsx"),
     import("#app/features/readings/compose-reading.ts"),
     import("../waiting-reading.ts"),
     import("#app/components/charts/index-density-map.tsx"),
