@@ -8,6 +8,7 @@ import { createPasswords } from "#app/integrations/passwords.server.ts";
 import { createStripe } from "#app/integrations/stripe.server.ts";
 import { createUploads } from "#app/integrations/uploads.server.ts";
 import { addPeople, checkInstrumentsAgain, openDemoLaboratory, type Person } from "./demo/open-laboratories.ts";
+import { saveDemoParcel } from "./demo/save-parcel.ts";
 import { marramStories, tarnStories } from "./demo/stories.ts";
 import { tellStory } from "./demo/tell-story.ts";
 
@@ -50,6 +51,7 @@ async function load(): Promise<void> {
     await tellStory(marram, story, { now, cast: { desk: "joss", examiner: "ifeoma", checker: "mattias", appraiser: "teodora", owner: "rosalind" } });
   }
   await checkInstrumentsAgain(marram, { owner: "rosalind", now });
+  await saveDemoParcel(marram.as("mattias", new Date(now.getTime() - 26 * 60 * 60 * 1000)));
   const tarn = await openDemoLaboratory(setting, ids, {
     name: "Tarn & Vale Valuers", slug: "tarn-and-vale", prefix: "TV", isSolePractice: true, owner: "corwen",
     addressLines: ["The Tannery", "Upper Tarn"], phone: "+00 0000 000001", email: "post@tarnandvale.example",

@@ -144,10 +144,14 @@ export type ReadingDetail =
 export const rotationCharacters = ["isotropic", "uniaxial", "biaxial", "undetermined"] as const;
 export type RotationCharacter = (typeof rotationCharacters)[number];
 
-/** One number of a reading. `value` is what was typed, read as a decimal; derived numbers name their formula. */
+/**
+ * One number of a reading. `value` is what was typed, read as a decimal, with the instrument's correction where one was
+ * in force: then `rawValue` is what the instrument showed. Derived numbers name their formula.
+ */
 export type ReadingValue = Readonly<{
   name: ReadingValueName;
   value: number;
+  rawValue?: number | null;
   typedText: string;
   unit: "n" | "deg" | "ct" | "g" | "mm" | "degC" | "kg/m3" | "cm" | "s" | "x" | "%" | "1";
   standardUncertainty: number | null;

@@ -8,6 +8,7 @@ import { createClient } from "#app/features/clients/create-client.server.ts";
 import { grantTerms } from "#app/features/clients/grant-terms.server.ts";
 import { recordInstrumentCheck } from "#app/features/instruments/record-instrument-check.server.ts";
 import { registerInstrument } from "#app/features/instruments/register-instrument.server.ts";
+import { addReferenceMaterial } from "#app/features/reference-materials/add-reference-material.server.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import { openLaboratory } from "#app/features/laboratories/open-laboratory.server.ts";
 import type { Services } from "#app/features/services.ts";
@@ -82,10 +83,11 @@ const instrumentPlans = [
   { kind: "balance", name: "B2", description: "gram balance, 0.01 g", location: "Desk", resolution: 0.01, check: ["check weight 50 g", "50.00", "50.00", "0.02"], ageDays: 3 },
   { kind: "gauge", name: "G1", description: "leverage gauge, 0.01 mm", location: "Bench 2", resolution: 0.01, check: ["gauge block 5 mm", "5.00", "5.00", "0.02"], ageDays: 6 },
   { kind: "dichroscope", name: "D1", description: "calcite dichroscope", location: "Bench 2", check: null, ageDays: 0 },
-  { kind: "spectroscope", name: "S1", description: "diffraction-grating spectroscope", location: "Bench 1", check: null, ageDays: 0 },
+  { kind: "spectroscope", name: "S1", description: "diffraction-grating spectroscope", location: "Bench 1", resolution: 1, check: ["mercury line", "546.1", "546", "3"], ageDays: 5 },
   { kind: "uvLamp", name: "L1", description: "viewing cabinet, 365 and 254 nm, interlocked", location: "Dark corner", check: null, ageDays: 0 },
   { kind: "colourFilter", name: "F1", description: "dichromatic filter", location: "Bench 1", check: null, ageDays: 0 },
   { kind: "thermalProbe", name: "T1", description: "thermal probe", location: "Bench 1", check: null, ageDays: 0 },
+  { kind: "refractometer", name: "R3", description: "shadow-edge refractometer, for spots", location: "Bench 3", resolution: 0.01, upperLimit: 1.79, check: ["quartz, ordinary ray", "1.544", "1.545", "0.005"], ageDays: 2, failsAs: "1.558" },
   { kind: "microscope", name: "M1", description: "darkfield microscope, 10–70×", location: "Bench 1", check: null, ageDays: 0 },
 ] as const;
 
@@ -93,7 +95,10 @@ const instrumentPlans = [
 export async function checkInstrumentsAgain({ as, instruments }: Laboratory, { owner, now }: { owner: string; now: Date }): Promise<void> {
   for (const plan of instrumentPlans) {
     if (!plan.check || plan.name === "R1") continue;
-    await checkInstrument(as(owner, new Date(now.getTime() - plan.ageDays * 24 * 60 * 60 * 1000)), { id: instruments.get(plan.name)!, check: plan.check, usualDays: 14 });
+    const [reference, nominal, reading, limit] = plan.check;
+    // One was knocked: what was read on it is called back.
+    const shown = "failsAs" in plan ? plan.failsAs : reading;
+    await checkInstrument(as(owner, new Date(now.getTime() - plan.ageDays * 24 * 60 * 60 * 1000)), { id: instruments.get(plan.name)!, check: [reference, nominal, shown, limit], usualDays: 14 });
   }
 }
 
@@ -105,6 +110,7 @@ async function checkInstrument(owner: LabContext, { id, check, usualDays }: { id
 }
 
 async function addInstruments(owner: LabContext): Promise<Map<string, InstrumentId>> {
+  await addReferences(owner);
   const instruments = new Map<string, InstrumentId>();
   for (const plan of instrumentPlans) {
     const { kind, name, description, location } = plan;
@@ -117,6 +123,20 @@ async function addInstruments(owner: LabContext): Promise<Map<string, Instrument
     if (plan.check) await checkInstrument(owner, { id, check: plan.check, usualDays: name === "R1" ? 20 : 60 });
   }
   return instruments;
+}
+
+/** Values of the materials: quartz by its Sellmeier equation, spinel and corundum as usually stated (common practice); weights and blocks by their nominal value. */
+const referencePlans = [
+  { name: "Quartz Q1, ordinary ray", forKind: "refractometer", unit: "n", nominalValue: 1.5442, standardUncertainty: 0.0001, limitValue: 0.002, source: "Literature, 589.3 nm" },
+  { name: "Quartz Q1, extraordinary ray", forKind: "refractometer", unit: "n", nominalValue: 1.5533, standardUncertainty: 0.0001, limitValue: 0.002, source: "Literature, 589.3 nm" },
+  { name: "Synthetic spinel S1", forKind: "refractometer", unit: "n", nominalValue: 1.728, standardUncertainty: 0.0005, limitValue: 0.002, source: "Common practice for flame-fusion spinel" },
+  { name: "Check weight 5 ct", forKind: "balance", unit: "ct", nominalValue: 5, standardUncertainty: 0.0005, limitValue: 0.003, source: "Nominal value, class M1" },
+  { name: "Gauge block 5 mm", forKind: "gauge", unit: "mm", nominalValue: 5, standardUncertainty: 0.001, limitValue: 0.02, source: "Nominal value, works certificate" },
+  { name: "Glass plate P1", forKind: "polariscope", unit: null, nominalValue: null, standardUncertainty: null, limitValue: null, expectedText: "dark throughout", source: "Annealed plate, own observation" },
+] as const;
+
+async function addReferences(owner: LabContext): Promise<void> {
+  for (const plan of referencePlans) await addReferenceMaterial(owner, { requestId: newId<"referenceMaterial">(), expectedText: "", condition: "Clean, no chips", conditionSeenOn: calendarDateIn(owner.now, owner.laboratory.timeZone), ...plan });
 }
 
 const clientPlans: ReadonlyArray<{ key: ClientKey; name: string; contactName: string; email: string; addressLines: string[]; hasTerms?: boolean }> = [

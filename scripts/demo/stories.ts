@@ -39,7 +39,7 @@ export const marramStories: readonly Story[] = [
   },
   {
     description: "Black bead strand, 61 beads", photo: { outline: "bead", hue: "black", lengthMm: 8 }, client: "museum", daysAgo: 31, mount: "strung", stoneCount: 61, mass: "41.20", massUnit: "g",
-    readings: [spot("1.54", { facet: "dome" }), polars("staysLight", { note: "thin edge of one chipped bead" }), seen("Even black colour, concentrated at drill holes; waxy fracture on a chip")],
+    readings: [spot("1.54", { facet: "dome", instrument: "R3" }), polars("staysLight", { note: "thin edge of one chipped bead" }), seen("Even black colour, concentrated at drill holes; waxy fracture on a chip")],
     conclusion: {
       speciesName: "Chalcedony", variety: "Black chalcedony", nature: "natural", natureEvidence: "Fine aggregate structure and waxy fracture at a chip.", confidence: "consistentWith", evidence: "Aggregate behaviour; spot index; fracture and lustre.",
       treatments: [finding("dyeing", "detected", "colour concentrated along drill holes and fractures")], rejected: [{ name: "Jet", because: "far heavier in the hand, and glassy where it is chipped" }, { name: "Glass", because: "aggregate between crossed polars" }], limits: ["benchOnly", "partialView", "originNotExamined"],
@@ -83,7 +83,7 @@ export const marramStories: readonly Story[] = [
   },
   {
     description: "Orange-yellow cabochon", photo: { outline: "cabochon", hue: "orange-yellow", lengthMm: 16 }, client: "castellan", daysAgo: 12, mass: "11.80",
-    readings: [weight("11.803"), spot("1.55"), polars("blinks", { figure: "uniaxialHollowCentre", sign: "+" }), density("11.803", "7.348")],
+    readings: [weight("11.803"), spot("1.55", { instrument: "R3" }), polars("blinks", { figure: "uniaxialHollowCentre", sign: "+" }), density("11.803", "7.348")],
   },
   {
     description: "Transparent purplish red oval", photo: { outline: "oval", hue: "purplish red", lengthMm: 8 }, client: "ardenne", daysAgo: 3, mass: "2.14", declared: 6500, statements: "Bought abroad in the 1960s.",

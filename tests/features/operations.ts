@@ -28,9 +28,11 @@ import { listHolders } from "#app/features/custody/list-holders.server.ts";
 import { recordHandOver } from "#app/features/custody/record-hand-over.server.ts";
 import { releaseItem } from "#app/features/custody/release-item.server.ts";
 import { editInstrument } from "#app/features/instruments/edit-instrument.server.ts";
+import { endCorrection } from "#app/features/instruments/end-correction.server.ts";
 import { findBalances } from "#app/features/instruments/find-balances.server.ts";
 import { getInstrument } from "#app/features/instruments/get-instrument.server.ts";
 import { listInstruments } from "#app/features/instruments/list-instruments.server.ts";
+import { previewCorrection } from "#app/features/instruments/preview-correction.server.ts";
 import { recordInstrumentCheck } from "#app/features/instruments/record-instrument-check.server.ts";
 import { addMicroscopePhoto } from "#app/features/inclusions/add-microscope-photo.server.ts";
 import { getInclusions } from "#app/features/inclusions/get-inclusions.server.ts";
@@ -39,16 +41,28 @@ import { setPhotoScale } from "#app/features/inclusions/set-photo-scale.server.t
 import { setStoneOutline } from "#app/features/inclusions/set-stone-outline.server.ts";
 import { strikeInclusion } from "#app/features/inclusions/strike-inclusion.server.ts";
 import { registerInstrument } from "#app/features/instruments/register-instrument.server.ts";
+import { startCorrection } from "#app/features/instruments/start-correction.server.ts";
 import { getInvoice } from "#app/features/invoices/get-invoice.server.ts";
 import { listInvoices } from "#app/features/invoices/list-invoices.server.ts";
 import { recordDeskPayment } from "#app/features/invoices/record-desk-payment.server.ts";
 import { refundInvoice } from "#app/features/invoices/refund-invoice.server.ts";
 import { sendInvoice } from "#app/features/invoices/send-invoice.server.ts";
 import { voidInvoice } from "#app/features/invoices/void-invoice.server.ts";
+import { getParcel } from "#app/features/parcels/get-parcel.server.ts";
+import { listParcels } from "#app/features/parcels/list-parcels.server.ts";
+import { nameParcelItem } from "#app/features/parcels/name-parcel-item.server.ts";
+import { openParcelStone } from "#app/features/parcels/open-parcel-stone.server.ts";
+import { saveParcel } from "#app/features/parcels/save-parcel.server.ts";
 import { addPhoto } from "#app/features/photos/add-photo.server.ts";
 import { findItemForPhoto } from "#app/features/photos/find-item-for-photo.server.ts";
 import { getPhoto } from "#app/features/photos/get-photo.server.ts";
 import { removePhoto } from "#app/features/photos/remove-photo.server.ts";
+import { listRecall } from "#app/features/recalls/list-recall.server.ts";
+import { workRecall } from "#app/features/recalls/work-recall.server.ts";
+import { addReferenceMaterial } from "#app/features/reference-materials/add-reference-material.server.ts";
+import { editReferenceMaterial } from "#app/features/reference-materials/edit-reference-material.server.ts";
+import { getReferenceMaterial } from "#app/features/reference-materials/get-reference-material.server.ts";
+import { listReferenceMaterials } from "#app/features/reference-materials/list-reference-materials.server.ts";
 import { authoriseReport } from "#app/features/reports/authorise-report.server.ts";
 import { getReport } from "#app/features/reports/get-report.server.ts";
 import { issueReportByNumber } from "#app/features/reports/issue-report-by-number.server.ts";
@@ -85,8 +99,10 @@ import { signValuation } from "#app/features/valuations/sign-valuation.server.ts
 import type { ValuationInput } from "#app/features/valuations/valuation-forms.server.ts";
 import { aRequestId } from "../setup/an-app.ts";
 import { aBench, aReading, corundum } from "../setup/bench-factory.ts";
+import { aParcel, aParcelDraft, howRead } from "../setup/parcel-factory.ts";
 import { aConcludedStone, aConclusion } from "../setup/conclusion-factory.ts";
 import { anInvoice } from "../setup/an-invoice.ts";
+import { aCorrectedInstrument, aRecalledReading, aReference, referenceDetails } from "../setup/instrument-factory.ts";
 import { aClient, aMember, anInstrument } from "../setup/factories.ts";
 import { aTakenInItem, itemInput, takeInInput } from "../setup/take-in-factory.ts";
 
@@ -303,6 +319,12 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
   entry({ name: "listSpectra", operation: "readings.read", rows: aMeasuredStone, call: (ctx, stoneCode) => listSpectra(ctx, { stoneCode }), isEmptyElsewhere: "list" }),
   entry({ name: "readSpectrumSource", operation: "readings.read", rows: aMeasuredStone, call: (ctx, stoneCode) => readSpectrumSource(ctx, { stoneCode, sequence: 1 }) }),
   entry({ name: "withdrawSpectrum", operation: "readings.record", rows: aMeasuredStone, call: (ctx, stoneCode) => withdrawSpectrum(ctx, { stoneCode, sequence: 1, reason: "of another stone" }) }),
+  // parcels
+  entry({ name: "listParcels", operation: "readings.read", rows: nothing, call: (ctx) => listParcels(ctx), hasNoIds: true }),
+  entry({ name: "saveParcel", operation: "readings.record", rows: nothing, call: (ctx) => saveParcel(ctx, aParcelDraft()), hasNoIds: true }),
+  entry({ name: "getParcel", operation: "readings.read", rows: (lab) => aParcel(lab), call: (ctx, { parcelId }) => getParcel(ctx, parcelId) }),
+  entry({ name: "nameParcelItem", operation: "readings.record", rows: async (lab) => ({ ...(await aParcel(lab, { itemNumber: "" })), ...(await anItem(lab)) }), call: (ctx, { parcelId, itemNumber }) => nameParcelItem(ctx, parcelId, { itemNumber }) }),
+  entry({ name: "openParcelStone", operation: "readings.record", rows: (lab) => aParcel(lab), call: (ctx, { parcelId, instruments }) => openParcelStone(ctx, parcelId, { ...howRead(instruments), position: 1 }) }),
 
   // photographs
   entry({ name: "findItemForPhoto", operation: "photos.add", rows: anItem, call: (ctx, { itemNumber }) => findItemForPhoto(ctx, itemNumber) }),
@@ -323,6 +345,22 @@ export const operationEntries: ReadonlyArray<OperationEntry<unknown>> = [
     call: (ctx, id) =>
       recordInstrumentCheck(ctx, id, { requestId: newId<"instrumentCheck">(), referenceMaterial: "Quartz", nominal: { value: 1.544, text: "1.544" }, reading: { value: 1.544, text: "1.544" }, limit: { value: 0.001, text: "0.001" }, tempC: 21, nextDueOn: "2026-12-08", note: "" }),
   }),
+  entry({ name: "previewCorrection", operation: "instruments.manage", rows: (lab) => aCorrectedInstrument(lab), call: (ctx, { instrumentId, checkIds }) => previewCorrection(ctx, instrumentId, { checkIds, model: "offset" }) }),
+  entry({
+    name: "startCorrection",
+    operation: "instruments.manage",
+    rows: (lab) => aCorrectedInstrument(lab),
+    call: (ctx, { instrumentId, checkIds }) => startCorrection(ctx, instrumentId, { requestId: newId<"instrumentCorrection">(), checkIds, model: "offset", reason: "new prism" }),
+  }),
+  entry({ name: "endCorrection", operation: "instruments.manage", rows: (lab) => aCorrectedInstrument(lab), call: (ctx, { instrumentId }) => endCorrection(ctx, instrumentId, { reason: "serviced" }) }),
+  entry({ name: "listReferenceMaterials", operation: "instruments.read", rows: nothing, call: (ctx) => listReferenceMaterials(ctx), hasNoIds: true }),
+  entry({ name: "getReferenceMaterial", operation: "instruments.read", rows: (lab) => aReference(lab), call: (ctx, id) => getReferenceMaterial(ctx, id) }),
+  entry({ name: "addReferenceMaterial", operation: "instruments.manage", rows: nothing, call: (ctx) => addReferenceMaterial(ctx, { ...referenceDetails(), requestId: newId<"referenceMaterial">() }), hasNoIds: true }),
+  entry({ name: "editReferenceMaterial", operation: "instruments.manage", rows: (lab) => aReference(lab), call: (ctx, id) => editReferenceMaterial(ctx, id, { ...referenceDetails(), isRetired: true, version: 1 }) }),
+
+  // recall
+  entry({ name: "listRecall", operation: "readings.read", rows: nothing, call: (ctx) => listRecall(ctx), hasNoIds: true }),
+  entry({ name: "workRecall", operation: "instruments.manage", rows: (lab) => aRecalledReading(lab), call: (ctx, { stoneCode, sequence }) => workRecall(ctx, { items: [{ stoneCode, sequence }], deed: "accepted", reason: "The block was dirty, not the scale." }) }),
 
   // invoices
   entry({ name: "listInvoices", operation: "invoices.read", rows: nothing, call: (ctx) => listInvoices(ctx, {}), hasNoIds: true }),

@@ -9,6 +9,8 @@ const others: ReadonlyArray<readonly [key: string, does: string]> = [
   ["Space", "after digits, goes to the next field: 1762 1770"],
   ["Ctrl Enter", "records from anywhere in the form"],
   ["Escape", "leaves a field; once more, goes back to the tests"],
+  ["c", "concludes"],
+  ["x", "strikes the latest reading"],
   ["/", "searches the logbook"],
   ["?", "shows this"],
 ];

@@ -19,7 +19,7 @@ export function moveOnByEnter(event: KeyboardEvent<HTMLFormElement>): void {
   if (event.ctrlKey || !(target instanceof HTMLInputElement || target instanceof HTMLSelectElement) || !target.matches(controls)) return;
   const isBlankAfterDigits = key === " " && target instanceof HTMLInputElement && target.inputMode === "decimal" && !isEmpty(target);
   if (key !== "Enter" && !isBlankAfterDigits) return;
-  const all = [...form.querySelectorAll<HTMLInputElement | HTMLSelectElement>(controls)].filter((control) => control.offsetParent !== null);
+  const all = [...form.querySelectorAll<HTMLInputElement | HTMLSelectElement>(controls)].filter((control) => control.checkVisibility());
   const later = all.slice(all.indexOf(target) + 1).filter(isEmpty);
   const next = isEmpty(target) ? later.find((control) => control.ariaRequired === "true") : later[0];
   event.preventDefault();

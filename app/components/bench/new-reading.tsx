@@ -20,6 +20,7 @@ import { weighingNotes } from "#app/features/readings/weighing-notes.ts";
 import type { BenchInstrument } from "#app/features/stones/get-bench.server.ts";
 import { DescribedFields } from "./described-fields.tsx";
 import { moveOnByEnter } from "./move-on-by-enter.ts";
+import { correctionWords } from "#app/components/instruments/correction-words.ts";
 import { ReadingFields, type ReadingFieldset } from "./reading-fields.tsx";
 import { RotationFields } from "./rotation-fields.tsx";
 import type { SpectrumAround } from "./spectrum/spectrum-around.ts";
@@ -113,7 +114,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
             label="Instrument"
             isRequired={needsInstrument}
             emptyLabel={needsInstrument ? "Choose" : "None, or by eye"}
-            options={fitting.map(({ ref, name, description, isOutOfCheck }) => ({ value: ref, label: `${name}${description ? `, ${description}` : ""}${isOutOfCheck ? " (check overdue)" : ""}` }))}
+            options={fitting.map(({ ref, name, description, isOutOfCheck }) => ({ value: ref, label: `${name}${description ? `, ${description}` : ""}${isOutOfCheck ? " (out of check)" : ""}` }))}
           />
         ) : needsInstrument ? (
           <p className="text-sm text-straw">No instrument of this kind is in service. Enter it under Instruments, or record “No reading”.</p>
@@ -176,7 +177,8 @@ function Preview({ reading, instrument }: { reading: ComposedReading | null; ins
           <dd>
             {instrument.name}
             {instrument.check ? `, checked ${formatCalendarDate(instrument.check.checkedOn)} on ${instrument.check.referenceMaterial}` : ", no check on record"}
-            {instrument.isOutOfCheck && instrument.check ? <span className="text-straw">; the next one is overdue</span> : null}
+            {instrument.outOfCheck ? <span className="block font-medium text-red">{instrument.outOfCheck} A reading on it is marked, and cannot carry “identified” until it is checked.</span> : null}
+            {instrument.correction ? <span className="block text-ink-3">its correction is added: {correctionWords(instrument.correction.correction, instrument.correction.unit)}</span> : null}
             {instrument.status === "restricted" ? <span className="text-straw">; restricted</span> : null}
           </dd>
         </div>

@@ -5,7 +5,7 @@ import { EmptyState } from "#app/components/ui/empty-state.tsx";
 import { Cell, HeaderCell, Table } from "#app/components/ui/table.tsx";
 import { observationKindNames, readingQualityNames } from "#app/domain/reading.ts";
 import type { TimedReading } from "#app/features/readings/present-readings.ts";
-import { isFigures, readingConditions, readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
+import { correctionText, isFigures, readingConditions, readingSeenText, readingValueText } from "#app/features/readings/reading-words.ts";
 
 type ReadingsTableProps = {
   readings: readonly TimedReading[];
@@ -86,6 +86,8 @@ function ReadingRow({ reading, strikeTo, strikeHere, isStrikeWaiting }: { readin
           <>
             <span className="break-words whitespace-pre-line">{readingSeenText(reading)}</span>
             {reading.note ? <span className="block break-words whitespace-pre-line text-ink-2">{reading.note}</span> : null}
+            {correctionText(values) ? <span className="block text-xs text-ink-3">{correctionText(values)}</span> : null}
+            {reading.doubt ? <span className="block text-xs font-medium text-red">Out of check: {reading.doubt.text}</span> : null}
             {quality === "fair" || quality === "poor" ? <span className="block text-xs text-straw">{readingQualityNames[quality]} quality</span> : null}
           </>
         )}

@@ -3,7 +3,7 @@ import { RotationPlot } from "#app/components/charts/rotation-plot.tsx";
 import { Button } from "#app/components/ui/button.tsx";
 import type { Light, ReadingQuality } from "#app/domain/reading.ts";
 import type { ComposedReading } from "#app/features/readings/compose-reading.ts";
-import { composeRotation } from "#app/features/readings/compose-rotation.ts";
+import { composeRotation, correctedRun } from "#app/features/readings/compose-rotation.ts";
 import type { ReadingInstrument } from "#app/features/readings/reading-instrument.ts";
 import { readRotationRows } from "#app/features/readings/rotation-rows.ts";
 import { edgeUncertainty } from "#app/features/readings/usual-uncertainty.ts";
@@ -87,6 +87,7 @@ type Fitted = Readonly<{ reading: ComposedReading | null; run: RotationRun | nul
 function fitted(rows: string, { light, quality, instrument }: { light: Light; quality: ReadingQuality; instrument: ReadingInstrument | null }): Fitted {
   const { run, problem } = readRotationRows(rows, edgeUncertainty({ instrument, light, quality: quality === "noResult" ? "good" : quality }));
   if (!run) return { reading: null, run: null, fit: null, problem: problem ?? "" };
+  const shown = correctedRun(run, instrument);
   const { reading, problems } = composeRotation({ kind: "rotation", quality, light, rows }, instrument);
-  return { reading: reading ?? null, run, fit: fitRotation(run), problem: problems?.rows?.[0] ?? "" };
+  return { reading: reading ?? null, run: shown, fit: fitRotation(shown), problem: problems?.rows?.[0] ?? "" };
 }

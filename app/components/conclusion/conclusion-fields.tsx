@@ -134,11 +134,11 @@ function RejectedRow({ row, at }: { row: FieldMetadata<ConclusionShape["rejected
       {/* Keeps an empty row in its place when the form comes back. */}
       <input type="hidden" name={number.name} value={at} readOnly />
       <div>
-        <input aria-label={`Alternative ${at + 1}`} placeholder="Alternative" type="text" maxLength={120} autoComplete="off" list="species-names" {...bare(name)} className={inputLook} />
+        <input aria-label={`Alternative ${at + 1}`} aria-required={at === 0 || undefined} placeholder="Alternative" type="text" maxLength={120} autoComplete="off" list="species-names" {...bare(name)} className={inputLook} />
         <FieldNotes id={name.id} errors={name.errors} />
       </div>
       <div>
-        <input aria-label={`Alternative ${at + 1}: why it is ruled out`} placeholder="Why it is ruled out" type="text" maxLength={300} autoComplete="off" {...bare(because)} className={inputLook} />
+        <input aria-label={`Alternative ${at + 1}: why it is ruled out`} aria-required={at === 0 || undefined} placeholder="Why it is ruled out" type="text" maxLength={300} autoComplete="off" {...bare(because)} className={inputLook} />
         <FieldNotes id={because.id} errors={because.errors} />
       </div>
     </div>

@@ -14,3 +14,4 @@ export * from "./spectrum.ts";
 export * from "./stone.ts";
 export * from "./take-in.ts";
 export * from "./valuation.ts";
+export * from "./parcel.ts";

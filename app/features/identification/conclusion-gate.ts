@@ -1,9 +1,11 @@
 import type { FieldErrors } from "#app/domain/app-error.ts";
 import type { Confidence, Nature, RejectedAlternative, TreatmentFinding } from "#app/domain/conclusion.ts";
-import { evidenceClassOf, type ReadingDetail, type ReadingQuality } from "#app/domain/reading.ts";
+import { evidenceClassOf, observationKindNames, type ReadingDetail, type ReadingQuality } from "#app/domain/reading.ts";
+import type { ReadingDoubt } from "#app/features/instruments/reading-doubt.ts";
 import { characterOf } from "#app/features/readings/optic-character.ts";
 
-type GatedReading = Readonly<{ sequence: number; detail: ReadingDetail; quality: ReadingQuality; strike: unknown }>;
+type GatedReading = Readonly<{ sequence: number; detail: ReadingDetail; quality: ReadingQuality; strike: unknown; doubt?: ReadingDoubt | null }>;
+type DoubtfulReading = GatedReading & { doubt: ReadingDoubt };
 type GatedDraft = Readonly<{
   speciesName: string;
   nature: Nature;
@@ -22,9 +24,19 @@ export function evidenceClasses(readings: readonly GatedReading[]): Set<"index" 
   return new Set(counted.flatMap(({ detail }) => evidenceClassOf[detail.kind] ?? []));
 }
 
+/** Readings that stand, tell of the identity, and were made on an instrument that was not known to be right. */
+export function doubtfulReadings<Reading extends GatedReading>(readings: readonly Reading[]): Array<Reading & DoubtfulReading> {
+  return readings.filter((reading): reading is Reading & DoubtfulReading => Boolean(reading.doubt) && !reading.strike && reading.quality !== "noResult" && evidenceClassOf[reading.detail.kind] !== null);
+}
+
+function doubtMessage({ sequence, detail, doubt }: DoubtfulReading): string {
+  const remedy = doubt.because === "failedAfter" ? "Answer for it on the recall list" : `Check ${doubt.instrument}`;
+  return `“Identified” cannot rest on reading ${sequence} (${observationKindNames[detail.kind].toLowerCase()} on ${doubt.instrument}). ${doubt.text} ${remedy}, or measure again on an instrument in check and strike this reading, or conclude otherwise than “Identified”.`;
+}
+
 /**
  * What stands against a conclusion, a sentence a field; nothing where it may be drawn. Two independent kinds of evidence
- * are the least, one of them measured before anything is called identified; a good reading that contradicts it is
+ * are the least, one of them measured before anything is called identified, none of it on an instrument out of check; a good reading that contradicts it is
  * explained; the nature has evidence of its own, which no constant gives (workflow 1.6).
  *
  * @param contradictions the good readings that contradict the species concluded, by the ranking's own words
@@ -38,6 +50,7 @@ export function conclusionGate(readings: readonly GatedReading[], contradictions
   } else if (draft.confidence === "identified" && !classes.has("index") && !classes.has("density")) {
     refuse("confidence", "Nothing was measured yet: an index or a density comes before “identified”.");
   }
+  if (draft.confidence === "identified") for (const reading of doubtfulReadings(readings)) refuse("confidence", doubtMessage(reading));
   if (contradictions.length > 0 && draft.contradictionsExplained.trim() === "") {
     const named = contradictions.map(({ sequence, because }) => `reading ${sequence} (${because})`).join("; ");
     refuse("contradictionsExplained", `A good reading contradicts ${draft.speciesName}: ${named}. Strike it with its reason, or explain here why it does not stand against the conclusion.`);

@@ -15,7 +15,7 @@ type StoneToTest = Readonly<{ weightText: string; isMounted: boolean; mount: str
 export type NextTests = Readonly<{ recommended: ReadonlyArray<NextTest & { kind: ObservationKind }>; vetoed: readonly Vetoed[] }>;
 
 /** The tests that the bench has a form for. */
-const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refractometer", spot: "spot", polariscope: "polariscope", figure: "polariscope", density: "density", dichroscope: "dichroscope", longWave: "ultraviolet", shortWave: "ultraviolet", colourFilter: "colourFilter", thermalProbe: "thermalProbe", spectroscope: "spectroscope", magnet: "magnet", brewster: "brewster", depth: "realDepth" };
+const kindOf: Partial<Record<BenchTestId, ObservationKind>> = { edges: "refractometer", spot: "spot", polariscope: "polariscope", figure: "polariscope", density: "density", dichroscope: "dichroscope", longWave: "ultraviolet", shortWave: "ultraviolet", colourFilter: "colourFilter", thermalProbe: "thermalProbe", spectroscope: "spectroscope", magnet: "magnet", brewster: "brewster", depth: "realDepth", polariser: "rotation", secondFacet: "rotation" };
 const mostShown = 3;
 
 /** What to test next, from the readings that stand, this stone's weight, its consents and the instruments at hand. */
@@ -23,12 +23,15 @@ export function nextTestsForStone(readings: readonly NumberedReading[], table: S
   const evidence = evidenceFromReadings(readings);
   if (Object.keys(evidence).length === 0) return { recommended: [], vetoed: [] };
   const { done, poor } = testsMade(readings);
+  const rotations = evidence.ri?.filter((reading) => reading.kind === "rotation") ?? [];
   const balance = stone.instruments.find(({ kind }) => kind === "balance") ?? null;
   const { recommended, vetoed } = nextTests(rankSpecies(evidence, table, options).candidates, table, {
     massCt: stone.isMounted ? null : (parseDecimal(stone.weightText) ?? null),
     uAirCt: weighingUncertaintyCt(balance),
     uWaterCt: waterWeighingUncertaintyCt(balance),
     isPolished: true,
+    // Of two runs each may decide for the other: the ranking takes them together.
+    undecided: rotations.length === 1 ? rotations[0]!.solutions : [],
     isOverLimit: evidence.ri?.some(({ kind }) => kind === "overLimit") ?? false,
     offered: new Set(Object.keys(kindOf) as BenchTestId[]),
     done,
@@ -63,7 +66,7 @@ function barredTests({ consents, instruments, isMounted, mount }: StoneToTest): 
   const bar = (tests: readonly BenchTestId[], because: string | undefined) => {
     if (because) for (const test of tests) if (!barred.has(test)) barred.set(test, because);
   };
-  bar(["edges", "spot"], consents.includes("contactLiquid") ? undefined : "the client has not agreed to a contact liquid");
+  bar(["edges", "spot", "polariser", "secondFacet"], consents.includes("contactLiquid") ? undefined : "the client has not agreed to a contact liquid");
   bar(["density"], isMounted || mount === "strung" ? "the mount would be weighed with it" : undefined);
   bar(["density"], consents.includes("hydrostatic") ? undefined : "the client has not agreed to weighing in water");
   const missing = (kind: BenchInstrument["kind"], name: string) => {
@@ -71,7 +74,7 @@ function barredTests({ consents, instruments, isMounted, mount }: StoneToTest): 
     if (fitting.length === 0) return `no ${name} is in service`;
     return fitting.every(({ isOutOfCheck }) => isOutOfCheck) ? `the check of every ${name} is overdue` : undefined;
   };
-  bar(["edges", "spot"], missing("refractometer", "refractometer"));
+  bar(["edges", "spot", "polariser", "secondFacet"], missing("refractometer", "refractometer"));
   bar(["polariscope", "figure"], missing("polariscope", "polariscope"));
   bar(["density"], missing("balance", "balance"));
   bar(["longWave", "shortWave"], consents.includes("ultraviolet") ? undefined : "the client has not agreed to ultraviolet light");

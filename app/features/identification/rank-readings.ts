@@ -67,7 +67,7 @@ export function contradictingReadings(readings: readonly NumberedReading[], tabl
   return against;
 }
 
-const labels: Readonly<Record<string, string>> = { ri: "Index", birefringence: "Birefringence", sg: "Density", opticCharacter: "Character", opticSign: "Sign", colour: "Colour", transparency: "Transparency", lustre: "Lustre", phenomena: "Phenomena", pleochroism: "Pleochroism", fluorescenceLongWave: "Long wave", fluorescenceShortWave: "Short wave", absorption: "Spectrum", colourFilter: "Filter", thermal: "Thermal", magnetic: "Magnet" };
+const labels: Readonly<Record<string, string>> = { ri: "Index", birefringence: "Birefringence", sg: "Density", opticCharacter: "Character", opticSign: "Sign", colour: "Colour", transparency: "Transparency", lustre: "Lustre", phenomena: "Phenomena", pleochroism: "Pleochroism", fluorescenceLongWave: "Long wave", fluorescenceShortWave: "Short wave", absorption: "Spectrum", colourFilter: "Filter", thermal: "Thermal", magnetic: "Magnet", heavyLiquid: "Heavy liquid" };
 /** How far a lane reaches on each side of what was measured: the same for every species, so that lanes compare. */
 const reach: Readonly<Record<string, number>> = { ri: 0.05, birefringence: 0.03, sg: 0.6 };
 

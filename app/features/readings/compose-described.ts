@@ -4,6 +4,7 @@ import type { ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain
 import { plainText } from "#app/domain/plain-text.ts";
 import { checkDescribed } from "./check-described.ts";
 import type { Composed } from "./compose-reading.ts";
+import { correctedValue } from "./corrected-value.ts";
 import { derivedFromDescribed } from "./derived-from-described.ts";
 import type { DescribedDraft } from "./reading-draft.ts";
 import type { ReadingInstrument } from "./reading-instrument.ts";
@@ -24,7 +25,7 @@ export function composeDescribed({ kind, quality, typed }: DescribedDraft & { qu
           const rule = ruleOf(field, instrument);
           const value = readNumber(text, rule, instrument);
           if (typeof value === "string") refuse(field.name, value);
-          else values.push({ name: rule.name, value, typedText: text.trim(), unit: rule.unit, standardUncertainty: rule.u, formula: null });
+          else values.push(correctedValue(value, text, rule, instrument));
         }
         return [];
       }

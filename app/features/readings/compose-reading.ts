@@ -1,9 +1,10 @@
 import type { FieldErrors } from "#app/domain/app-error.ts";
 import { parseDecimal } from "#app/domain/decimal.ts";
 import { impliedIndex } from "#app/domain/implied-index.ts";
-import type { ReadingDetail, ReadingQuality, ReadingValue } from "#app/domain/reading.ts";
+import type { ReadingDetail, ReadingQuality, ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
 import { derivedDensity, derivedIndex, differenceOfEdges } from "./derived-values.ts";
 import { plainText } from "#app/domain/plain-text.ts";
+import { correctedValue } from "./corrected-value.ts";
 import { composeDescribed } from "./compose-described.ts";
 import { meanOfRepeats } from "#app/gemmology/statistics/mean-of-repeats.ts";
 import { againNames, isDescribedDraft, type ReadingDraft } from "./reading-draft.ts";
@@ -32,9 +33,11 @@ export function composeReading(draft: QuickDraft, instrument: ReadingInstrument 
       refuse(field, read);
       return undefined;
     }
-    values.push({ name: rule.name, value: read, typedText: digits.trim(), unit: rule.unit, standardUncertainty: rule.u, formula: null });
-    return read;
+    const value = correctedValue(read, digits, rule, instrument);
+    values.push(value);
+    return value.value;
   };
+  const uOf = (name: ReadingValueName, usual: number) => values.find((value) => value.name === name)?.standardUncertainty ?? usual;
   const { quality } = draft;
   const isEmpty = quality === "noResult";
 
@@ -80,7 +83,7 @@ export function composeReading(draft: QuickDraft, instrument: ReadingInstrument 
           const angleDeg = number("angleDeg", draft.angleDeg, { name: "angleDeg", what: "the angle", unit: "deg", example: "55.23", min: 30, max: 89.9, mostDecimals: 3, isReadOnInstrument: true, u: uAngle });
           const prismN = number("prismN", draft.prismN, { ...indexRule, name: "prismN", what: "the prism's index", example: "1.880", min: 1.4, max: 2.7, mostDecimals: 5, isReadOnInstrument: false, u: usualUncertainty.prismIndex });
           if (angleDeg !== undefined && prismN !== undefined) {
-            const derived = derivedIndex({ angleDeg, prismN, uAngleDeg: uAngle, uPrismN: usualUncertainty.prismIndex });
+            const derived = derivedIndex({ angleDeg, prismN, uAngleDeg: uOf("angleDeg", uAngle), uPrismN: usualUncertainty.prismIndex });
             if (derived.value < 1.3) refuse("angleDeg", `This angle gives an index of ${derived.value.toFixed(3)}, below that of any stone. Does the scale show the complement?`);
             else values.push(derived);
           }
@@ -135,8 +138,9 @@ export function composeReading(draft: QuickDraft, instrument: ReadingInstrument 
     const uLiquid = waterWeighingUncertaintyCt(instrument);
     const isHung = method === "suspended";
     const air = number("massAirCt", massAirCt, { ...massRule, name: "massAirCt", what: "the weight in air", example: "2.143", u: uAir });
-    const liquid = number("massLiquidCt", massLiquidCt, { ...massRule, name: "massLiquidCt", what: isHung ? "the weight in water" : "what the beaker gained", example: isHung ? "1.606" : "0.537", u: uLiquid });
-    const repeats = (names: readonly (typeof againNames)[number][], u: number) => names.flatMap((name) => (again[name]?.trim() ? (number(name, again[name], { ...massRule, name, what: "this weighing", example: "2.143", u }) ?? []) : []));
+    const liquid = number("massLiquidCt", massLiquidCt, { ...massRule, name: "massLiquidCt", what: isHung ? "the weight in water" : "what the beaker gained", example: isHung ? "1.606" : "0.537", isDifference: !isHung, u: uLiquid });
+    const repeats = (names: readonly (typeof againNames)[number][], u: number) =>
+      names.flatMap((name) => (again[name]?.trim() ? (number(name, again[name], { ...massRule, name, what: "this weighing", example: "2.143", isDifference: !isHung && name.startsWith("massLiquid"), u }) ?? []) : []));
     const airs = repeats(["massAirCt2", "massAirCt3"], uAir);
     const liquids = repeats(["massLiquidCt2", "massLiquidCt3"], uLiquid);
     const temp = number("tempC", tempC, { name: "tempC", what: "the water's temperature", unit: "degC", example: "21.4", min: 0, max: 40, mostDecimals: 2, u: usualUncertainty.waterTempC });
@@ -152,7 +156,7 @@ export function composeReading(draft: QuickDraft, instrument: ReadingInstrument 
       if (value !== undefined && Math.abs(value - first) > Math.max(0.1, 0.1 * first)) return refuse(name, `This weighing is far from the first (${first} ct). Is a digit wrong?`);
     }
     if (temp === undefined || Object.keys(problems).length > 0) return;
-    const [inAir, inLiquid] = [meanOfRepeats([air, ...airs], uAir), meanOfRepeats([liquid, ...liquids], uLiquid)];
+    const [inAir, inLiquid] = [meanOfRepeats([air, ...airs], uOf("massAirCt", uAir)), meanOfRepeats([liquid, ...liquids], uOf("massLiquidCt", uLiquid))];
     const sg = derivedDensity({ method, massAirCt: inAir.mean, massLiquidCt: inLiquid.mean, tempC: temp, uAirCt: inAir.u, uLiquidCt: inLiquid.u });
     if (sg.value < 0.8 || sg.value > 25) return refuse("massLiquidCt", `These weights give a density of ${sg.value.toPrecision(3)}, which no stone has. Is a digit wrong, or the method another?`);
     values.push(sg);

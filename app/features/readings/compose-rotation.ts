@@ -1,6 +1,8 @@
 import type { ReadingValue } from "#app/domain/reading.ts";
+import { applyCorrection } from "#app/features/instruments/apply-correction.ts";
 import { plainText } from "#app/domain/plain-text.ts";
 import { fitRotation } from "#app/gemmology/rotation/fit-rotation.ts";
+import type { RotationRun } from "#app/gemmology/rotation/rotation-run.ts";
 import { rotationEvidence } from "#app/gemmology/ranking/rotation-evidence.ts";
 import type { RotationFit, RotationSolution } from "#app/gemmology/rotation/rotation-fit.ts";
 import type { Composed } from "./compose-reading.ts";
@@ -20,12 +22,12 @@ export function composeRotation(draft: Extract<ReadingDraft, { kind: "rotation" 
   const rows = plainText(draft.rows);
   if (rows.length > mostText) return { problems: { rows: [`At most ${mostText} characters; this is ${rows.length}.`] } };
   if (quality === "noResult") return { reading: { detail: { kind, light, rows: "", character: "undetermined", sign: null, solutions: [] }, quality, values: [] } };
-  const { run, problem } = readRotationRows(rows, edgeUncertainty({ instrument, light, quality }));
+  const { run: read, problem } = readRotationRows(rows, edgeUncertainty({ instrument, light, quality }));
   if (problem !== null) return { problems: { rows: [problem] } };
   const limit = instrument?.upperLimit;
-  const beyond = limit ? run.facets.flatMap(({ readings }) => readings).find(({ upper, lower }) => Math.max(upper ?? 0, lower ?? 0) > limit + 0.002) : undefined;
+  const beyond = limit ? read.facets.flatMap(({ readings }) => readings).find(({ upper, lower }) => Math.max(upper ?? 0, lower ?? 0) > limit + 0.002) : undefined;
   if (beyond) return { problems: { rows: [`${Math.max(beyond.upper ?? 0, beyond.lower ?? 0).toFixed(3)} at ${beyond.angleDeg}° lies above ${limit}, the limit of this refractometer's contact liquid: write a dash for an edge beyond it.`] } };
-  const fit = fitRotation(run);
+  const fit = fitRotation(correctedRun(read, instrument));
   const { character, sign } = rotationFinding(fit);
   return { reading: { detail: { kind, light, rows, character, sign, solutions: solutionsOf(fit) }, quality, values: valuesOf(fit) } };
 }
@@ -33,6 +35,12 @@ export function composeRotation(draft: Extract<ReadingDraft, { kind: "rotation" 
 function solutionsOf(fit: RotationFit) {
   const evidence = rotationEvidence(fit);
   return evidence?.kind === "rotation" ? evidence.solutions : [];
+}
+
+/** The run with its scale's correction; its lines stay as they were typed. */
+export function correctedRun(run: RotationRun, instrument: ReadingInstrument | null): RotationRun {
+  const corrected = (edge: number | null) => (edge === null ? null : (applyCorrection(instrument?.correction, { value: edge, unit: "n" })?.value ?? edge));
+  return { facets: run.facets.map(({ label, readings }) => ({ label, readings: readings.map((reading) => ({ ...reading, upper: corrected(reading.upper), lower: corrected(reading.lower) })) })) };
 }
 
 /** What the run decides of the crystal; what several solutions within reach share, where none is alone. */

@@ -13,7 +13,10 @@ export type RankedReading = Readonly<{ detail: ReadingDetail; quality: ReadingQu
  */
 export function evidenceFromReadings(readings: readonly RankedReading[]): Evidence {
   const standing = readings.filter(({ quality, strike }) => quality !== "noResult" && !strike);
-  const ri = standing.flatMap((reading) => riOf(reading) ?? []);
+  const ri = standing.flatMap((reading) => {
+    const found = riOf(reading);
+    return found ? [{ ...found, ...gradeOf(reading.quality) }] : [];
+  });
   const polariscope = bestPolariscope(standing);
   const character = polariscope && characterOf(polariscope);
   const sign = character === "uniaxial" || character === "biaxial" ? polariscope?.sign : null;
@@ -24,6 +27,9 @@ export function evidenceFromReadings(readings: readonly RankedReading[]): Eviden
 
 /** Poor readings say less: their uncertainty is widened, so that one of them cannot outweigh a good one. */
 const widening: Readonly<Record<ReadingQuality, number>> = { good: 1, fair: 1.5, poor: 3, noResult: 1 };
+
+/** Of a reading that could not be taken well more blunders are allowed for, and it contradicts nothing by itself. */
+const gradeOf = (quality: ReadingQuality) => (quality === "fair" || quality === "poor" ? { quality } : {});
 
 function riOf({ detail, quality, values }: RankedReading): RefractiveEvidence | undefined {
   const get = (name: ReadingValueName) => values.find((value) => value.name === name);
@@ -84,15 +90,16 @@ function bestPolariscope(readings: readonly RankedReading[]) {
 }
 
 /** Several weighings as one: weighted by their uncertainties, and widened where they differ by more than those (Birge). */
-function meanDensity(readings: readonly RankedReading[]): { value: number; u: number } | undefined {
+function meanDensity(readings: readonly RankedReading[]): NonNullable<Evidence["sg"]> | undefined {
   const weighings = readings.flatMap(({ values, quality }) => {
     const sg = values.find(({ name }) => name === "sg");
-    return sg?.standardUncertainty ? [{ value: sg.value, u: sg.standardUncertainty * widening[quality] }] : [];
+    return sg?.standardUncertainty ? [{ value: sg.value, u: sg.standardUncertainty * widening[quality], quality }] : [];
   });
   if (weighings.length === 0) return undefined;
   const weight = weighings.reduce((sum, { u }) => sum + u ** -2, 0);
   const value = weighings.reduce((sum, one) => sum + one.value / one.u ** 2, 0) / weight;
   const chiSquared = weighings.reduce((sum, one) => sum + ((one.value - value) / one.u) ** 2, 0);
   const birge = weighings.length > 1 ? Math.max(1, Math.sqrt(chiSquared / (weighings.length - 1))) : 1;
-  return { value, u: birge / Math.sqrt(weight) };
+  const best = weighings.reduce((a, b) => (qualityOrder.indexOf(b.quality) > qualityOrder.indexOf(a.quality) ? b : a)).quality;
+  return { value, u: birge / Math.sqrt(weight), ...gradeOf(best) };
 }

@@ -2,6 +2,8 @@ import { and, asc, eq, isNotNull, isNull, or, sql } from "drizzle-orm";
 import { alias } from "drizzle-orm/mysql-core";
 import { instrumentChecks, instruments, observationStrikes, observations, secondChecks, stones, users } from "#app/db/schema/index.ts";
 import type { ReadingValue } from "#app/domain/reading.ts";
+import { doubtColumns } from "#app/features/instruments/doubt-columns.server.ts";
+import { readingDoubt } from "#app/features/instruments/reading-doubt.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import { requireRole } from "#app/features/require-role.ts";
 import { parseJsonRows } from "#app/features/stones/parse-json-rows.ts";
@@ -15,7 +17,7 @@ const strikers = alias(users, "strikers");
  */
 export async function listReadings(ctx: LabContext, { stoneCode }: { stoneCode: string }): Promise<ReadingView[]> {
   requireRole(ctx, "readings.read");
-  const { db, laboratoryId, actorId } = ctx;
+  const { db, laboratoryId, actorId, laboratory } = ctx;
   const ownOpenCheck = sql`exists (select 1 from second_checks own where own.laboratory_id = ${stones.laboratoryId} and own.stone_id = ${stones.id}
     and own.checker_id = ${sql.param(actorId, secondChecks.checkerId)} and own.compared_at is null)`;
   const rows = await db
@@ -32,11 +34,12 @@ export async function listReadings(ctx: LabContext, { stoneCode }: { stoneCode: 
       observerId: observations.observerId,
       observer: users.name,
       instrument: { name: instruments.name, description: instruments.description },
+      ...doubtColumns,
       check: { referenceMaterial: instrumentChecks.referenceMaterial, checkedAt: instrumentChecks.checkedAt },
       strike: { reason: observationStrikes.reason, struckAt: observationStrikes.struckAt },
       struckBy: strikers.name,
       // As text: MariaDB writes a decimal into JSON without its last zeros anyway, and 1.7620000 is read back exactly.
-      values: sql<string | null>`(select json_arrayagg(json_object('name', v.name, 'value', cast(v.value as char), 'typedText', v.typed_text, 'unit', v.unit,
+      values: sql<string | null>`(select json_arrayagg(json_object('name', v.name, 'value', cast(v.value as char), 'rawValue', cast(v.raw_value as char), 'typedText', v.typed_text, 'unit', v.unit,
         'standardUncertainty', cast(v.standard_uncertainty as char), 'formula', v.formula))
         from observation_values v where v.laboratory_id = ${observations.laboratoryId} and v.observation_id = ${observations.id})`,
     })
@@ -59,8 +62,9 @@ export async function listReadings(ctx: LabContext, { stoneCode }: { stoneCode: 
       ),
     )
     .orderBy(asc(observations.sequence));
-  return rows.map(({ secondCheckId, observerId, struckBy, strike, values, ...row }) => ({
+  return rows.map(({ secondCheckId, observerId, struckBy, strike, values, doubt, ...row }) => ({
     ...row,
+    doubt: readingDoubt({ ...row, doubt }, laboratory.timeZone),
     isOfSecondCheck: secondCheckId !== null,
     isOwn: observerId === actorId,
     strike: strike && { ...strike, by: struckBy ?? "" },
@@ -68,8 +72,8 @@ export async function listReadings(ctx: LabContext, { stoneCode }: { stoneCode: 
   }));
 }
 
-type ValueRow = Omit<ReadingValue, "value" | "standardUncertainty"> & { value: string; standardUncertainty: string | null };
+type ValueRow = Omit<ReadingValue, "value" | "rawValue" | "standardUncertainty"> & { value: string; rawValue: string | null; standardUncertainty: string | null };
 
 function parseValues(json: string | ValueRow[] | null): ReadingValue[] {
-  return parseJsonRows<ValueRow>(json).map((row) => ({ ...row, value: Number(row.value), standardUncertainty: row.standardUncertainty === null ? null : Number(row.standardUncertainty) }));
+  return parseJsonRows<ValueRow>(json).map((row) => ({ ...row, value: Number(row.value), rawValue: row.rawValue === null ? null : Number(row.rawValue), standardUncertainty: row.standardUncertainty === null ? null : Number(row.standardUncertainty) }));
 }

@@ -3,7 +3,7 @@ import type { ReadingValue, ReadingValueName } from "#app/domain/reading.ts";
 import type { ReadingInstrument } from "./reading-instrument.ts";
 
 /** What a number of a reading may be. `what` names it in a sentence: "the low edge". */
-export type NumberRule = Readonly<{ name: ReadingValueName; what: string; unit: ReadingValue["unit"]; example: string; min: number; max: number; mostDecimals: number; isReadOnInstrument?: boolean; isWhole?: boolean; u: number | null }>;
+export type NumberRule = Readonly<{ name: ReadingValueName; what: string; unit: ReadingValue["unit"]; example: string; min: number; max: number; mostDecimals: number; isReadOnInstrument?: boolean; /** Two readings taken from each other. */ isDifference?: boolean; isWhole?: boolean; u: number | null }>;
 
 /** The number, or the sentence that says why it is none. */
 export function readNumber(text: string, { what, unit, example, min, max, mostDecimals, isReadOnInstrument, isWhole, name }: NumberRule, instrument: ReadingInstrument | null): number | string {

@@ -1,3 +1,4 @@
+import type { ReadingDoubt } from "#app/features/instruments/reading-doubt.ts";
 import type { ReadingDetail, ReadingQuality, ReadingValue } from "#app/domain/reading.ts";
 
 /** A reading as its stone's page shows it. */
@@ -18,5 +19,7 @@ export type ReadingView = Readonly<{
   instrument: { name: string; description: string } | null;
   check: { referenceMaterial: string; checkedAt: Date } | null;
   values: readonly ReadingValue[];
+  /** Why its instrument was not known to be right when it was made; null where it was. */
+  doubt: ReadingDoubt | null;
   strike: { reason: string; struckAt: Date; by: string } | null;
 }>;

@@ -1,27 +1,22 @@
-import { parseDecimal } from "#app/domain/decimal.ts";
-import { isOutOfCheck, type InstrumentKind } from "#app/domain/instrument-kind.ts";
+import { decimalPlaces, parseDecimal } from "#app/domain/decimal.ts";
 import { massDifference } from "#app/features/custody/mass-difference.ts";
 import type { ComposedReading } from "./compose-reading.ts";
 import { weighingNotes } from "./weighing-notes.ts";
 
-type WarnedInstrument = Readonly<{ name: string; kind: InstrumentKind; status: "inService" | "restricted" | "outOfService"; statusReason: string; upperLimit: number | null; standardUncertainty: number | null }>;
+type WarnedInstrument = Readonly<{ name: string; status: "inService" | "restricted" | "outOfService"; statusReason: string; upperLimit: number | null; standardUncertainty: number | null }>;
 
 /** What a colleague at the next bench would say of a reading that is kept all the same. */
-export function readingWarnings({ reading, instrument, check, today, earlierWeightText }: {
+export function readingWarnings({ reading, instrument, outOfCheck, earlierWeightText }: {
   reading: ComposedReading;
   instrument: WarnedInstrument | null;
-  check: { nextDueOn: string } | null;
-  /** Calendar date in the laboratory's zone. */
-  today: string;
+  /** Why its instrument is out of check, in a sentence. */
+  outOfCheck: string | null;
   /** Carats as last weighed; empty where the stone was not. */
   earlierWeightText: string;
 }): string[] {
   if (reading.quality === "noResult") return [];
   const warnings: string[] = [];
-  if (instrument && isOutOfCheck({ kind: instrument.kind, nextDueOn: check?.nextDueOn ?? null, today })) {
-    if (!check) warnings.push(`${instrument.name} has no passed check on record.`);
-    else warnings.push(`The check of ${instrument.name} was due on ${check.nextDueOn}.`);
-  }
+  if (outOfCheck) warnings.push(`${outOfCheck} Until it is checked, this reading cannot carry “identified”.`);
   if (instrument?.status === "restricted") warnings.push(`${instrument.name} is restricted${instrument.statusReason ? `: ${instrument.statusReason}` : ""}.`);
   const limit = instrument?.upperLimit;
   const edge = reading.values.find(({ name }) => name === "high" || name === "n");
@@ -34,7 +29,7 @@ export function readingWarnings({ reading, instrument, check, today, earlierWeig
   if (weight && parseDecimal(earlierWeightText) !== undefined) {
     const { differenceCt, isAlarming } = massDifference({
       before: { massText: earlierWeightText, massUnit: "ct" },
-      after: { massText: weight.typedText, massUnit: "ct" },
+      after: { massText: weight.value.toFixed(decimalPlaces(weight.typedText)), massUnit: "ct" },
       standardUncertaintyCt: instrument?.standardUncertainty ?? null,
     });
     if (isAlarming) warnings.push(`The stone weighed ${earlierWeightText} ct before: ${differenceCt > 0 ? "+" : "−"}${Math.abs(differenceCt).toFixed(3)} ct. Is it the same stone?`);

@@ -3,6 +3,7 @@ import { describedWords } from "./described-words.ts";
 import { weighingNotes } from "./weighing-notes.ts";
 import { rotationPositions } from "./rotation-rows.ts";
 import { facetNames, interferenceFigureNames, lightNames, polariscopeBehaviourNames, weighingMethodNames, type Facet, type Light, type ReadingDetail, type ReadingValue, type ReadingValueName } from "#app/domain/reading.ts";
+import { decimalPlaces } from "#app/domain/decimal.ts";
 import { typedDecimal } from "#app/domain/typed-decimal.ts";
 
 type Told = Readonly<{ detail: ReadingDetail; values: readonly ReadingValue[] }>;
@@ -12,7 +13,7 @@ export function readingValueText({ detail, values }: Told): string {
   const get = (name: ReadingValueName) => values.find((value) => value.name === name);
   const typed = (name: ReadingValueName) => {
     const value = get(name);
-    return value ? typedDecimal(value.typedText || String(value.value)) : "";
+    return value ? figureText(value) : "";
   };
   if (isDescribedDetail(detail)) return derivesIndex.has(detail.kind) && get("n") ? `n ${withUncertainty(get("n")!, 3)}` : describedWords(detail, values).headline;
   switch (detail.kind) {
@@ -49,6 +50,24 @@ function rotationIndices({ values }: Told): string {
   if (own.length > 0) return own.join(", ");
   const [low, high] = [values.find(({ name }) => name === "low"), values.find(({ name }) => name === "high")];
   return low && high ? `${withUncertainty(low, 4)} to ${withUncertainty(high, 4)}` : "";
+}
+
+/** The digits as typed; where a correction was added, the corrected figure with one digit more. */
+export function figureText({ typedText, value, rawValue }: Pick<ReadingValue, "typedText" | "value" | "rawValue">): string {
+  if (typeof rawValue === "number") return value.toFixed(decimalPlaces(typedText) + 1);
+  return typedDecimal(typedText || String(value));
+}
+
+const figureOrder: readonly ReadingValueName[] = ["low", "high", "n", "angleDeg", "massAirCt", "massAirCt2", "massAirCt3", "massLiquidCt", "massLiquidCt2", "massLiquidCt3", "weightCt", "lengthMm", "widthMm", "depthMm"];
+
+/** What the instrument showed before its correction: "read 1.762 – 1.770, corrected by +0.0004"; empty where none was in force. */
+export function correctionText(values: readonly ReadingValue[]): string {
+  // The database keeps them by name.
+  const inOrder = values.toSorted((a, b) => figureOrder.indexOf(a.name) - figureOrder.indexOf(b.name));
+  const corrected = inOrder.flatMap(({ typedText, value, rawValue }) => (typeof rawValue === "number" ? [{ text: typedDecimal(typedText), added: value - rawValue, decimals: decimalPlaces(typedText) + 1 }] : []));
+  if (corrected.length === 0) return "";
+  const amounts = [...new Set(corrected.map(({ added, decimals }) => `${added < 0 ? "−" : "+"}${Math.abs(added).toFixed(decimals)}`))];
+  return `read ${corrected.map(({ text }) => text).join(" – ")}, corrected by ${amounts.join(" and ")}`;
 }
 
 /** Whether a value is digits, to be set in figures, or words. */

@@ -1,16 +1,18 @@
-import { and, desc, eq, isNull, sql } from "drizzle-orm";
+import { and, eq, isNull, sql } from "drizzle-orm";
 import { inTransaction } from "#app/db/in-transaction.server.ts";
-import { instrumentChecks, instruments, itemConsents, items, observations, observationValues, secondChecks, stones } from "#app/db/schema/index.ts";
+import { instruments, itemConsents, items, observations, observationValues, secondChecks, stones } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import { impliedIndex } from "#app/domain/implied-index.ts";
+import { decimalPlaces } from "#app/domain/decimal.ts";
 import type { Id, InstrumentId, ObservationId, SecondCheckId } from "#app/domain/ids.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import { aboutTest, consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
 import { examinationStateNames } from "#app/domain/stone-state.ts";
-import { typedDecimal } from "#app/domain/typed-decimal.ts";
 import { recordAudit } from "#app/features/audit/record-audit.server.ts";
+import { outOfCheck } from "#app/features/instruments/check-standing.ts";
 import { instrumentKindNames } from "#app/features/instruments/instrument-kinds.ts";
+import { instrumentStanding } from "#app/features/instruments/instrument-standing.server.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import { requireRole } from "#app/features/require-role.ts";
 import { moveExamination } from "#app/features/stones/move-examination.server.ts";
@@ -65,8 +67,8 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     const secondCheckId = await settleExamination(scope, { stone, isForSecondCheck: input.isForSecondCheck ?? false });
     if (stone.goodsState === "released") throw new AppError("conflict", "These goods have been released: nothing more can be read from them.");
     if (draft.quality !== "noResult") await requireConsent(scope, { kind: draft.kind, itemId: stone.itemId, isMounted: stone.isMounted });
-    const { instrument, check } = await findInstrument(scope, input);
-    const { reading, problems } = composeAnyReading(draft, instrument);
+    const { instrument, standing } = await findInstrument(scope, input);
+    const { reading, problems } = composeAnyReading(draft, instrument && { ...instrument, correction: standing?.correction });
     if (!reading) throw new AppError("invalid_input", Object.values(problems)[0]?.[0] ?? "This reading is not complete.", { fieldErrors: problems });
 
     const [counted] = await tx
@@ -84,7 +86,8 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
       kind: reading.detail.kind,
       secondCheckId,
       instrumentId: instrument?.id ?? null,
-      instrumentCheckId: check?.id ?? null,
+      instrumentCheckId: standing?.passed?.id ?? null,
+      instrumentCorrectionId: (reading.detail.kind === "rotation" || reading.values.some(({ rawValue }) => typeof rawValue === "number")) ? (standing?.correction?.id ?? null) : null,
       observerId: actorId,
       observedAt: observedAt({ madeAt: input.madeAt ?? null, now }),
       recordedAt: now,
@@ -97,7 +100,7 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     });
     if (reading.values.length > 0) await tx.insert(observationValues).values(reading.values.map((value) => ({ laboratoryId, observationId: requestId as ObservationId, ...value })));
     await recordAudit(scope, { action: "reading.recorded", subject: { kind: "stone", id: stone.id }, detail: { sequence, kind: reading.detail.kind } });
-    return { sequence, warnings: readingWarnings({ reading, instrument, check, today: calendarDateIn(now, ctx.laboratory.timeZone), earlierWeightText: secondCheckId === null ? stone.weightText : "" }) };
+    return { sequence, warnings: readingWarnings({ reading, instrument, outOfCheck: instrument && standing ? outOfCheckOf(ctx, instrument, standing) : null, earlierWeightText: secondCheckId === null ? stone.weightText : "" }) };
   });
 }
 
@@ -175,7 +178,7 @@ async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordRe
   const kind = instrumentKindFor[draft.kind];
   const wrong = (message: string) => new AppError("invalid_input", message, { fieldErrors: { instrument: [message] } });
   if (instrumentId === null) {
-    if (!aboutTest(draft.kind).needsInstrument || draft.quality === "noResult") return { instrument: null, check: null };
+    if (!aboutTest(draft.kind).needsInstrument || draft.quality === "noResult") return { instrument: null, standing: null };
     throw wrong("Choose the instrument that showed it.");
   }
   const { db, laboratoryId } = ctx;
@@ -185,18 +188,18 @@ async function findInstrument(ctx: LabContext, { instrumentId, draft }: RecordRe
   if (instrument.status === "outOfService" && draft.quality !== "noResult") {
     throw wrong(`${instrument.name} is out of service${instrument.statusReason ? `: ${instrument.statusReason}` : ""}. Choose another.`);
   }
-  const [check] = await db
-    .select({ id: instrumentChecks.id, nextDueOn: instrumentChecks.nextDueOn })
-    .from(instrumentChecks)
-    .where(and(eq(instrumentChecks.laboratoryId, laboratoryId), eq(instrumentChecks.instrumentId, instrumentId), eq(instrumentChecks.isPassed, true)))
-    .orderBy(desc(instrumentChecks.checkedAt))
-    .limit(1);
-  return { instrument, check: check ?? null };
+  return { instrument, standing: await instrumentStanding(ctx, instrument) };
+}
+
+type Found = Awaited<ReturnType<typeof findInstrument>>;
+
+function outOfCheckOf({ now, laboratory }: LabContext, { name, kind }: NonNullable<Found["instrument"]>, { passed, failing }: NonNullable<Found["standing"]>): string | null {
+  return outOfCheck({ name, kind, nextDueOn: passed?.nextDueOn ?? null, failing, hasChecks: passed !== null || failing.length > 0 }, calendarDateIn(now, laboratory.timeZone));
 }
 
 /** A good weighing of a loose stone becomes the weight that the logbook shows. */
 function weightOf({ detail, quality, values }: ComposedReading, { isMounted, isFirst }: { isMounted: boolean; isFirst: boolean }) {
   const weight = values.find(({ name }) => name === "weightCt");
   if (detail.kind !== "weight" || quality !== "good" || isMounted || !isFirst || !weight) return {};
-  return { weightCt: weight.value, weightText: typedDecimal(weight.typedText) };
+  return { weightCt: weight.value, weightText: weight.value.toFixed(decimalPlaces(weight.typedText)) };
 }

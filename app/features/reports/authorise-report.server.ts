@@ -7,6 +7,7 @@ import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import { recordAudit } from "#app/features/audit/record-audit.server.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import { nextInSeries } from "#app/features/laboratories/next-in-series.server.ts";
+import { requireNoRecall } from "#app/features/recalls/require-no-recall.server.ts";
 import { requireRole } from "#app/features/require-role.ts";
 import { moveExamination } from "#app/features/stones/move-examination.server.ts";
 import { buildReportView } from "./build-report-view.server.ts";
@@ -15,7 +16,7 @@ import { newRegisterCode } from "./new-register-code.server.ts";
 
 /**
  * The signatory's act: freezes what the report says, gives it its number and its code, and queues its PDF, all or
- * nothing. Needs a checked identity and, where the client ordered a valuation, a signed one.
+ * nothing. Needs a checked identity, no reading that is called back and, where the client ordered a valuation, a signed one.
  * @returns the report's number
  */
 export async function authoriseReport(ctx: LabContext, { stoneCode }: { stoneCode: string }): Promise<string> {
@@ -38,6 +39,7 @@ export async function authoriseReport(ctx: LabContext, { stoneCode }: { stoneCod
     if (valuation?.state !== "signed") throw new AppError("conflict", "The client ordered a valuation, and it is not signed yet.");
   }
 
+  await requireNoRecall(ctx, { stoneId: stone.id });
   // Fetched before the transaction: a slow file store must not hold its locks.
   const photo = await freezePhoto(ctx, { stoneId: stone.id });
   const reportOn = calendarDateIn(ctx.now, laboratory.timeZone);

@@ -1,5 +1,6 @@
 import { calendarDateIn, formatCalendarDate } from "#app/domain/calendar-date.ts";
 import { confidenceNames, limitNames, treatmentNames, type LimitCode, type TreatmentFinding } from "#app/domain/conclusion.ts";
+import { decimalPlaces } from "#app/domain/decimal.ts";
 import { conclusionStatement } from "#app/domain/conclusion-statement.ts";
 import type { StoneId, UserId } from "#app/domain/ids.ts";
 import type { ReadingDetail, ReadingValueName } from "#app/domain/reading.ts";
@@ -89,7 +90,7 @@ function massAndSize(readings: readonly ReportedReading[], { isMounted, itemMass
   const weight = readings.findLast(({ detail, values }) => detail.kind === "weight" && values.has("weightCt"))?.values.get("weightCt");
   const size = readings.findLast(({ detail, values }) => detail.kind === "dimensions" && values.has("lengthMm"))?.values;
   const millimetres = size && ["lengthMm", "widthMm", "depthMm"].flatMap((name) => size.get(name as ReadingValueName) ?? []).map(({ value }) => value.toFixed(2));
-  const mass = weight ? row("Weight", `${weight.typedText.replace(",", ".")} ct`, true) : row(isMounted ? "Weight with the setting" : "Weight as received", itemMass, true);
+  const mass = weight ? row("Weight", `${weight.value.toFixed(decimalPlaces(weight.typedText))} ct`, true) : row(isMounted ? "Weight with the setting" : "Weight as received", itemMass, true);
   return [mass, row("Dimensions", millimetres?.length ? `${millimetres.join(" × ")} mm` : "", true)];
 }
 

@@ -1,10 +1,12 @@
-import { and, eq } from "drizzle-orm";
+import { and, eq, sql } from "drizzle-orm";
 import { alias } from "drizzle-orm/mysql-core";
 import { clients, reportFiles, reports, stones, users } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import { formatRegisterCode } from "#app/domain/register-code.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
+import { callsBack, isOpen } from "#app/features/recalls/called-back.server.ts";
 import { requireRole } from "#app/features/require-role.ts";
+import { parseJsonRows } from "#app/features/stones/parse-json-rows.ts";
 
 /** One report as its page shows it; its bytes come by `readReportPdf`. */
 export async function getReport(ctx: LabContext, { number }: { number: string }) {
@@ -35,6 +37,9 @@ export async function getReport(ctx: LabContext, { number }: { number: string })
       clientTerms: clients.terms,
       sizeBytes: reportFiles.sizeBytes,
       sha256: reportFiles.sha256,
+      recalled: sql<string | null>`(select json_arrayagg(json_object('sequence', o.sequence, 'instrument', i.name, 'failedOn', k.reference_material) order by o.sequence) from observations o join instrument_checks k on ${callsBack}
+        join instruments i on i.laboratory_id = k.laboratory_id and i.id = k.instrument_id where o.laboratory_id = ${reports.laboratoryId} and o.stone_id = ${reports.stoneId} and ${isOpen} and o.recorded_at <= ${reports.authorisedAt}
+        and not exists (select 1 from observation_strikes s where s.laboratory_id = o.laboratory_id and s.observation_id = o.id and s.struck_at <= ${reports.authorisedAt}))`,
       supersedesNumber: older.number,
       supersededByNumber: newer.number,
     })
@@ -47,9 +52,11 @@ export async function getReport(ctx: LabContext, { number }: { number: string })
     .leftJoin(newer, and(eq(newer.laboratoryId, reports.laboratoryId), eq(newer.supersedesId, reports.id)))
     .where(and(eq(reports.laboratoryId, ctx.laboratoryId), eq(reports.number, number)));
   if (!row) throw new AppError("not_found", "There is no such report.");
-  const { sha256, code, ...report } = row;
+  const { sha256, code, recalled, ...report } = row;
   return {
     ...report,
+    /** Readings in it whose instrument failed a check since, and for which nobody has answered. */
+    recalled: parseJsonRows<{ sequence: number; instrument: string; failedOn: string }>(recalled),
     shownCode: code ? formatRegisterCode(code) : "",
     verificationUrl: code ? `${ctx.services.publicOrigin}/v/${code}` : "",
     sha256: sha256?.toString("hex") ?? null,

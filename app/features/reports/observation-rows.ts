@@ -1,3 +1,4 @@
+import { decimalPlaces } from "#app/domain/decimal.ts";
 import { formatWithUncertainty } from "#app/domain/format-uncertainty.ts";
 import { isDescribed, type DescribedDetail } from "#app/domain/bench-tests/test-forms.ts";
 import { describedWords } from "#app/features/readings/described-words.ts";
@@ -96,7 +97,7 @@ function critical(reading: ReportedReading | undefined): Parts | undefined {
 
 function spot(reading: ReportedReading | undefined): Parts | undefined {
   const n = reading?.values.get("n");
-  return n && [{ text: `n ≈ ${n.typedText.replace(",", ".") || n.value}`, isMono: true }, { text: "spot reading" }];
+  return n && [{ text: `n ≈ ${n.typedText ? n.value.toFixed(decimalPlaces(n.typedText)) : n.value}`, isMono: true }, { text: "spot reading" }];
 }
 
 function overLimit(reading: ReportedReading | undefined): Parts | undefined {

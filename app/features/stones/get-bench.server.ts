@@ -5,15 +5,20 @@ import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import type { Nature } from "#app/domain/conclusion.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
 import type { Id } from "#app/domain/ids.ts";
-import { isOutOfCheck, type InstrumentKind } from "#app/domain/instrument-kind.ts";
+import type { InstrumentKind } from "#app/domain/instrument-kind.ts";
+import { scaleUnitsOf, type ScaleUnit } from "#app/domain/instrument-scale.ts";
 import { isAllowed } from "#app/domain/permissions.ts";
 import { shortRef } from "#app/domain/short-ref.ts";
+import type { AppliedCorrection } from "#app/features/instruments/apply-correction.ts";
+import { outOfCheck } from "#app/features/instruments/check-standing.ts";
+import { latestFailure } from "#app/features/instruments/instrument-standing.server.ts";
 import type { LabContext } from "#app/features/lab-context.ts";
 import { listReadings } from "#app/features/readings/list-readings.server.ts";
 import type { ReadingView } from "#app/features/readings/reading-view.ts";
 import { requireRole } from "#app/features/require-role.ts";
 import { hasHandIn } from "#app/features/second-checks/has-hand-in.ts";
 import { selfCheckFrom } from "#app/features/second-checks/self-check-from.ts";
+import type { Correction } from "#app/gemmology/calibration/correction.ts";
 import { parseJsonRows } from "./parse-json-rows.ts";
 
 export type BenchInstrument = Readonly<{
@@ -26,8 +31,12 @@ export type BenchInstrument = Readonly<{
   standardUncertainty: number | null;
   upperLimit: number | null;
   prismIndex: number | null;
-  check: { referenceMaterial: string; checkedOn: string; nextDueOn: string; deviation: number } | null;
+  check: { referenceMaterial: string; checkedOn: string; nextDueOn: string; deviation: number | null } | null;
+  /** Why it is out of check, in a sentence; null where it is in check or needs none. */
+  outOfCheck: string | null;
   isOutOfCheck: boolean;
+  /** What is added to its readings now; null where nothing is. */
+  correction: AppliedCorrection | null;
 }>;
 
 export type CheckView = Readonly<{
@@ -95,8 +104,11 @@ export async function getStoneHead(ctx: LabContext, { stoneCode }: { stoneCode: 
         where s.laboratory_id = ${stones.laboratoryId} and s.stone_id = ${stones.id})`,
       instruments: seesReadings
         ? sql<string | null>`(select json_arrayagg(json_object('id', hex(i.id), 'kind', i.kind, 'name', i.name, 'description', i.description, 'status', i.status, 'resolution', cast(i.resolution as char),
+            'scaleUnit', i.scale_unit, 'hasChecks', exists (select 1 from instrument_checks k where k.laboratory_id = i.laboratory_id and k.instrument_id = i.id),
+            'failing', (select json_arrayagg(k.reference_material) from instrument_checks k where k.laboratory_id = i.laboratory_id and k.instrument_id = i.id and ${latestFailure}),
+            'correction', (select c.correction from instrument_corrections c where c.laboratory_id = i.laboratory_id and c.instrument_id = i.id and c.ended_at is null order by c.from_at desc, c.id desc limit 1),
             'standardUncertainty', cast(i.standard_uncertainty as char), 'upperLimit', cast(i.upper_limit as char), 'prismIndex', cast(i.prism_index as char),
-            'check', (select json_object('referenceMaterial', k.reference_material, 'checkedAt', date_format(k.checked_at, '%Y-%m-%dT%H:%i:%s.%fZ'), 'nextDueOn', k.next_due_on, 'deviation', cast(k.reading_value - k.nominal_value as char))
+            'check', (select json_object('referenceMaterial', k.reference_material, 'checkedAt', date_format(k.checked_at, '%Y-%m-%dT%H:%i:%s.%fZ'), 'nextDueOn', k.next_due_on, 'deviation', cast(coalesce(k.corrected_value, k.reading_value) - k.nominal_value as char))
               from instrument_checks k where k.laboratory_id = i.laboratory_id and k.instrument_id = i.id and k.is_passed order by k.checked_at desc limit 1)) order by i.name)
             from instruments i where i.laboratory_id = ${stones.laboratoryId} and i.status <> 'outOfService')`
         : sql<null>`null`,
@@ -144,7 +156,11 @@ type InstrumentRow = {
   standardUncertainty: string | null;
   upperLimit: string | null;
   prismIndex: string | null;
-  check: string | { referenceMaterial: string; checkedAt: string; nextDueOn: string; deviation: string } | null;
+  scaleUnit: ScaleUnit | null;
+  hasChecks: number;
+  failing: string | string[] | null;
+  correction: string | Correction | null;
+  check: string | { referenceMaterial: string; checkedAt: string; nextDueOn: string; deviation: string | null } | null;
 };
 
 function checkView({ kind, checker, isOwn, startedAt, comparedAt, outcome, reason, ownSpecies, ownNature }: CheckRow, { isBlind }: { isBlind: boolean }): CheckView {
@@ -153,6 +169,9 @@ function checkView({ kind, checker, isOwn, startedAt, comparedAt, outcome, reaso
 
 function benchInstrument({ id, check, ...row }: InstrumentRow, { today, timeZone }: { today: string; timeZone: string }): BenchInstrument {
   const passed = typeof check === "string" ? (JSON.parse(check) as Exclude<InstrumentRow["check"], string>) : check;
+  const correction = typeof row.correction === "string" ? (JSON.parse(row.correction) as Correction) : row.correction;
+  const unit = row.scaleUnit ?? scaleUnitsOf[row.kind][0];
+  const reason = outOfCheck({ name: row.name, kind: row.kind, nextDueOn: passed?.nextDueOn ?? null, failing: [...new Set(parseJsonRows<string>(row.failing))], hasChecks: Boolean(Number(row.hasChecks)) }, today);
   const number = (text: string | null) => (text === null ? null : Number(text));
   return {
     ref: shortRef(id.toLowerCase() as Id<"instrument">),
@@ -164,7 +183,9 @@ function benchInstrument({ id, check, ...row }: InstrumentRow, { today, timeZone
     standardUncertainty: number(row.standardUncertainty),
     upperLimit: number(row.upperLimit),
     prismIndex: number(row.prismIndex),
-    check: passed && { referenceMaterial: passed.referenceMaterial, checkedOn: calendarDateIn(new Date(passed.checkedAt), timeZone), nextDueOn: passed.nextDueOn, deviation: Number(passed.deviation) },
-    isOutOfCheck: isOutOfCheck({ kind: row.kind, nextDueOn: passed?.nextDueOn ?? null, today }),
+    check: passed && { referenceMaterial: passed.referenceMaterial, checkedOn: calendarDateIn(new Date(passed.checkedAt), timeZone), nextDueOn: passed.nextDueOn, deviation: number(passed.deviation) },
+    outOfCheck: reason,
+    isOutOfCheck: reason !== null,
+    correction: correction && unit ? { correction, unit } : null,
   };
 }

@@ -1,4 +1,4 @@
-import { colourFamilies } from "../species/colour-families.ts";
+import { colourFamilies, type ColourFamily } from "../species/colour-families.ts";
 import { colourMask, sharedColours } from "../species/colour-mask.ts";
 import type { SpeciesForm } from "../species/species-table.ts";
 import { beside, half, probable, seenTerm, summary } from "./seen-term.ts";
@@ -6,25 +6,56 @@ import type { Term } from "./term.ts";
 
 /** How common what stands first in a list is beside what stands behind it: the table lists the usual before the possible (house value). */
 const weightAt = (place: number) => 1 / (1 + place / 2);
-/** Share of words that another observer would not have chosen. */
-const misnamed = { colour: 0.12, transparency: 0.08, lustre: 0.3 } as const;
+/** Share of words that another observer would not have chosen; of colours, one beside it on the circle, and any other (house values). */
+const misnamed = { colourNear: 0.12, colourFar: 0.03, transparency: 0.08, lustre: 0.3 } as const;
+
+/** Families that one observer calls so and another so; a dark stone of most hues is black to somebody, a pale one colourless. */
+const neighbours: Readonly<Record<ColourFamily, readonly ColourFamily[]>> = {
+  colourless: ["white", "grey", "yellow"],
+  white: ["colourless", "grey", "yellow"],
+  grey: ["white", "black", "blue", "brown"],
+  black: ["grey", "brown", "blue", "green"],
+  brown: ["orange", "yellow", "red", "green", "black"],
+  yellow: ["orange", "green", "brown", "colourless"],
+  orange: ["red", "yellow", "brown", "pink"],
+  red: ["pink", "orange", "purple", "brown"],
+  pink: ["red", "purple", "orange"],
+  purple: ["violet", "pink", "red"],
+  violet: ["purple", "blue"],
+  blue: ["violet", "green", "grey"],
+  green: ["blue", "yellow", "brown"],
+  multicoloured: [],
+};
 
 const shares = new WeakMap<SpeciesForm, readonly number[]>();
 
-/** How likely each family of colours is met in a form; they sum to 1. */
+/** How likely each family of colours is named of a form; they sum to 1. */
 function colourShares(form: SpeciesForm): readonly number[] {
   let known = shares.get(form);
-  if (known) return known;
+  if (!known) shares.set(form, (known = namedShares(shownShares(form))));
+  return known;
+}
+
+/** How likely each family is shown: the listed ones, the usual before the possible; all alike where none is listed. */
+function shownShares({ colours }: SpeciesForm): number[] {
   const weights = colourFamilies.map(() => 0);
-  form.colours.forEach((words, place) => {
+  colours.forEach((words, place) => {
     const mask = colourMask(words);
     const count = sharedColours(mask, mask);
     for (let family = 0; family < weights.length; family++) if (mask & (1 << family)) weights[family]! += weightAt(place) / count;
   });
   const sum = weights.reduce((total, weight) => total + weight, 0);
-  known = weights.map((weight) => (sum > 0 ? ((1 - misnamed.colour) * weight) / sum : (1 - misnamed.colour) / weights.length) + misnamed.colour / weights.length);
-  shares.set(form, known);
-  return known;
+  return weights.map((weight) => (sum > 0 ? weight / sum : 1 / weights.length));
+}
+
+function namedShares(shown: readonly number[]): number[] {
+  const named = shown.map((share) => (1 - misnamed.colourNear - misnamed.colourFar) * share + misnamed.colourFar / shown.length);
+  colourFamilies.forEach((family, at) => {
+    const near = neighbours[family];
+    if (near.length === 0) named[at]! += misnamed.colourNear * shown[at]!;
+    for (const other of near) named[colourFamilies.indexOf(other)]! += (misnamed.colourNear * shown[at]!) / near.length;
+  });
+  return named;
 }
 
 /**

@@ -23,10 +23,15 @@ export function birefringenceTerm({ value, u = defaultU.birefringence, quality =
   };
 }
 
-/** An aggregate shows no birefringence of its own; what was read says little about it. */
-const onAggregate: Score = { logLikelihood: Math.log(0.2 / span.birefringence), tail: 1, distance: 0 };
+/** An aggregate shows no birefringence of its own: mostly one edge, and what else was read says little about it (house value). */
+const oneEdgeOnAggregateShare = 0.8;
+const onAggregate: Score = { logLikelihood: Math.log((1 - oneEdgeOnAggregateShare) / span.birefringence), tail: 1, distance: 0 };
 
 export function birefringenceScore(form: SpeciesForm, { value, u, quality }: { value: number; u: number; quality: ReadingGrade }): Score {
-  if (!form.birefringence) return onAggregate;
+  if (!form.birefringence && value > 2 * u) return onAggregate;
+  if (!form.birefringence) {
+    const { logLikelihood } = numericScore({ value, u, range: [0, 0], softness: softness.birefringence, span: span.birefringence, blunderShare: blunderShares[quality] });
+    return { logLikelihood: logLikelihood + Math.log(oneEdgeOnAggregateShare), tail: 1, distance: 0 };
+  }
   return numericScore({ value, u, range: form.birefringence, usual: form.usual.birefringence, softness: softness.birefringence, span: span.birefringence, blunderShare: blunderShares[quality] });
 }

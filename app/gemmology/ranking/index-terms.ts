@@ -46,14 +46,14 @@ const ways: Readonly<Record<EstimateWay, string>> = { brewster: "by Brewster’s
 function rotatedEdges(reading: Extract<RefractiveEvidence, { kind: "edges" }>, hasBirefringence: boolean): Term[] {
   const { u = defaultU.edge, quality = "good" } = reading;
   const mean = (reading.low + reading.high) / 2;
-  const common = { u, softness: softness.index, span: span.index, blunderShare: blunderShares[quality] };
+  const blunderShare = blunderShares[quality];
   const low: Term = {
     ...indexTerm("ri", `${reading.low.toFixed(3)}–${reading.high.toFixed(3)}`, quality),
     score: (form, offset) => {
-      if (form.lowIndex) return numericScore({ ...common, value: reading.low - offset, range: form.lowIndex, usual: form.usual.lowIndex });
+      if (form.lowIndex) return numericScore({ value: reading.low - offset, u, range: form.lowIndex, usual: form.usual.lowIndex, softness: softness.index, span: span.index, blunderShare });
       if (!form.spotIndex) return opaque;
-      const score = numericScore({ ...common, value: mean - offset, range: form.spotIndex, usual: form.usual.spotIndex });
-      return { ...score, logLikelihood: score.logLikelihood + Math.log(twoEdgesOnAggregateShare) };
+      const score = numericScore({ value: mean - offset, u, range: form.spotIndex, usual: form.usual.spotIndex, softness: softness.index, span: span.index, blunderShare });
+      return reading.high - reading.low <= 2 * differenceU(u) ? score : { ...score, logLikelihood: score.logLikelihood + Math.log(twoEdgesOnAggregateShare) };
     },
   };
   if (hasBirefringence) return [low];
@@ -83,12 +83,13 @@ function unrotatedEdges(reading: Extract<RefractiveEvidence, { kind: "edges" }>)
 }
 
 function singleEdge(n: number, u: number, observed: string, quality: ReadingGrade = "good"): Term {
+  const blunderShare = blunderShares[quality];
   return {
     ...indexTerm("ri", observed, quality),
     score: (form, offset) => {
       const range = hull(form);
       if (!range) return opaque;
-      const score = numericScore({ value: n - offset, u, range, usual: usualIndex(form), softness: softness.index, span: span.index, blunderShare: blunderShares[quality] });
+      const score = numericScore({ value: n - offset, u, range, usual: usualIndex(form), softness: softness.index, span: span.index, blunderShare });
       const share = oneEdgeShare(form, u);
       return share === 1 ? score : { ...score, logLikelihood: score.logLikelihood + Math.log(share) };
     },

@@ -8,6 +8,9 @@ import type { Score } from "./term.ts";
 /** Half of what is met lies near the usual value, half anywhere in the range (house value, common practice of tables that give both). */
 const usualShare = 0.5;
 
+/** Standard deviations beyond which nothing is left of a distribution. */
+const farOut = 9;
+
 /** Near the usual value with a sixth of the range as its spread. */
 const usualSpread = (sigma: number, width: number) => Math.sqrt(sigma * sigma + (width * width) / 36);
 
@@ -32,9 +35,10 @@ export function numericScore({ value, u, range, usual, softness, span, blunderSh
   const soft = { low: range[0], high: range[1], sigma };
   const distance = value < range[0] ? (value - range[0]) / sigma : value > range[1] ? (value - range[1]) / sigma : 0;
   // Far outside, only the blunder is left: no need to ask the tails.
-  if (distance > 9 || distance < -9) return { logLikelihood: Math.log(blunderShare / span), tail: 0, distance };
-  const even = softUniformDensity(soft, value);
   const spread = usualSpread(sigma, range[1] - range[0]);
+  const isNearEven = distance <= farOut && distance >= -farOut;
+  if (!isNearEven && (usual === undefined || Math.abs(value - usual) > farOut * spread)) return { logLikelihood: Math.log(blunderShare / span), tail: 0, distance };
+  const even = isNearEven ? softUniformDensity(soft, value) : 0;
   const density = usual === undefined ? even : (1 - usualShare) * even + (usualShare * normalPdf((value - usual) / spread)) / spread;
   return { logLikelihood: Math.log((1 - blunderShare) * density + blunderShare / span), tail: distance === 0 ? 1 : tailOf(soft, value, usual, spread), distance };
 }

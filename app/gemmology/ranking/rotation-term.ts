@@ -3,7 +3,7 @@ import type { SpeciesForm } from "../species/species-table.ts";
 import { birefringenceScore, differenceU } from "./birefringence-term.ts";
 import { blunderShares, defaultU, softness, span } from "./defaults.ts";
 import type { ReadingGrade, RefractiveEvidence, RotationCrystal } from "./evidence.ts";
-import { indexTerm, opaque, twoEdgesOnAggregateShare } from "./index-term.ts";
+import { indexTerm, opaque } from "./index-term.ts";
 import { numericScore } from "./numeric-score.ts";
 import { softUniformDensity } from "./soft-uniform.ts";
 import type { Score, Term } from "./term.ts";
@@ -43,13 +43,12 @@ function crystalOf({ indices, u = defaultU.edge, weight = 1 }: RotationCrystal, 
 
 function crystalScore(form: SpeciesForm, { low, high, beta, u, logWeight: _ }: Crystal, offset: number, quality: ReadingGrade): Score {
   const blunderShare = blunderShares[quality];
-  const numeric = { u, softness: softness.index, span: span.index, blunderShare };
   if (!form.lowIndex) {
     if (!form.spotIndex) return opaque;
-    const score = numericScore({ ...numeric, value: (low + high) / 2 - offset, range: form.spotIndex, usual: form.usual.spotIndex });
-    return { ...score, logLikelihood: score.logLikelihood + Math.log((high > low ? twoEdgesOnAggregateShare : 1) / span.birefringence) };
+    const score = numericScore({ value: (low + high) / 2 - offset, u, range: form.spotIndex, usual: form.usual.spotIndex, softness: softness.index, span: span.index, blunderShare });
+    return { ...score, logLikelihood: score.logLikelihood + birefringenceScore(form, { value: high - low, u: differenceU(u), quality }).logLikelihood };
   }
-  const index = numericScore({ ...numeric, value: low - offset, range: form.lowIndex, usual: form.usual.lowIndex });
+  const index = numericScore({ value: low - offset, u, range: form.lowIndex, usual: form.usual.lowIndex, softness: softness.index, span: span.index, blunderShare });
   const gap = birefringenceScore(form, { value: high - low, u: differenceU(u), quality });
   const worse = index.tail <= gap.tail ? index : gap;
   return { logLikelihood: index.logLikelihood + gap.logLikelihood + betaLog(form, { low, high, beta, u }, blunderShare), tail: worse.tail, distance: worse.distance };

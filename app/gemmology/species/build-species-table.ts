@@ -38,9 +38,12 @@ function nodeOf(node: NodeRow, rows: readonly SpeciesRow[]): SpeciesNode {
 /** Of the tests that can do harm, those that a bench offers at all. */
 const benchTests = ["contactLiquid", "immersion", "water", "heavyLiquid", "ultraviolet", "thermalProbe"] as const;
 
-/** Mixed crystals of a light and a heavy end member (Deer, Howie and Zussman, An Introduction to the Rock-Forming Minerals). */
+/**
+ * Mixed crystals of a light and a heavy end member, and what varies like them: beryl by its alkalis, zircon by its damage
+ * (Deer, Howie and Zussman, An Introduction to the Rock-Forming Minerals; Holland and Gottfried, Acta Cryst. 8 (1955) 291).
+ */
 const seriesGroups = new Set(["garnet", "tourmaline", "olivine", "pyroxene", "scapolite", "epidote"]);
-const seriesRows = new Set(["spinel-gahnospinel", "spinel-black", "spinel-blue", "feldspar-albite", "feldspar-oligoclase-sunstone", "feldspar-andesine", "feldspar-labradorite", "feldspar-bytownite"]);
+const seriesRows = new Set(["emerald", "aquamarine", "morganite", "beryl-yellow-green", "goshenite", "beryl-maxixe", "zircon-low", "zircon-intermediate", "spinel-gahnospinel", "spinel-black", "spinel-blue", "feldspar-albite", "feldspar-oligoclase-sunstone", "feldspar-andesine", "feldspar-labradorite", "feldspar-bytownite"]);
 
 const interval = (range: Range | null | undefined): Interval | null => (range ? [range.min, range.max] : null);
 

@@ -96,3 +96,11 @@ test("lanes of a candidate carry the species' range, what was measured and its u
 test("no readings rank nothing", () => {
   expect(rankReadings([], table)).toMatchObject({ hasEvidence: false, ruledOutCount: 0, index: null, density: null });
 });
+
+test("a poor reading goes to the ranking as one: it strains what it does not fit, and contradicts nothing", () => {
+  const poor = composed({ ...corundum.density, quality: "poor" });
+  expect(evidenceFromReadings([poor]).sg).toMatchObject({ quality: "poor" });
+  expect(evidenceFromReadings([poor, composed(corundum.density)]).sg).not.toHaveProperty("quality");
+  expect(evidenceFromReadings([composed({ ...corundum.refractometer, quality: "fair" })]).ri).toEqual([expect.objectContaining({ kind: "edges", quality: "fair" })]);
+  expect(contradictingReadings([{ ...poor, sequence: 1 }], table).size).toBe(0);
+});

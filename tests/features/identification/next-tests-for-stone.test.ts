@@ -41,3 +41,16 @@ test("a test that the client did not agree to is named and not recommended", asy
 test("without a reading there is nothing to go by", () => {
   expect(nextTestsForStone([], table, { weightText: "5.000", isMounted: false, mount: "loose", consents: [], instruments: [] })).toEqual({ recommended: [], vetoed: [] });
 });
+
+// Facet 1 of the rotation examples: quartz, or a biaxial twin with the middle index at 1.5504, as some iolite has it.
+test("a rotation run that one facet leaves open asks for the polariser, where that would tell the likely species apart", () => {
+  const crystals = [1.5443, 1.5504].map((beta) => ({ indices: { alpha: 1.5443, beta, gamma: 1.5534 }, u: 0.0012, weight: 1 }));
+  const run = (solutions: typeof crystals) => [{ sequence: 1, quality: "good" as const, values: [], strike: null, detail: { kind: "rotation" as const, light: "sodium" as const, rows: "", character: "undetermined" as const, sign: null, solutions } }];
+  const stone = { weightText: "2.000", isMounted: false, mount: "loose", consents: ["dryCloth"] as ConsentCode[], instruments: [] };
+  const named = (solutions: typeof crystals) => nextTestsForStone(run(solutions), table, stone, { prior: "even" }).vetoed.filter(({ testId }) => testId === "polariser" || testId === "secondFacet");
+  expect(named(crystals)).toEqual([
+    { testId: "polariser", name: "Polariser on the rotation run", because: "the client has not agreed to a contact liquid" },
+    { testId: "secondFacet", name: "Rotation on a second facet", because: "the client has not agreed to a contact liquid" },
+  ]);
+  expect(named(crystals.slice(0, 1))).toEqual([]);
+});

@@ -31,7 +31,36 @@ test("evidence of every kind is accepted", () => {
   ).toMatchObject({ ok: true });
 });
 
+test("what goes beyond version 1's first fields is accepted as well", () => {
+  expect(
+    parseEvidence({
+      ri: [
+        { kind: "interval", low: 1.5, high: 1.6, quality: "poor" },
+        { kind: "estimate", n: 2.41, u: 0.03, by: "brewster" },
+        { kind: "rotation", solutions: [{ indices: { alpha: 1.61, beta: 1.613, gamma: 1.62 }, u: 0.0006, weight: 0.5 }, { indices: { omega: 1.544, epsilon: 1.553 } }, { indices: { n: 1.52 } }] },
+      ],
+      sg: { value: 3, quality: "fair" },
+      heavyLiquids: [{ behaviour: "sinks", liquidSg: 2.65, uLiquidSg: 0.01 }],
+      absorption: [{ nm: 505, kind: "band", u: 1 }],
+    }),
+  ).toMatchObject({ ok: true });
+  expect(parseEvidence({ absorption: [], heavyLiquids: [] })).toMatchObject({ ok: true });
+});
+
 test.each([
+  [{ ri: [{ kind: "interval", low: 1.6, high: 1.5 }] }, "ri[0].low"],
+  [{ ri: [{ kind: "interval", low: 1.6 }] }, "ri[0].high"],
+  [{ ri: [{ kind: "estimate", n: 2.4, by: "brewster" }] }, "ri[0].u"],
+  [{ ri: [{ kind: "estimate", n: 2.4, u: 0.1, by: "guess" }] }, "ri[0].by"],
+  [{ ri: [{ kind: "rotation", solutions: [] }] }, "ri[0].solutions"],
+  [{ ri: [{ kind: "rotation", solutions: [{ indices: { alpha: 1.6 } }] }] }, "ri[0].solutions[0].indices"],
+  [{ ri: [{ kind: "rotation", solutions: [{ indices: { alpha: 1.62, beta: 1.61, gamma: 1.63 } }] }] }, "ri[0].solutions[0].indices.alpha"],
+  [{ ri: [{ kind: "rotation", solutions: [{ indices: { n: 1.6 }, weight: 0 }] }] }, "ri[0].solutions[0].weight"],
+  [{ ri: [{ kind: "rotation", solutions: [{ indices: { n: 1.6, omega: 1.5 } }] }] }, "ri[0].solutions[0].indices"],
+  [{ ri: [{ kind: "single", n: 1.6, quality: "superb" }] }, "ri[0].quality"],
+  [{ heavyLiquids: [{ behaviour: "hovers", liquidSg: 2.65 }] }, "heavyLiquids[0].behaviour"],
+  [{ heavyLiquids: [{ behaviour: "sinks", liquidSg: 13.6 }] }, "heavyLiquids[0].liquidSg"],
+  [{ absorption: [{ nm: 505, kind: "line", u: 0 }] }, "absorption[0].u"],
   [{ weight: 3 }, "weight"],
   [{ ri: [{ kind: "single", n: 0.5 }] }, "ri[0].n"],
   [{ ri: [{ kind: "edges", low: 1.77, high: 1.76, rotated: true }] }, "ri[0].low"],

@@ -1,27 +1,32 @@
 import { getFormProps, useForm, type SubmissionResult } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { data, Form, Link, redirect } from "react-router";
+import { CheckCard } from "#app/components/instruments/check-card.tsx";
+import { ChecksTable } from "#app/components/instruments/checks-table.tsx";
+import { CorrectionsCard } from "#app/components/instruments/corrections-card.tsx";
 import { InstrumentFields, type InstrumentFieldset } from "#app/components/instruments/instrument-fields.tsx";
 import { PageHeader } from "#app/components/layout/page-header.tsx";
 import { Button } from "#app/components/ui/button.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
-import { Chip, StateWord } from "#app/components/ui/chip.tsx";
+import { Caution } from "#app/components/ui/caution.tsx";
+import { Chip } from "#app/components/ui/chip.tsx";
 import { EmptyState } from "#app/components/ui/empty-state.tsx";
 import { fieldProps } from "#app/components/ui/field-props.ts";
 import { FormAlert } from "#app/components/ui/form-alert.tsx";
 import { SelectField } from "#app/components/ui/select-field.tsx";
-import { Cell, HeaderCell, Table } from "#app/components/ui/table.tsx";
 import { TextField } from "#app/components/ui/text-field.tsx";
-import { addDays, calendarDateIn, formatInstant } from "#app/domain/calendar-date.ts";
+import { addDays, calendarDateIn } from "#app/domain/calendar-date.ts";
+import { instrumentKindNames } from "#app/domain/instrument-kind.ts";
 import { isAllowed } from "#app/domain/permissions.ts";
 import { idFromShortRef } from "#app/domain/short-ref.ts";
-import { formatWeekdayDate } from "#app/domain/working-days.ts";
 import { editInstrument } from "#app/features/instruments/edit-instrument.server.ts";
+import { endCorrection } from "#app/features/instruments/end-correction.server.ts";
 import { getInstrument } from "#app/features/instruments/get-instrument.server.ts";
-import { editInstrumentForm, instrumentCheckForm } from "#app/features/instruments/instrument-forms.server.ts";
-import { instrumentKindNames, instrumentStatusNames } from "#app/features/instruments/instrument-kinds.ts";
+import { editInstrumentForm, endCorrectionForm, instrumentCheckForm } from "#app/features/instruments/instrument-forms.server.ts";
+import { instrumentStatusNames } from "#app/features/instruments/instrument-kinds.ts";
 import { recordInstrumentCheck } from "#app/features/instruments/record-instrument-check.server.ts";
 import { newRequestId } from "#app/features/new-request-id.server.ts";
+import { listReferenceMaterials } from "#app/features/reference-materials/list-reference-materials.server.ts";
 import { labContext } from "#app/web/contexts.server.ts";
 import { labContextFor } from "#app/web/lab-context-for.server.ts";
 import { formInvalid, formRefused } from "#app/web/form-result.server.ts";
@@ -38,15 +43,16 @@ function instrumentIdOf(ref: string) {
 export async function loader({ context, params }: Route.LoaderArgs) {
   const ctx = context.get(labContext);
   const instrument = await orResponse(getInstrument(ctx, instrumentIdOf(params.instrumentRef)));
+  const canManage = isAllowed(ctx.roles, "instruments.manage");
   const today = calendarDateIn(ctx.now, ctx.laboratory.timeZone);
-  return { instrument, timeZone: ctx.laboratory.timeZone, tomorrow: addDays(today, 1), inAWeek: addDays(today, 7), canManage: isAllowed(ctx.roles, "instruments.manage"), requestId: newRequestId() };
+  return { instrument, timeZone: ctx.laboratory.timeZone, tomorrow: addDays(today, 1), usualNextDueOn: addDays(today, instrument.usualDays), canManage, references: canManage ? await listReferenceMaterials(ctx, { forKind: instrument.kind }) : [], requestId: newRequestId() };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
   const ctx = labContextFor(context, "instruments.manage");
   const id = instrumentIdOf(params.instrumentRef);
   const formData = await request.formData();
-  const intent = formData.get("intent") === "check" ? ("check" as const) : ("edit" as const);
+  const intent = formData.get("intent") === "check" ? ("check" as const) : formData.get("intent") === "endCorrection" ? ("endCorrection" as const) : ("edit" as const);
   const answer = ({ data: { result }, init }: ReturnType<typeof formInvalid>) => data({ intent, result }, init ?? {});
   const done = async (text: string, tone: "done" | "caution" = "done") => redirect(`/lab/${params.labSlug}/instruments/${params.instrumentRef}`, { headers: { "Set-Cookie": await noticeHeader(text, tone) } });
   if (intent === "check") {
@@ -54,7 +60,17 @@ export async function action({ request, context, params }: Route.ActionArgs) {
     if (submission.status !== "success") return answer(formInvalid(submission));
     try {
       const { isPassed } = await recordInstrumentCheck(ctx, id, submission.value);
-      return done(isPassed ? "The check is passed." : "The check failed, so the instrument is out of service now.", isPassed ? "done" : "caution");
+      return done(isPassed ? "The check is passed." : "The check failed, so the instrument is out of service now. What was read on it since its last good check is on the recall list.", isPassed ? "done" : "caution");
+    } catch (error) {
+      return answer(formRefused(submission, error));
+    }
+  }
+  if (intent === "endCorrection") {
+    const submission = parseWithZod(formData, { schema: endCorrectionForm });
+    if (submission.status !== "success") return answer(formInvalid(submission));
+    try {
+      await endCorrection(ctx, id, submission.value);
+      return done("The correction has ended: readings are taken as the instrument shows them.");
     } catch (error) {
       return answer(formRefused(submission, error));
     }
@@ -73,12 +89,13 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: `${(loader
 
 export default function InstrumentRoute({ loaderData, actionData, params }: Route.ComponentProps) {
   const { instrument, timeZone, canManage } = loaderData;
+  const base = `/lab/${params.labSlug}/instruments`;
   const resultOf = (intent: string) => (actionData?.intent === intent ? actionData.result : undefined);
   return (
     <>
       <PageHeader
         eyebrow={
-          <Link to={`/lab/${params.labSlug}/instruments`} className="text-ink-3">
+          <Link to={base} className="text-ink-3">
             Instruments
           </Link>
         }
@@ -89,90 +106,37 @@ export default function InstrumentRoute({ loaderData, actionData, params }: Rout
       {instrument.statusReason ? <p className="mb-4 text-ink-2">{instrument.statusReason}</p> : null}
       <div className="grid gap-5 lg:grid-cols-[minmax(0,1fr)_26rem]">
         <div className="grid content-start gap-5">
+          {instrument.outOfCheck || instrument.isRecalling ? (
+            <Caution>
+              {instrument.outOfCheck ? `${instrument.outOfCheck} Readings on it are marked, and none of them carries “identified”. ` : ""}
+              {instrument.isRecalling ? (
+                <>
+                  Readings made before a failed check wait on the{" "}
+                  <Link to={`${base}/recall`} className="underline">
+                    recall list
+                  </Link>
+                  .
+                </>
+              ) : null}
+            </Caution>
+          ) : null}
           <Card title="Checks" id="checks">
             {instrument.checks.length === 0 ? (
               <EmptyState title="Never checked">{canManage ? "Read a reference whose value is known, and record it beside." : "A gemmologist records the first check."}</EmptyState>
             ) : (
-              <Table caption="Checks, latest first">
-                <thead>
-                  <tr>
-                    <HeaderCell>When</HeaderCell>
-                    <HeaderCell>Reference</HeaderCell>
-                    <HeaderCell isNumber>Shown</HeaderCell>
-                    <HeaderCell isNumber>Should be</HeaderCell>
-                    <HeaderCell>Outcome</HeaderCell>
-                    <HeaderCell>Next</HeaderCell>
-                    <HeaderCell>By</HeaderCell>
-                  </tr>
-                </thead>
-                <tbody>
-                  {instrument.checks.map((check) => (
-                    <tr key={check.id}>
-                      <Cell className="whitespace-nowrap">{formatInstant(check.checkedAt, timeZone)}</Cell>
-                      <Cell>
-                        {check.referenceMaterial}
-                        {check.tempC === null ? null : <span className="text-ink-3">, {check.tempC} °C</span>}
-                        {check.note ? <span className="block text-[12.5px] text-ink-3">{check.note}</span> : null}
-                      </Cell>
-                      <Cell isNumber>{check.readingText}</Cell>
-                      <Cell isNumber>
-                        {check.nominalValue} ± {check.limitValue}
-                      </Cell>
-                      <Cell>
-                        <StateWord tone={check.isPassed ? "green" : "red"}>{check.isPassed ? "Passed" : "Failed"}</StateWord>
-                      </Cell>
-                      <Cell className="whitespace-nowrap">{formatWeekdayDate(check.nextDueOn)}</Cell>
-                      <Cell>{check.checkedBy}</Cell>
-                    </tr>
-                  ))}
-                </tbody>
-              </Table>
+              <ChecksTable checks={instrument.checks} timeZone={timeZone} />
             )}
           </Card>
+          {instrument.unit ? <CorrectionsCard key={`correction-${instrument.corrections.length}`} {...{ instrument, timeZone, canManage }} workOutTo={`${base}/${instrument.ref}/correction`} lastResult={resultOf("endCorrection")} /> : null}
           {canManage ? <EditCard key={instrument.version} instrument={instrument} lastResult={resultOf("edit")} /> : null}
         </div>
-        {canManage ? <CheckCard key={instrument.checks.length} {...loaderData} lastResult={resultOf("check")} /> : null}
+        {canManage ? <CheckCard key={`check-${instrument.checks.length}`} {...loaderData} lastResult={resultOf("check")} /> : null}
       </div>
     </>
   );
 }
 
 type LoaderData = Route.ComponentProps["loaderData"];
-
-function CheckCard({ instrument, requestId, tomorrow, inAWeek, lastResult }: LoaderData & { lastResult: SubmissionResult<string[]> | undefined }) {
-  const last = instrument.checks[0];
-  const [form, fields] = useForm<Record<"requestId" | "referenceMaterial" | "nominal" | "reading" | "limit" | "tempC" | "nextDueOn" | "note", string>>({
-    id: "check",
-    lastResult,
-    // The same reference as last time is likely; what the instrument shows is never filled in for anybody.
-    defaultValue: { requestId, nextDueOn: inAWeek, referenceMaterial: last?.referenceMaterial, nominal: last ? String(last.nominalValue) : undefined, limit: last ? String(last.limitValue) : undefined },
-  });
-  const number = { inputMode: "decimal", isMono: true, autoComplete: "off", maxLength: 24 } as const;
-  return (
-    <Card title="Record a check" id="record-check" className="content-start self-start">
-      <CardBody>
-        <Form method="post" {...getFormProps(form)} className="grid gap-3.5">
-          <FormAlert errors={form.errors} id={form.errorId} />
-          <input type="hidden" name="intent" value="check" />
-          <input type="hidden" name={fields.requestId.name} defaultValue={fields.requestId.initialValue} key={fields.requestId.key} />
-          <TextField key={fields.referenceMaterial.key} {...fieldProps(fields.referenceMaterial)} label="Reference" hint="A check weight, a piece of quartz." autoComplete="off" maxLength={120} />
-          <div className="grid grid-cols-3 gap-3">
-            <TextField key={fields.nominal.key} {...fieldProps(fields.nominal)} {...number} label="Its value" />
-            <TextField key={fields.limit.key} {...fieldProps(fields.limit)} {...number} label="Limit ±" />
-            <TextField key={fields.reading.key} {...fieldProps(fields.reading)} {...number} label="Shown" />
-          </div>
-          <div className="grid grid-cols-2 gap-3">
-            <TextField key={fields.tempC.key} {...fieldProps(fields.tempC)} {...number} label="Temperature" unit="°C" isRequired={false} />
-            <TextField key={fields.nextDueOn.key} {...fieldProps(fields.nextDueOn)} label="Next check" type="date" min={tomorrow} />
-          </div>
-          <TextField key={fields.note.key} {...fieldProps(fields.note)} label="Note" isRequired={false} autoComplete="off" maxLength={500} />
-          <Button>Record the check</Button>
-          <p className="text-[12.5px] text-ink-3">A check beyond its limit takes the instrument out of service at once.</p>
-        </Form>
-      </CardBody>
-    </Card>
-  );
-}
 
 function EditCard({ instrument, lastResult }: { instrument: LoaderData["instrument"]; lastResult: SubmissionResult<string[]> | undefined }) {
   const text = (value: number | null) => (value === null ? "" : String(value));
@@ -185,6 +149,8 @@ function EditCard({ instrument, lastResult }: { instrument: LoaderData["instrume
       description: instrument.description,
       serial: instrument.serial,
       location: instrument.location,
+      scaleUnit: instrument.scaleUnit ?? "",
+      checkDays: text(instrument.checkDays),
       resolution: text(instrument.resolution),
       standardUncertainty: text(instrument.standardUncertainty),
       upperLimit: text(instrument.upperLimit),

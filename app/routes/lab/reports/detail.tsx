@@ -4,6 +4,7 @@ import { Form, Link, redirect } from "react-router";
 import { PageHeader } from "#app/components/layout/page-header.tsx";
 import { Button } from "#app/components/ui/button.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
+import { Caution } from "#app/components/ui/caution.tsx";
 import { Chip } from "#app/components/ui/chip.tsx";
 import { Confirm } from "#app/components/ui/confirm.tsx";
 import { Facts } from "#app/components/ui/facts.tsx";
@@ -82,6 +83,15 @@ export default function ReportRoute({ loaderData, actionData, params }: Route.Co
         actions={<Chip tone={reportTones[report.state]}>{reportStateNames[report.state]}</Chip>}
       />
       <FormAlert errors={form.errors} id={form.errorId} />
+      {report.recalled.length > 0 && report.state !== "withdrawn" ? (
+        <Caution className="mb-5">
+          {report.recalled.map(({ sequence, instrument, failedOn }) => `${instrument} failed its check with ${failedOn} after reading ${sequence}, which this report relies on.`).join(" ")} Until it is answered for on the{" "}
+          <Link to={`/lab/${params.labSlug}/instruments/recall`} className="underline">
+            recall list
+          </Link>
+          , do not rely on that reading: measure it again, say why it can stand, or withdraw the report.
+        </Caution>
+      ) : null}
       <div className="grid gap-5 lg:grid-cols-[minmax(0,1fr)_24rem]">
         <Card title="The document" note={report.sizeBytes ? `PDF, ${Math.ceil(report.sizeBytes / 1024)} KB` : undefined}>
           <CardBody>

@@ -80,6 +80,7 @@ export default function ReportsRoute({ loaderData, params }: Route.ComponentProp
                     <StateWord tone={report.pdfState === "failed" ? "red" : reportTones[report.state]}>
                       {report.pdfState === "failed" ? "PDF failed" : reportStateNames[report.state]}
                     </StateWord>
+                    {report.isRecalled ? <span className="block text-xs font-medium text-red">a reading is called back</span> : null}
                     {report.version > 1 ? <span className="ml-2 text-[13px] text-ink-3">version {report.version}</span> : null}
                   </Cell>
                 </tr>

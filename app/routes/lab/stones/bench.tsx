@@ -5,6 +5,7 @@ import { Link, redirect } from "react-router";
 import { uuidv7 } from "uuidv7";
 import { HiddenCandidatesCard, HideCandidatesForm } from "#app/components/bench/hide-candidates-card.tsx";
 import { RankingViewForm } from "#app/components/bench/ranking-view-form.tsx";
+import { BenchKeys } from "#app/components/bench/bench-keys.tsx";
 import { BenchQueries } from "#app/components/bench/bench-queries.tsx";
 import { keptPage } from "#app/components/bench/outbox/kept-page.ts";
 import { deedsOf, keepDeed } from "#app/components/bench/outbox/outbox.ts";
@@ -226,6 +227,8 @@ type ExaminationProps = Omit<LoaderData, "readings" | "ranking"> & { labSlug: st
 
 function Examination({ labSlug, person, isKept, readings, ranking, next, instruments, test, requestId, areCandidatesHidden, plan, view, spectrum, can, condition, stone, base, mapHref, lastResult }: ExaminationProps) {
   const examined = useMemo(() => readings.filter(({ isOfSecondCheck }) => !isOfSecondCheck), [readings]);
+  const canStrike = ({ isOwn, isOfSecondCheck }: (typeof readings)[number]) => !isOfSecondCheck && (can.strikeAll || (can.strikeOwn && isOwn));
+  const latestStrikeable = readings.findLast((reading) => !reading.strike && canStrike(reading));
   const struckCount = readings.filter(({ strike }) => strike).length;
   const hidden = areCandidatesHidden ? `&candidates=hidden${planSearch(plan)}` : "";
   const standing = useMemo(() => (view.standing ? examined.filter(({ sequence }) => view.standing!.includes(sequence)).map((reading) => ({ ...reading, strike: null })) : examined), [examined, view.standing]);
@@ -242,6 +245,7 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
   return (
     <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_24rem] xl:grid-cols-[minmax(0,1fr)_30.75rem]">
       <FollowStone base={base} mark={stone.version} />
+      <BenchKeys concludeTo={can.conclude ? `${base}/conclusion` : null} strikeTo={latestStrikeable ? `${base}/readings/${latestStrikeable.sequence}/strike` : null} />
       <div className="grid min-w-0 gap-5">
         {isKept ? <Caution>No line. This page is as it was last shown here; what you record waits on this device and is sent, in order, when the line is back.</Caution> : null}
         {can.record ? (
@@ -283,7 +287,7 @@ function Examination({ labSlug, person, isKept, readings, ranking, next, instrum
                 ? (sequence, reason) => keepDeed({ id: uuidv7(), kind: "strike", ...whose, stoneCode: stone.code, fields: [["reason", reason], ["named.sequence", String(sequence)]], madeAt: new Date().toISOString() })
                 : undefined
             }
-            canStrike={({ isOwn, isOfSecondCheck }) => !isOfSecondCheck && (can.strikeAll || (can.strikeOwn && isOwn))}
+            canStrike={canStrike}
           />
         </Card>
         {condition ? (

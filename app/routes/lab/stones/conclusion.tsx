@@ -1,6 +1,9 @@
 import { getFormProps, useForm } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
+import { useRef } from "react";
 import { Form, redirect, useNavigation } from "react-router";
+import { moveOnByEnter } from "#app/components/bench/move-on-by-enter.ts";
+import { useFirstField } from "#app/components/bench/use-first-field.ts";
 import { CandidatesCard } from "#app/components/bench/candidates-card.tsx";
 import { StoneHeader } from "#app/components/bench/stone-header.tsx";
 import { ConclusionCard } from "#app/components/conclusion/conclusion-card.tsx";
@@ -104,11 +107,13 @@ type ProposeProps = { form: NonNullable<LoaderData["form"]>; stone: LoaderData["
 
 function Propose({ form: { requestId, speciesNames, ranking, nature, readings, startFrom }, stone, lastResult }: ProposeProps) {
   const [form, fields] = useForm<ConclusionShape>({ id: "conclusion", lastResult, defaultValue: { ...startFrom.values, requestId } });
+  const element = useRef<HTMLFormElement>(null);
+  useFirstField(element);
   const navigation = useNavigation();
   return (
     <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_24rem] xl:grid-cols-[minmax(0,1fr)_30.75rem]">
       <Card title="Propose a conclusion" note="a person concludes; the ranking only proposes">
-        <Form method="post" {...getFormProps(form)}>
+        <Form method="post" {...getFormProps(form)} ref={element} onKeyDown={moveOnByEnter}>
           <input type="hidden" name={fields.requestId.name} defaultValue={fields.requestId.initialValue} key={fields.requestId.key} />
           {/* The newest version, not the one that was sent: whoever sends again after a conflict has looked at the readings. */}
           <input type="hidden" name="version" value={stone.version} />
@@ -133,6 +138,7 @@ function Propose({ form: { requestId, speciesNames, ranking, nature, readings, s
                     <span className="text-ink-3">no. {reading.sequence} </span>
                     {observationKindNames[reading.detail.kind]}{" "}
                     <span className={reading.quality !== "noResult" && isFigures(readingValueText(reading)) ? "font-mono" : ""}>{reading.quality === "noResult" ? `no reading: ${reading.noResultReason}` : readingValueText(reading)}</span> <span className="text-ink-2">{readingSeenText(reading)}</span>
+                    {reading.doubt ? <span className="block text-xs font-medium text-red">{reading.doubt.text} It cannot carry “identified”.</span> : null}
                   </li>
                 ))}
               </ul>

@@ -49,6 +49,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
     filters: { state: query.state ?? "", due: query.due ?? "", with: url.searchParams.get("with") ?? "", client: url.searchParams.get("client") ?? "", q: query.search },
     order: effectiveSort(query),
     canTakeIn: isAllowed(ctx.roles, "takeIn.create"),
+    canReadParcels: isAllowed(ctx.roles, "readings.read"),
     year: calendarDateIn(ctx.now, ctx.laboratory.timeZone).slice(0, 4),
   };
 }
@@ -56,7 +57,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
 export const meta: Route.MetaFunction = () => [{ title: "Logbook · Isogyre" }];
 
 export default function LogbookRoute({ loaderData, params }: Route.ComponentProps) {
-  const { stones, members, clientName, before, after, isFiltered, filters, order, canTakeIn, year } = loaderData;
+  const { stones, members, clientName, before, after, isFiltered, filters, order, canTakeIn, canReadParcels, year } = loaderData;
   const base = `/lab/${params.labSlug}`;
   const kept = new URLSearchParams(Object.entries(filters).filter(([, value]) => value !== ""));
   return (
@@ -69,6 +70,7 @@ export default function LogbookRoute({ loaderData, params }: Route.ComponentProp
             <a href={`${base}/stones.csv${kept.size > 0 ? `?${kept}` : ""}`} className="px-1 text-tint">
               Export CSV
             </a>
+            {canReadParcels ? <LinkButton to={`${base}/parcels`}>Parcels</LinkButton> : null}
             {canTakeIn ? (
               <LinkButton look="primary" to={`${base}/take-ins/new`}>
                 Take in a stone

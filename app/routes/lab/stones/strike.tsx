@@ -1,3 +1,6 @@
+import { useRef } from "react";
+import { moveOnByEnter } from "#app/components/bench/move-on-by-enter.ts";
+import { useFirstField } from "#app/components/bench/use-first-field.ts";
 import { getFormProps, useForm } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { data, Form, redirect } from "react-router";
@@ -45,6 +48,8 @@ export const meta: Route.MetaFunction = ({ params }) => [{ title: `Strike readin
 
 export default function StrikeRoute({ loaderData: { stone, reading, checkName }, actionData, params }: Route.ComponentProps) {
   const [form, fields] = useForm<{ reason: string }>({ id: "strike", lastResult: actionData?.result });
+  const element = useRef<HTMLFormElement>(null);
+  useFirstField(element);
   return (
     <>
       <StoneHeader stone={stone} labSlug={params.labSlug} checkName={checkName} title={`Strike reading ${reading.sequence}`} />
@@ -62,9 +67,9 @@ export default function StrikeRoute({ loaderData: { stone, reading, checkName },
               Struck {reading.strike.when} by {reading.strike.by}: {reading.strike.reason}
             </p>
           ) : (
-            <Form method="post" {...getFormProps(form)} className="grid gap-3.5">
+            <Form method="post" {...getFormProps(form)} ref={element} onKeyDown={moveOnByEnter} className="grid gap-3.5">
               <FormAlert errors={form.errors} id={form.errorId} />
-              <TextAreaField key={fields.reason.key} {...fieldProps(fields.reason)} label="Why it is struck" maxLength={500} hint="The reading stays in the record, crossed through, with this reason beside it. It no longer counts." />
+              <TextAreaField key={fields.reason.key} {...fieldProps(fields.reason)} label="Why it is struck" maxLength={500} hint="Ctrl and Enter strike it. The reading stays in the record, crossed through, with this reason beside it. It no longer counts." />
               <div className="flex flex-wrap gap-2.5">
                 <Button look="danger">Strike the reading</Button>
                 <LinkButton to={`/lab/${params.labSlug}/stones/${stone.code}`}>Leave it</LinkButton>

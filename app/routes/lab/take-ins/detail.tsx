@@ -47,7 +47,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
     takeIn: { ...takeIn, items: takeIn.items.map((item) => ({ ...item, requestIds: { photo: newRequestId(), handOver: newRequestId(), release: newRequestId() } })) },
     holders,
     timeZone: ctx.laboratory.timeZone,
-    can: { move: isAllowed(ctx.roles, "custody.record"), release: isAllowed(ctx.roles, "custody.release"), photograph: isAllowed(ctx.roles, "photos.add"), seesDeclared: isAllowed(ctx.roles, "declaredValue.read") },
+    can: { move: isAllowed(ctx.roles, "custody.record"), release: isAllowed(ctx.roles, "custody.release"), photograph: isAllowed(ctx.roles, "photos.add"), readParcels: isAllowed(ctx.roles, "readings.read"), seesDeclared: isAllowed(ctx.roles, "declaredValue.read") },
   };
 }
 
@@ -221,6 +221,13 @@ export default function TakeInDetailRoute({ loaderData, actionData, params }: Ro
                   ))}
                 </tbody>
               </Table>
+              {can.readParcels && item.mount === "loose" && item.stoneCount > 1 ? (
+                <p className="no-print border-t border-rule px-4.5 py-2.5 text-sm">
+                  <Link to={`${base}/parcels?item=${item.number}`} className="text-link">
+                    Read its {item.stoneCount} stones as a parcel, in one table
+                  </Link>
+                </p>
+              ) : null}
               <Custody events={item.custody} timeZone={timeZone} itemNumber={item.number} />
               {can.move && item.goodsState !== "released" ? (
                 <Panel title="Hand it over" isOpen={answerTo(item.number, "handOver") !== undefined}>
