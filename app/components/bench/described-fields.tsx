@@ -1,5 +1,4 @@
 import type { FieldMetadata } from "@conform-to/react";
-import { keepSpectrumView } from "#app/components/charts/spectrum/keep-spectrum-view.ts";
 import { CheckboxField, CheckboxGroupField } from "#app/components/ui/choice-field.tsx";
 import { checkboxProps, fieldProps } from "#app/components/ui/field-props.ts";
 import { SelectField } from "#app/components/ui/select-field.tsx";
@@ -49,7 +48,6 @@ function LinesField({ field, metadata, spectrum }: { field: TestField; metadata:
       maxLength={field.type === "words" ? field.most : undefined}
       placeholder={field.type === "words" ? field.example : undefined}
       around={spectrum}
-      onView={keepSpectrumView}
     />
   );
 }

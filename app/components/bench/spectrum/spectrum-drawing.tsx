@@ -1,5 +1,6 @@
 import { useId, useState, type RefObject } from "react";
 import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
+import { keepSpectrumView } from "#app/components/charts/spectrum/keep-spectrum-view.ts";
 import { DrawnSpectrum } from "#app/components/charts/spectrum/drawn-spectrum.tsx";
 import { spectrumLineWords } from "#app/domain/bench-tests/spectrum-line-words.ts";
 import { readSpectrumLines, type SpectrumLine } from "#app/domain/bench-tests/spectrum-lines.ts";
@@ -22,13 +23,12 @@ export type SpectrumDrawingProps = {
   maxLength: number;
   /** As this browser chose; see spectrum-view.server.ts. */
   view?: SpectrumView;
-  onView?: (view: SpectrumView) => void;
   /** Faintly above the spectrum; none where candidates are hidden. */
   candidates?: readonly AbsorbingSpecies[];
 };
 
 /** The lines and bands of a field of words, drawn: either changes the other. Without script it is a picture. */
-export function SpectrumDrawing({ field, text, id, maxLength, view: initialView = usualSpectrumView, onView, candidates = [] }: SpectrumDrawingProps) {
+export function SpectrumDrawing({ field, text, id, maxLength, view: initialView = usualSpectrumView, candidates = [] }: SpectrumDrawingProps) {
   const isLive = useIsHydrated();
   const helpId = useId();
   const [chosen, setChosen] = useState<{ at: number; text: string } | null>(null);
@@ -58,7 +58,7 @@ export function SpectrumDrawing({ field, text, id, maxLength, view: initialView 
   };
   const choose = (chosen: SpectrumView) => {
     setChosenView(chosen);
-    onView?.(chosen);
+    keepSpectrumView(chosen);
   };
 
   const inHand = selected === null ? undefined : lines[selected];

@@ -19,11 +19,10 @@ type SpectrumFieldProps = {
   maxLength?: number;
   placeholder?: string;
   around?: Partial<SpectrumAround>;
-  onView?: SpectrumDrawingProps["onView"];
 };
 
 /** Lines and bands of a spectrum: a field of words, which is what is sent, with the same drawn beneath. */
-export function SpectrumField({ id, name, label, hint, errors, defaultValue = "", maxLength = 500, placeholder, around, onView }: SpectrumFieldProps) {
+export function SpectrumField({ id, name, label, hint, errors, defaultValue = "", maxLength = 500, placeholder, around }: SpectrumFieldProps) {
   const field = useRef<HTMLTextAreaElement>(null);
   const [text, setText] = useState(defaultValue);
   // Somebody may have typed before script took over.
@@ -44,7 +43,7 @@ export function SpectrumField({ id, name, label, hint, errors, defaultValue = ""
         onInput={(event) => setText(event.currentTarget.value)}
       />
       <Suspense fallback={null}>
-        <SpectrumDrawing {...{ field, text, id, maxLength, onView }} view={around?.view} candidates={around?.candidates} />
+        <SpectrumDrawing {...{ field, text, id, maxLength }} view={around?.view} candidates={around?.candidates} />
       </Suspense>
     </div>
   );
