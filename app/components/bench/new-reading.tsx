@@ -39,7 +39,7 @@ type NewReadingProps = {
 };
 
 /** Forms with something to draw in take the whole width. */
-const wide: ReadonlySet<ObservationKind> = new Set(["rotation", "spectroscope"]);
+const wide: ReadonlySet<ObservationKind> = new Set(["rotation", "spectroscope", "magnification"]);
 
 /** The form of one test. It posts without script; with script it says at once what follows from the digits. */
 export function NewReading({ kind, instruments, requestId, lastResult, areCandidatesHidden, onDraft, spectrum }: NewReadingProps) {
@@ -107,7 +107,7 @@ export function NewReading({ kind, instruments, requestId, lastResult, areCandid
         </div>
         <Preview reading={preview} instrument={instrument} />
       </div>
-      <div className={`grid content-start gap-3 ${kind === "rotation" ? "md:col-span-2 md:grid-cols-2" : ""}`}>
+      <div className={`grid content-start gap-3 ${wide.has(kind) ? "md:col-span-2 md:grid-cols-2" : ""}`}>
         {fitting.length > 0 ? (
           <SelectField
             key={fields.instrument.key}

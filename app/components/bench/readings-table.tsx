@@ -51,6 +51,9 @@ export function ReadingsTable({ readings, strikeHref, canStrike, strikeHere, str
   );
 }
 
+/** Figures stay on one line, lists of them do not. */
+const longestLine = 26;
+
 function ReadingRow({ reading, strikeTo, strikeHere, isStrikeWaiting }: { reading: TimedReading; strikeTo: string | null; strikeHere: ReadingsTableProps["strikeHere"]; isStrikeWaiting: boolean }) {
   const { strike, quality, values } = reading;
   const isStruck = strike !== null;
@@ -71,10 +74,10 @@ function ReadingRow({ reading, strikeTo, strikeHere, isStrikeWaiting }: { readin
         {observationKindNames[reading.detail.kind]}
         <span className={small}>{[readingConditions(reading), reading.instrument?.name].filter(Boolean).join(" · ")}</span>
       </Cell>
-      <Cell isStruck={isStruck} className={quality !== "noResult" && isFigures(valueText) ? "font-mono whitespace-nowrap" : ""}>
+      <Cell isStruck={isStruck} className={quality !== "noResult" && isFigures(valueText) ? `font-mono ${valueText.length <= longestLine ? "whitespace-nowrap" : ""}` : ""}>
         {quality === "noResult" ? `no reading: ${reading.noResultReason}` : valueText}
       </Cell>
-      <Cell>
+      <Cell className="min-w-44">
         {strike ? (
           <>
             <span className="text-red">

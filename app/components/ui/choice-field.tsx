@@ -31,7 +31,7 @@ type GroupProps = Pick<FieldFrameProps, "id" | "label" | "hint" | "errors" | "cl
 };
 
 function ChoiceGroup({ id, label, options, hint, errors, className = "", isInline = false, hasColumns = false, boxOf }: Omit<GroupProps, "name"> & { boxOf: (value: string) => ReactNode }) {
-  const layout = isInline ? "flex flex-wrap gap-x-5" : hasColumns ? "grid grid-cols-[repeat(auto-fill,minmax(min(100%,15rem),1fr))] gap-x-6" : "grid";
+  const layout = isInline ? "flex flex-wrap gap-x-5" : hasColumns ? "grid grid-cols-[repeat(auto-fill,minmax(min(100%,13rem),1fr))] gap-x-6" : "grid";
   return (
     <fieldset className={`min-w-0 ${className}`} aria-describedby={describedBy({ id, hint, errors })["aria-describedby"]}>
       <legend className="mb-1 text-xs font-semibold text-ink-2">{label}</legend>
