@@ -5,7 +5,7 @@ export default defineConfig({
   test: {
     environment: "node",
     include: ["tests/**/*.test.{ts,tsx}"],
-    exclude: ["tests/journeys/**", "tests/bars/**", "node_modules/**"],
+    exclude: ["tests/journeys/**", "tests/bars/**", "tests/bench-web/**", "node_modules/**"],
     globalSetup: ["tests/setup/global-setup.ts"],
     setupFiles: ["tests/setup/fail-on-console-error.ts"],
     testTimeout: 20_000,
