@@ -64,7 +64,8 @@ test("P13: from a keystroke to the painted list of candidates", async () => {
   const { lists, interactions } = await watched(page);
   console.info(`list painted: ${told(lists)}; interactions of 16 ms and more: ${interactions.length}`);
   expect(lists.length).toBeGreaterThan(60);
-  expect(percentile(lists, 0.95)).toBeLessThanOrEqual(50);
+  // quality bar P13
+  expect.soft(percentile(lists, 0.95)).toBeLessThanOrEqual(16);
 
   const session = await page.context().newCDPSession(page);
   await session.send("Emulation.setCPUThrottlingRate", { rate: 4 });
@@ -72,11 +73,11 @@ test("P13: from a keystroke to the painted list of candidates", async () => {
   await typeEdges(page, 100);
   const slow = await watched(page);
   console.info(`with a processor four times slower, to the next paint: ${told(slow.interactions)}`);
-  expect(percentile(slow.interactions, 0.98)).toBeLessThanOrEqual(100);
+  expect(percentile(slow.interactions, 0.98)).toBeLessThanOrEqual(50);
 });
 
 test("a session with 200 readings on the stone stays under 100 ms from interaction to paint", async () => {
-  const page = await open("MQ-26-0024-1");
+  const page = await open("MQ-26-0018-1");
   const form = { kind: "weight", quality: "good", weightCt: "1.101" };
   const instrument = await page.evaluate(async () => {
     const html = await (await fetch(`${location.pathname}?test=weight`)).text();
@@ -129,7 +130,7 @@ test(`E6: 200 readings typed without the line, the tab closed, are all there onc
       await page.waitForFunction(() => document.activeElement?.matches("input[name=n]"));
       await page.keyboard.type(`1.${String(400 + at)}`.slice(0, 4) + (at % 10));
       await page.keyboard.press("Enter");
-      await waiting.nth(at).waitFor();
+      await waiting.nth(at).getByText(/^1\.\d+/).waitFor();
       await page.waitForFunction(() => document.activeElement === document.body);
     }
     console.info(`200 readings typed without the line in ${((performance.now() - startedAt) / 1000).toFixed(1)} s`);

@@ -1,3 +1,5 @@
+import { useState } from "react";
+import { useIsHydrated } from "#app/components/layout/use-is-hydrated.ts";
 import { Card } from "#app/components/ui/card.tsx";
 import { Caution } from "#app/components/ui/caution.tsx";
 import { Chip } from "#app/components/ui/chip.tsx";
@@ -57,6 +59,9 @@ function CandidateItem({ candidate: { name, probability, lanes } }: { candidate:
 const mostShown = 3;
 
 function RuledOutList({ ranking: { ruledOut, ruledOutCount } }: { ranking: BenchRanking }) {
+  // Long, and seldom read: with script it is made when it is opened, not with every digit.
+  const [isOpen, setIsOpen] = useState(false);
+  const isHydrated = useIsHydrated();
   if (ruledOutCount === 0) return null;
   const reason = ({ name, because, readings }: (typeof ruledOut)[number]) => (
     <>
@@ -73,14 +78,16 @@ function RuledOutList({ ranking: { ruledOut, ruledOutCount } }: { ranking: Bench
         ))}
       </p>
       {ruledOut.length > mostShown ? (
-        <details>
+        <details onToggle={({ currentTarget }) => setIsOpen(currentTarget.open)}>
           <summary className="text-link inline-flex min-h-6 items-center">Reasons for the others</summary>
-          <ul className="mt-1 grid max-h-72 gap-0.5 overflow-y-auto text-xs">
-            {ruledOut.slice(mostShown).map((one) => (
-              <li key={one.speciesId}>{reason(one)}</li>
-            ))}
-            {ruledOutCount > ruledOut.length ? <li>{ruledOutCount - ruledOut.length} less likely ones are ruled out as well.</li> : null}
-          </ul>
+          {isOpen || !isHydrated ? (
+            <ul className="mt-1 grid max-h-72 gap-0.5 overflow-y-auto text-xs">
+              {ruledOut.slice(mostShown).map((one) => (
+                <li key={one.speciesId}>{reason(one)}</li>
+              ))}
+              {ruledOutCount > ruledOut.length ? <li>{ruledOutCount - ruledOut.length} less likely ones are ruled out as well.</li> : null}
+            </ul>
+          ) : null}
         </details>
       ) : null}
     </>

@@ -1,5 +1,5 @@
 import { useQuery } from "@tanstack/react-query";
-import { lazy, Suspense, useDeferredValue, useMemo } from "react";
+import { lazy, memo, Suspense, useDeferredValue, useMemo } from "react";
 import type { MapSpecies } from "#app/components/charts/index-density-map.tsx";
 import { Card, CardBody } from "#app/components/ui/card.tsx";
 import type { BenchRanking } from "#app/features/identification/bench-ranking.ts";
@@ -46,16 +46,18 @@ export function LiveCandidates({ saved, readings, typed, compare, prior }: LiveC
     if (!live) return saved;
     return live.rankReadings(latest ? [...readings, { ...latest, sequence: null }] : readings, live.table, { compare, prior });
   }, [live, saved, readings, latest, compare, prior]);
+  // Two hundred boxes may come a moment after the list.
+  const mapped = useDeferredValue(ranking);
   return (
     <>
       <CandidatesCard ranking={ranking} prior={prior} isWithTyped={Boolean(live && latest && live.saysAnything(latest))} />
       <CompareCandidatesCard compared={ranking.compared} />
-      {live && (ranking.index || ranking.density) ? <StandingMap table={live.table} ranking={ranking} /> : null}
+      {live && (mapped.index || mapped.density) ? <StandingMap table={live.table} ranking={mapped} /> : null}
     </>
   );
 }
 
-function StandingMap({ table, ranking }: { table: SpeciesTable; ranking: BenchRanking }) {
+const StandingMap = memo(function StandingMap({ table, ranking }: { table: SpeciesTable; ranking: BenchRanking }) {
   const species = useMemo(() => mapSpecies(table, ranking), [table, ranking]);
   const { index, density } = ranking;
   return (
@@ -67,7 +69,7 @@ function StandingMap({ table, ranking }: { table: SpeciesTable; ranking: BenchRa
       </CardBody>
     </Card>
   );
-}
+});
 
 function mapSpecies(table: SpeciesTable, { candidates, ruledOut }: BenchRanking): MapSpecies[] {
   const shown = new Set(candidates.map(({ speciesId }) => speciesId));

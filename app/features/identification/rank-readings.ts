@@ -56,14 +56,25 @@ type Contradiction = Readonly<{ sequence: number | null; because: string }>;
 export function contradictingReadings(readings: readonly NumberedReading[], table: SpeciesTable): ReadonlyMap<string, readonly Contradiction[]> {
   const against = new Map<string, Contradiction[]>();
   for (const reading of readings) {
-    const alone = evidenceFromReadings([reading]);
-    if (Object.keys(alone).length === 0) continue;
-    const { candidates, contradicted } = rankSpecies(alone, table);
-    const byItself = [...contradicted, ...candidates.flatMap(({ speciesId, evidence }) => evidence.filter(({ verdict }) => verdict === "contradicts").slice(0, 1).map(({ because }) => ({ speciesId, because })))];
-    for (const { speciesId, because } of byItself) {
-      against.set(speciesId, [...(against.get(speciesId) ?? []), { sequence: reading.sequence, because }]);
-    }
+    for (const { speciesId, because } of contradictedBy(reading, table)) against.set(speciesId, [...(against.get(speciesId) ?? []), { sequence: reading.sequence, because }]);
   }
+  return against;
+}
+
+type Against = ReadonlyArray<Readonly<{ speciesId: string; because: string }>>;
+/** A reading never changes, so what it says by itself is worked out once; at the bench only the typed one is new. */
+const workedOut = new WeakMap<NumberedReading, { table: SpeciesTable; against: Against }>();
+
+function contradictedBy(reading: NumberedReading, table: SpeciesTable): Against {
+  const known = workedOut.get(reading);
+  if (known?.table === table) return known.against;
+  const alone = evidenceFromReadings([reading]);
+  let against: Against = [];
+  if (Object.keys(alone).length > 0) {
+    const { candidates, contradicted } = rankSpecies(alone, table);
+    against = [...contradicted, ...candidates.flatMap(({ speciesId, evidence }) => evidence.filter(({ verdict }) => verdict === "contradicts").slice(0, 1).map(({ because }) => ({ speciesId, because })))];
+  }
+  workedOut.set(reading, { table, against });
   return against;
 }
 
