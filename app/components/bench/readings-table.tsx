@@ -77,7 +77,7 @@ function ReadingRow({ reading, strikeTo, strikeHere, isStrikeWaiting }: { readin
       <Cell isStruck={isStruck} className={quality !== "noResult" && isFigures(valueText) ? `font-mono ${valueText.length <= longestLine ? "whitespace-nowrap" : ""}` : ""}>
         {quality === "noResult" ? `no reading: ${reading.noResultReason}` : valueText}
       </Cell>
-      <Cell className="min-w-44">
+      <Cell className="min-w-28">
         {strike ? (
           <>
             <span className="text-red">
