@@ -1,13 +1,13 @@
+import { isDeepStrictEqual } from "node:util";
 import { and, eq, isNull, sql } from "drizzle-orm";
 import { inTransaction } from "#app/db/in-transaction.server.ts";
 import { instruments, itemConsents, items, observations, observationValues, secondChecks, stones } from "#app/db/schema/index.ts";
 import { AppError } from "#app/domain/app-error.ts";
 import { calendarDateIn } from "#app/domain/calendar-date.ts";
 import { decimalPlaces } from "#app/domain/decimal.ts";
-import { impliedIndex } from "#app/domain/implied-index.ts";
 import type { Id, InstrumentId, ObservationId, SecondCheckId } from "#app/domain/ids.ts";
 import type { ConsentCode } from "#app/domain/consent-code.ts";
-import { aboutTest, consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind } from "#app/domain/reading.ts";
+import { aboutTest, consentNeededFor, instrumentKindFor, observationKindNames, type ObservationKind, type ReadingDetail, type ReadingQuality } from "#app/domain/reading.ts";
 import { examinationStateNames } from "#app/domain/stone-state.ts";
 import { recordAudit } from "#app/features/audit/record-audit.server.ts";
 import { outOfCheck } from "#app/features/instruments/check-standing.ts";
@@ -56,7 +56,7 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
     if (!stone) throw new AppError("not_found", "There is no such stone.");
 
     const [repeat] = await tx
-      .select({ id: observations.id, sequence: observations.sequence, stoneId: observations.stoneId, observerId: observations.observerId, kind: observations.kind })
+      .select({ id: observations.id, sequence: observations.sequence, stoneId: observations.stoneId, observerId: observations.observerId, detail: observations.detail, quality: observations.quality })
       .from(observations)
       .where(and(eq(observations.laboratoryId, laboratoryId), eq(observations.requestId, requestId)));
     if (repeat) {
@@ -105,20 +105,21 @@ export async function recordReading(ctx: LabContext, input: RecordReading): Prom
   });
 }
 
-/** The same form once more, not another reading under its id: by its test and the digits as typed. */
-async function saysTheSame({ db, laboratoryId }: LabContext, { id, kind }: { id: ObservationId; kind: ObservationKind }, draft: ReadingDraft): Promise<boolean> {
-  if (kind !== draft.kind) return false;
-  const kept = await db
+/** The same form once more, not another reading under its id: by what was seen and the digits as typed. */
+async function saysTheSame({ db, laboratoryId }: LabContext, kept: { id: ObservationId; detail: ReadingDetail; quality: ReadingQuality }, draft: ReadingDraft): Promise<boolean> {
+  const { reading } = composeAnyReading(draft, null);
+  if (!reading || reading.quality !== kept.quality || !isDeepStrictEqual(seenIn(reading.detail), seenIn(kept.detail))) return false;
+  const digits = await db
     .select({ typedText: observationValues.typedText })
     .from(observationValues)
-    .where(and(eq(observationValues.laboratoryId, laboratoryId), eq(observationValues.observationId, id), isNull(observationValues.formula)));
-  const typed = new Set(textsOf(draft).flatMap((text) => [text.trim(), impliedIndex(text.trim())]));
-  return kept.every(({ typedText }) => typed.has(typedText));
+    .where(and(eq(observationValues.laboratoryId, laboratoryId), eq(observationValues.observationId, kept.id), isNull(observationValues.formula)));
+  const typed = reading.values.filter(({ formula }) => formula === null).map(({ typedText }) => typedText);
+  return isDeepStrictEqual(digits.map(({ typedText }) => typedText).sort(), typed.sort());
 }
 
-function textsOf(value: unknown): string[] {
-  if (typeof value === "string") return [value];
-  return value !== null && typeof value === "object" ? Object.values(value).flatMap(textsOf) : [];
+/** A run's crystals follow from its lines and its instrument. */
+function seenIn(detail: ReadingDetail): object {
+  return detail.kind === "rotation" ? { kind: detail.kind, light: detail.light, rows: detail.rows } : detail;
 }
 
 /** A correction went into its figures, or into the edges that its fit was made from. */

@@ -32,6 +32,11 @@ test("another reading under the id of one that is kept is refused, not taken for
   await recordReading(ctx, first);
   expect(await recordReading(ctx, first)).toMatchObject({ sequence: 1 });
   await expect(recordReading(ctx, { ...first, draft: { ...corundum.weight, weightCt: "2.150" } })).rejects.toMatchObject({ code: "conflict" });
+  // A test told by words alone has no digits to tell it by.
+  const seen = { ...aReading(bench, corundum.free), draft: { kind: "colourFilter", quality: "good", typed: { appearsAs: "red", light: "daylight" } } } as const;
+  expect(await recordReading(ctx, seen)).toMatchObject({ sequence: 2 });
+  expect(await recordReading(ctx, seen)).toMatchObject({ sequence: 2 });
+  await expect(recordReading(ctx, { ...seen, draft: { ...seen.draft, typed: { appearsAs: "green", light: "daylight" } } })).rejects.toMatchObject({ code: "conflict" });
   await expect(recordReading(ctx, { ...aReading(bench, corundum.refractometer), requestId: first.requestId })).rejects.toMatchObject({ code: "conflict" });
 });
 
